@@ -1,0 +1,18 @@
+import type {} from 'nuxt-security'
+import { fileURLToPath } from 'node:url'
+
+const here = (path: string) => fileURLToPath(new URL(path, import.meta.url))
+
+export default defineNuxtConfig({
+  modules: ['@nuxt/eslint', '@nuxtjs/tailwindcss', '@pinia/nuxt', 'nuxt-auth-utils', 'nuxt-security'],
+  // Rooms of shared/ and server/ are imported by name, so that arrows stay visible.
+  imports: { scan: true },
+  devtools: { enabled: false },
+  css: ['~/assets/css/tokens.css'],
+  alias: { '#shared': here('./shared'), '#server': here('./server') },
+  compatibilityDate: '2026-11-01',
+  typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
+  telemetry: false,
+  eslint: { config: { stylistic: true } },
+  tailwindcss: { cssPath: '~/assets/css/tailwind.css', viewer: false },
+})
