@@ -1,0 +1,6 @@
+export * from './people'
+export * from './shelf'
+export * from './blank'
+export * from './scheme'
+export * from './bench'
+export * from './cards'
