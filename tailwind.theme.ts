@@ -9,7 +9,7 @@ export const extend = {
   colors: {
     here: {
       'DEFAULT': 'var(--here)', 'ink': 'var(--here-ink)', 'quiet': 'var(--here-ink-2)', 'line': 'var(--here-line)',
-      'fill': 'var(--here-fill)', 'hover': 'var(--here-hover)', 'on': 'var(--here-on)', 'on-ink': 'var(--here-on-ink)', 'next': 'var(--here-next)',
+      'fill': 'var(--here-fill)', 'hover': 'var(--here-hover)', 'on': 'var(--here-on)', 'on-ink': 'var(--here-on-ink)', 'next': 'var(--here-next)', 'hair': 'var(--here-hair)',
     },
     back: { DEFAULT: 'var(--back)', raised: 'var(--back-raised)', ink: 'var(--back-ink)', quiet: 'var(--back-ink-2)', line: 'var(--back-line)' },
     flank: { DEFAULT: 'var(--flank)', lit: 'var(--flank-lit)', ink: 'var(--flank-ink)', quiet: 'var(--flank-ink-2)', line: 'var(--flank-line)' },
@@ -18,7 +18,8 @@ export const extend = {
     well: 'var(--well)',
     chosen: { DEFAULT: 'var(--chosen)', ink: 'var(--chosen-ink)' },
     next: { DEFAULT: 'var(--next)', press: 'var(--next-press)', ink: 'var(--next-ink)', edge: 'var(--next-edge)' },
-    caution: { DEFAULT: 'var(--caution)', ink: 'var(--caution-ink)', quiet: 'var(--caution-ink-2)', frame: 'var(--ghs)', paper: 'var(--ghs-paper)' },
+    caution: { DEFAULT: 'var(--caution)', ink: 'var(--caution-ink)', quiet: 'var(--caution-ink-2)', frame: 'var(--ghs)', paper: 'var(--ghs-paper)', symbol: 'var(--ghs-ink)' },
+    scrim: 'var(--scrim)',
   },
   fontFamily: { head: 'var(--font-head)', text: 'var(--font-text)', fig: 'var(--font-fig)' },
   fontSize: {
@@ -29,7 +30,7 @@ export const extend = {
   },
   spacing: {
     s1: 'var(--s1)', s2: 'var(--s2)', s3: 'var(--s3)', s4: 'var(--s4)', s5: 'var(--s5)', s6: 'var(--s6)', s7: 'var(--s7)', s8: 'var(--s8)',
-    fine: 'var(--target-fine)', target: 'var(--target)', bench: '56px', go: '72px',
+    fine: 'var(--target-fine)', target: 'var(--target)', bench: '56px', go: '72px', margin: 'var(--margin)',
   },
   minHeight: { fine: 'var(--target-fine)', target: 'var(--target)', bench: '56px', go: '72px' },
   minWidth: { fine: 'var(--target-fine)', target: 'var(--target)', bench: '56px' },
