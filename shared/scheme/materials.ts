@@ -15,7 +15,7 @@ export const StoredOptics = z.object({
     oxide: z.enum(['anatase', 'rutile', 'hematite', 'aluminium']), thickness: z.number(), flakesPerPass: z.number(), sigma: z.number(), edge: z.number(),
   }).optional(),
   fluorescent: z.object({ peak: z.number(), width: z.number(), quantumYield: z.number() }).optional(),
-  how: z.string(),
+  how: z.enum(['two-swatches', 'masstone-hide', 'dye-over-white', 'interference', 'metallic', 'clear']),
   clipped: z.boolean(),
 })
 export type StoredOptics = z.output<typeof StoredOptics>
