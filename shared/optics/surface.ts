@@ -1,0 +1,45 @@
+import type { Spectrum } from './bands'
+
+/** How the outermost film ends: its feel is its veil of scattered surface light. */
+export type Finish = 'matt' | 'satin' | 'gloss'
+
+/** The finishes, dullest first. */
+export const FINISHES = ['matt', 'satin', 'gloss'] as const
+
+/** Light lost at the outside of the surface, and at its inside. @source J. L. Saunderson, J. Opt. Soc. Am. 32 (1942) 727–736 */
+export const SURFACE_OUTSIDE = 0.04
+/** Share of light inside the film that its surface sends back down. */
+export const SURFACE_INSIDE = 0.60
+
+/** Surface light scattered into the eye, as a reflectance. Gloss is read off the highlight. Common practice. */
+export const VEIL: Readonly<Record<Finish, number>> = { matt: 0.04, satin: 0.015, gloss: 0 }
+
+const THROUGH = (1 - SURFACE_OUTSIDE) * (1 - SURFACE_INSIDE)
+
+/**
+ * What the eye or an instrument sees of a reflectance inside the film.
+ *
+ * Paint and epoxy bend light alike, so only the top surface counts. The loosely packed, porous top of very matt paint is not
+ * modelled: it looks a little paler still.
+ */
+export function measuredFromInternal(internal: number, finish: Finish): number {
+  return VEIL[finish] + THROUGH * internal / (1 - SURFACE_INSIDE * internal)
+}
+
+/** The reflectance inside the film behind a measured one; undoes `measuredFromInternal`. Below the veil it is negative. */
+export function internalFromMeasured(measured: number, finish: Finish): number {
+  const withoutVeil = measured - VEIL[finish]
+  return withoutVeil / (THROUGH + SURFACE_INSIDE * withoutVeil)
+}
+
+/** `measuredFromInternal` for a whole spectrum; `out` may be the input. */
+export function measuredSpectrum(internal: Spectrum, finish: Finish, out: Float64Array = new Float64Array(internal.length)): Float64Array {
+  for (let i = 0; i < internal.length; i++) out[i] = measuredFromInternal(internal[i]!, finish)
+  return out
+}
+
+/** `internalFromMeasured` for a whole spectrum, held within 0…1. */
+export function internalSpectrum(measured: Spectrum, finish: Finish, out: Float64Array = new Float64Array(measured.length)): Float64Array {
+  for (let i = 0; i < measured.length; i++) out[i] = Math.min(1, Math.max(0, internalFromMeasured(measured[i]!, finish)))
+  return out
+}

@@ -1,0 +1,38 @@
+import { assertBands, BANDS_16, BANDS_36, type Spectrum } from './bands'
+import optimised from './data/optimised-bands.json'
+import { LINEAR_SRGB_FROM_XYZ } from './screen-colour'
+
+/**
+ * Reads a spectrum of 36 bands (K, S or a reflectance) at the 16 bands of pictures, on the straight line between neighbours.
+ *
+ * @throws {RangeError} when there are not 36 bands
+ */
+export function toPictureBands(exact: Spectrum, out: Float64Array = new Float64Array(16)): Float64Array {
+  assertBands('toPictureBands', BANDS_36.length, exact)
+  for (let i = 0; i < 16; i++) {
+    const place = (BANDS_16[i]! - 380) / 10
+    const below = Math.floor(place)
+    out[i] = exact[below]! + (place - below) * (exact[below + 1]! - exact[below]!)
+  }
+  return out
+}
+
+/** X, Y and Z of each picture band under D65: 16 weights for X, then for Y, then for Z. */
+export const PICTURE_XYZ_WEIGHTS: Readonly<Float64Array> = Float64Array.from([...optimised.x, ...optimised.y, ...optimised.z])
+
+/**
+ * Linear sRGB of each picture band under D65: 16 weights for red, then green, then blue. A white of 1 in every band is 1, 1, 1.
+ */
+export const PICTURE_LINEAR_WEIGHTS: Readonly<Float64Array> = linearWeights()
+
+function linearWeights(): Float64Array {
+  const weights = new Float64Array(48)
+  for (let channel = 0; channel < 3; channel++) {
+    for (let band = 0; band < 16; band++) {
+      for (let c = 0; c < 3; c++) {
+        weights[channel * 16 + band]! += LINEAR_SRGB_FROM_XYZ[channel * 3 + c]! * PICTURE_XYZ_WEIGHTS[c * 16 + band]!
+      }
+    }
+  }
+  return weights
+}
