@@ -20,10 +20,20 @@ export default defineNuxtConfig({
     '@fontsource-variable/atkinson-hyperlegible-mono/wght.css',
     '~/assets/css/tokens.css',
   ],
+  // The sealed cookie's password comes from the settings at start; without a value here the module would write one into .env.
+  runtimeConfig: { session: { password: 'set from SESSION_PASSWORD when the server starts' } },
   alias: { '#shared': here('./shared'), '#server': here('./server') },
   compatibilityDate: '2026-11-01',
+  nitro: { plugins: ['~~/server/boot/runtime-config.ts'] },
   typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
   telemetry: false,
+  hooks: {
+    // The session is answered by our own route; the module's routes would be a second door.
+    'nitro:config': (nitro) => {
+      nitro.handlers = nitro.handlers?.filter(handler => handler.route !== '/api/_auth/session')
+    },
+  },
+  auth: { loadStrategy: 'none' },
   eslint: { config: { stylistic: true } },
   tailwindcss: { cssPath: '~/assets/css/tailwind.css', viewer: false },
 })
