@@ -1,0 +1,52 @@
+import { defineStore } from 'pinia'
+import { type ShallowRef, shallowReactive, shallowRef } from 'vue'
+import type { DraftKeeper, SaveState } from '~/composables/scheme/draft-keeper'
+import { type History, startHistory } from '#shared/scheme/history'
+import type { SchemeBody } from '#shared/scheme/body'
+import type { Materials } from '#shared/scheme/materials'
+import type { SchemeView } from '#shared/scheme/scheme-view'
+
+/** Two versions of a draft, of which the painter chooses one. */
+export interface DraftConflict {
+  mine: SchemeBody
+  theirs: SchemeView
+}
+
+/** A draft that is being worked on, with what can be undone; outlives the page it is shown on. */
+export interface OpenDraft {
+  history: ShallowRef<History>
+  materials: ShallowRef<Materials>
+  saveState: ShallowRef<SaveState>
+  conflict: ShallowRef<DraftConflict | null>
+  /** Saves it; null on the server and until the page has come alive. */
+  keeper: DraftKeeper | null
+}
+
+/** A draft as the server gave it, with nothing to undo. */
+export function openDraft(scheme: SchemeView): OpenDraft {
+  return {
+    history: shallowRef(startHistory(scheme.draft)),
+    materials: shallowRef(scheme.materials),
+    saveState: shallowRef<SaveState>({ is: 'saved', at: scheme.savedAt }),
+    conflict: shallowRef<DraftConflict | null>(null),
+    keeper: null,
+  }
+}
+
+/** Open drafts by scheme. Lives in the browser only: a server answering many people must hold none. */
+export const useSchemeDraftStore = defineStore('scheme-draft', () => {
+  const drafts = shallowReactive(new Map<string, OpenDraft>())
+
+  return {
+    find: (schemeId: string) => drafts.get(schemeId),
+    put: (schemeId: string, draft: OpenDraft) => {
+      drafts.set(schemeId, draft)
+    },
+    drop: (schemeId: string) => {
+      drafts.get(schemeId)?.keeper?.stop()
+      drafts.delete(schemeId)
+    },
+    /** Whether any draft holds work the server does not have. */
+    hasUnsaved: () => [...drafts.values()].some(draft => draft.keeper?.isUnsaved() ?? false),
+  }
+})
