@@ -2,7 +2,7 @@ import type { PreparedBlank } from './prepared-blank'
 import { newSection, type Section } from './profile'
 import { newSurfacePoint, surfacePoint } from './surface-point'
 import {
-  fillSurfaceRow, newSurfaceRow, rowU, rowV, shareOfV, TABLE_COLUMNS, TABLE_ROWS, type SurfaceRow, type SurfaceTable,
+  fillSurfaceRow, hermite, newSurfaceRow, rowU, rowV, shareOfV, TABLE_COLUMNS, TABLE_ROWS, type SurfaceRow, type SurfaceTable,
 } from './surface-table'
 
 /** Which flank: 1 the left, which is shown nose left; -1 the right. */
@@ -54,16 +54,10 @@ export function tOfU(table: SurfaceTable, u: number): number {
     else high = middle
   }
   const d = 1 / (TABLE_ROWS - 1)
-  const row = newShare(table)
-  return bisect(low * d, high * d, t => row(t) < wanted)
-}
-
-function newShare(table: SurfaceTable): (t: number) => number {
-  const row = newSurfaceRow()
-  return (t) => {
-    fillSurfaceRow(table, t, row)
-    return row.u
-  }
+  const { u: shares, ut } = table
+  const share = bisect(0, 1, f =>
+    hermite(shares[low] ?? 0, ut[low] ?? 0, shares[high] ?? 1, ut[high] ?? 0, d, f) < wanted)
+  return (low + share) * d
 }
 
 /** Girth angle, 0 to π, at which a section has an arc length V. */

@@ -1,0 +1,139 @@
+import { jointDip, jointPlace, jointShade, jointTilt, type JointPlace } from './joint-place'
+import type { PreparedBlank } from './prepared-blank'
+import { reliefOf, reliefPlace, type Relief, type ReliefPlace } from './relief'
+import { newSurfacePoint, surfacePoint, type SurfacePoint } from './surface-point'
+import { fillSurfaceRow, newSurfaceRow, rowU, rowV, shareOfV, TABLE_COLUMNS, type SurfaceRow } from './surface-table'
+import { viewTurn, type View, type ViewTurn } from './view'
+import { fillViewColumn, newViewColumn, phiAtHeight, type ViewColumn } from './view-column'
+import { PART_BODY, PART_GAP, type ViewSamples } from './view-sample-lists'
+
+/** Share of the carved relief that still tilts the gloss: the clear fills the rest. */
+export const GLOSS_RELIEF = 0.16
+/** Light that a joint's open gap sends back. */
+export const GAP_LIGHT = 0.12
+const ROOT_SHADE = 0.3
+
+/** What the samples of one view share; made once a view and filled column by column. */
+export interface BodySampler {
+  blank: PreparedBlank
+  view: View
+  turn: ViewTurn
+  column: ViewColumn
+  row: SurfaceRow
+  point: SurfacePoint
+  relief: Relief
+  reliefPlace: ReliefPlace
+  jointPlace: JointPlace
+  /** Whether a fin stands on the back, and on the belly, of the current column. */
+  finOnBack: boolean
+  finOnBelly: boolean
+}
+
+/** Makes ready to sample the body in a view. */
+export function newBodySampler(blank: PreparedBlank, view: View): BodySampler {
+  return {
+    blank, view, turn: viewTurn(view),
+    column: newViewColumn(), row: newSurfaceRow(), point: newSurfacePoint(),
+    relief: reliefOf(blank),
+    reliefPlace: { slopeTail: 0, slopeX: 0, slopeY: 0, light: 1 },
+    jointPlace: { distance: Infinity, round: 1, towardX: 0, towardY: 0 },
+    finOnBack: false, finOnBelly: false,
+  }
+}
+
+/** x on the body, mm from the nose, under a picture place `px` pixels from the left. */
+export function xAtPixel(sampler: Pick<BodySampler, 'blank' | 'view' | 'turn'>, px: number): number {
+  return sampler.blank.shape.length / 2 + sampler.turn.way * (px - sampler.view.centreX) / sampler.view.scale
+}
+
+/** Height in the rolled frame, mm, at a picture place `py` pixels from the top. */
+export function heightAtPixel(sampler: Pick<BodySampler, 'view' | 'turn'>, py: number): number {
+  return sampler.turn.way * (sampler.view.centreY - py) / sampler.view.scale
+}
+
+/** Goes to the column at x mm. @returns false beside the body */
+export function goToColumn(sampler: BodySampler, x: number): boolean {
+  const { blank, column, row } = sampler
+  if (!fillViewColumn(blank.profile, sampler.turn, x, sampler.point, column)) return false
+  fillSurfaceRow(blank.table, column.section.t, row)
+  sampler.finOnBack = false
+  sampler.finOnBelly = false
+  const reach = blank.shape.length * 0.01
+  blank.shape.fins.forEach((fin, i) => {
+    const outline = blank.fins[i]
+    if (!outline || x < outline.left - reach || x > outline.right + reach) return
+    if (fin.measuredFrom === 'back') sampler.finOnBack = true
+    if (fin.measuredFrom === 'belly') sampler.finOnBelly = true
+  })
+  return true
+}
+
+/**
+ * Writes sample i at a height of the rolled frame in the current column.
+ * @returns how far inside the outline it lies, mm, after joints have drawn the outline in
+ */
+export function writeBodySample(sampler: BodySampler, height: number, samples: ViewSamples, i: number): number {
+  const { column, row, point, turn, blank } = sampler
+  const { section } = column
+  const length = blank.shape.length
+  const angle = phiAtHeight(column, turn, height, point)
+  surfacePoint(section, angle, point)
+  const side = point.z >= 0 ? 1 : -1
+  const turned = angle % (2 * Math.PI)
+  const phi = turned <= Math.PI ? turned : 2 * Math.PI - turned
+  const V = rowV(row, phi)
+  const v = shareOfV(row, V)
+  samples.U[i] = rowU(row, phi)
+  samples.V[i] = V
+  samples.u[i] = row.u
+  samples.v[i] = v
+  samples.side[i] = side
+  samples.section[2 * i] = point.y - section.c
+  samples.section[2 * i + 1] = point.z
+  samples.bodyNormal[3 * i] = point.nx
+  samples.bodyNormal[3 * i + 1] = point.ny
+  samples.bodyNormal[3 * i + 2] = point.nz
+
+  const relief = sampler.reliefPlace
+  reliefPlace(sampler.relief, section.x, point.y, Math.abs(point.z), row.u, v, relief)
+  let light = relief.light
+  if (sampler.finOnBack || sampler.finOnBelly) {
+    const reach = 1.1 * length / 100 + 0.3
+    if (sampler.finOnBack && V > 0) light *= 1 - ROOT_SHADE * Math.exp(-((row.V[0] as number) - V) / reach)
+    if (sampler.finOnBelly && V < 0) light *= 1 - ROOT_SHADE * Math.exp(-(V - (row.V[TABLE_COLUMNS - 1] as number)) / reach)
+  }
+  let inside = Math.min(column.high - height, height - column.low)
+  const joint = sampler.jointPlace
+  jointPlace(blank.shape.joints, section.x, point.y, joint)
+  let tilt = 0
+  samples.part[i] = PART_BODY
+  if (joint.distance < joint.round) {
+    inside -= jointDip(joint)
+    tilt = jointTilt(joint)
+    light *= 1 - jointShade(joint)
+    if (joint.distance < 0) {
+      samples.part[i] = PART_GAP
+      light = GAP_LIGHT
+    }
+  }
+  samples.occlusion[i] = light
+
+  // Rounded joint edges are part of the body's form; carving is filled by the clear.
+  const jx = point.nx + tilt * joint.towardX * (tilt > 0 ? 1 : 0)
+  const jy = point.ny + tilt * joint.towardY * (tilt > 0 ? 1 : 0)
+  const along = 1 / Math.sqrt(section.xt * section.xt + point.yt * point.yt + point.zt * point.zt)
+  const cx = relief.slopeTail * section.xt * along + relief.slopeX
+  const cy = relief.slopeTail * point.yt * along + relief.slopeY
+  const cz = relief.slopeTail * point.zt * along
+  writeTurned(turn, jx + cx, jy + cy, point.nz + cz, samples.normal, i)
+  writeTurned(turn, jx + GLOSS_RELIEF * cx, jy + GLOSS_RELIEF * cy, point.nz + GLOSS_RELIEF * cz, samples.glossNormal, i)
+  return inside
+}
+
+/** Writes a body direction as a unit vector of the view frame at place i of a list of triples. */
+export function writeTurned(turn: ViewTurn, x: number, y: number, z: number, out: Float32Array, i: number): void {
+  const size = 1 / Math.sqrt(x * x + y * y + z * z)
+  out[3 * i] = turn.way * x * size
+  out[3 * i + 1] = turn.way * (y * turn.cos - z * turn.sin) * size
+  out[3 * i + 2] = (y * turn.sin + z * turn.cos) * size
+}

@@ -1,0 +1,195 @@
+import { goToColumn, heightAtPixel, newBodySampler, writeBodySample, xAtPixel, type BodySampler } from './body-sample'
+import { FIN_EDGE_ON, newFinScratch, rimDistance, writeFinSample, type FinScratch } from './fin-sample'
+import type { PreparedBlank } from './prepared-blank'
+import { emptyViewSamples, PART_NONE, type ViewSamples } from './view-sample-lists'
+import type { View } from './view'
+
+export { emptyViewSamples, PART_BODY, PART_FIN, PART_GAP, PART_NONE, samplesTransfer, type ViewSamples } from './view-sample-lists'
+export { fitView, type ViewWish } from './fit-view'
+export type { View } from './view'
+
+/** Outline of the body in every column of a view, heights of the rolled frame in mm; NaN beside the body. */
+interface Silhouette {
+  high: Float64Array
+  low: Float64Array
+}
+
+const clamp = (value: number) => Math.min(1, Math.max(0, value))
+
+function silhouetteOf(sampler: BodySampler): Silhouette {
+  const { width } = sampler.view
+  const high = new Float64Array(width).fill(Number.NaN)
+  const low = new Float64Array(width).fill(Number.NaN)
+  for (let px = 0; px < width; px++) {
+    if (!goToColumn(sampler, xAtPixel(sampler, px + 0.5))) continue
+    high[px] = sampler.column.high
+    low[px] = sampler.column.low
+  }
+  return { high, low }
+}
+
+/** Cosine of the slope of an outline: turns a distance measured up the column into one across the outline. */
+function steepness(line: Float64Array, px: number, step: number): number {
+  const here = line[px] ?? Number.NaN
+  const before = line[px - 1] ?? Number.NaN
+  const after = line[px + 1] ?? Number.NaN
+  const rise = Number.isNaN(before) ? after - here : Number.isNaN(after) ? here - before : (after - before) / 2
+  return Number.isNaN(rise) ? 1 : step / Math.hypot(step, rise)
+}
+
+function roomNeeded(blank: PreparedBlank, view: View, line: Silhouette): number {
+  let room = 0
+  for (let px = 0; px < view.width; px++) {
+    const tall = (line.high[px] ?? Number.NaN) - (line.low[px] ?? Number.NaN)
+    if (tall > 0) room += Math.ceil(tall * view.scale) + 4
+  }
+  for (const fin of blank.fins) {
+    room += (Math.ceil((fin.right - fin.left) * view.scale) + 5) * (Math.ceil((fin.high - fin.low) * view.scale) + 5)
+  }
+  return room
+}
+
+function cut(samples: ViewSamples, count: number): ViewSamples {
+  return {
+    view: samples.view,
+    count,
+    pixel: samples.pixel.slice(0, count),
+    coverage: samples.coverage.slice(0, count),
+    part: samples.part.slice(0, count),
+    normal: samples.normal.slice(0, 3 * count),
+    glossNormal: samples.glossNormal.slice(0, 3 * count),
+    bodyNormal: samples.bodyNormal.slice(0, 3 * count),
+    section: samples.section.slice(0, 2 * count),
+    U: samples.U.slice(0, count),
+    V: samples.V.slice(0, count),
+    u: samples.u.slice(0, count),
+    v: samples.v.slice(0, count),
+    side: samples.side.slice(0, count),
+    occlusion: samples.occlusion.slice(0, count),
+    rootToTip: samples.rootToTip.slice(0, count),
+    rim: samples.rim.slice(0, count),
+    raySlope: samples.raySlope.slice(0, count),
+  }
+}
+
+function addBody(sampler: BodySampler, line: Silhouette, samples: ViewSamples, covered: Float32Array): number {
+  const { view, turn } = sampler
+  const pixel = 1 / view.scale
+  let count = 0
+  for (let px = 0; px < view.width; px++) {
+    if (!goToColumn(sampler, xAtPixel(sampler, px + 0.5))) continue
+    const { high, low } = sampler.column
+    const edges = [view.centreY - turn.way * view.scale * high, view.centreY - turn.way * view.scale * low]
+    const first = Math.max(0, Math.floor(Math.min(...edges)))
+    const last = Math.min(view.height - 1, Math.floor(Math.max(...edges)))
+    const flatter = [steepness(line.high, px, pixel), steepness(line.low, px, pixel)] as const
+    // A pixel cut by the outline is sampled a little inside it, where most of what shows of it lies.
+    const inset = Math.min(0.25 * pixel, 0.25 * (high - low))
+    for (let py = first; py <= last; py++) {
+      const height = heightAtPixel(sampler, py + 0.5)
+      const seen = Math.min(high - inset, Math.max(low + inset, height))
+      const kept = writeBodySample(sampler, seen, samples, count) - Math.min(high - seen, seen - low)
+      const cosine = high - height < height - low ? flatter[0] : flatter[1]
+      const share = clamp(0.5 + (Math.min(high - height, height - low) + kept) * cosine * view.scale)
+      if (share <= 0.004) continue
+      const index = py * view.width + px
+      samples.pixel[count] = index
+      samples.coverage[count] = share
+      covered[index] = share
+      count++
+    }
+  }
+  return count
+}
+
+function addFins(sampler: BodySampler, samples: ViewSamples, covered: Float32Array, from: number): number {
+  const { view, turn, blank } = sampler
+  if (Math.abs(turn.cos) < FIN_EDGE_ON) return from
+  const scratch = newFinScratch()
+  const reach = 1 / view.scale
+  let count = from
+  blank.fins.forEach((fin, index) => {
+    const pxAt = (x: number) => view.centreX + turn.way * view.scale * (x - blank.shape.length / 2)
+    const pyAt = (y: number) => view.centreY - turn.way * view.scale * y * turn.cos
+    const [x0, x1] = [pxAt(fin.left), pxAt(fin.right)]
+    const [y0, y1] = [pyAt(fin.low), pyAt(fin.high)]
+    const right = Math.min(view.width - 1, Math.floor(Math.max(x0, x1)) + 1)
+    const bottom = Math.min(view.height - 1, Math.floor(Math.max(y0, y1)) + 1)
+    for (let py = Math.max(0, Math.floor(Math.min(y0, y1)) - 1); py <= bottom; py++) {
+      const y = heightAtPixel(sampler, py + 0.5) / turn.cos
+      for (let px = Math.max(0, Math.floor(Math.min(x0, x1)) - 1); px <= right; px++) {
+        const pixel = py * view.width + px
+        const free = 1 - (covered[pixel] ?? 0)
+        if (free <= 0.004) continue
+        const x = xAtPixel(sampler, px + 0.5)
+        const share = Math.min(free, clamp(0.5 + rimDistance(fin, x, y, reach, scratch) * view.scale))
+        if (share <= 0.004) continue
+        writeFinSample(sampler, index, fin, x, y, scratch, samples, count)
+        samples.pixel[count] = pixel
+        samples.coverage[count] = share
+        covered[pixel] = (covered[pixel] ?? 0) + share
+        count++
+      }
+    }
+  })
+  return count
+}
+
+/** Everything a view shows of the painted blank, one sample a pixel and part, at pixel centres; body first, then fins. */
+export function viewSamples(blank: PreparedBlank, view: View): ViewSamples {
+  const sampler = newBodySampler(blank, view)
+  const line = silhouetteOf(sampler)
+  const samples = emptyViewSamples(view, roomNeeded(blank, view, line))
+  const covered = new Float32Array(view.width * view.height)
+  const bodies = addBody(sampler, line, samples, covered)
+  return cut(samples, addFins(sampler, samples, covered, bodies))
+}
+
+function addFinPoint(sampler: BodySampler, x: number, height: number, scratch: FinScratch, samples: ViewSamples, i: number): boolean {
+  const { turn, blank } = sampler
+  if (Math.abs(turn.cos) < FIN_EDGE_ON) return false
+  const y = height / turn.cos
+  return blank.fins.some((fin, index) => {
+    if (!(rimDistance(fin, x, y, 0, scratch) > 0)) return false
+    writeFinSample(sampler, index, fin, x, y, scratch, samples, i)
+    return true
+  })
+}
+
+/**
+ * Samples chosen pixels at chosen places inside them, for edges that need more than one sample.
+ * @param pixels row · width + column of each pixel
+ * @param offsets places inside a pixel, pairs (right, down) from its upper left corner, 0-1
+ * @returns sample k of pixel i at place i · (offsets.length / 2) + k; each covers 1 or, where nothing is hit, 0
+ */
+export function subpixelSamples(blank: PreparedBlank, view: View, pixels: Uint32Array, offsets: Float32Array): ViewSamples {
+  const each = offsets.length / 2
+  const sampler = newBodySampler(blank, view)
+  const scratch = newFinScratch()
+  const samples = emptyViewSamples(view, pixels.length * each)
+  // Column by column, because the pixels of a column share its section.
+  const order = Uint32Array.from(pixels.keys()).sort((a, b) => ((pixels[a] ?? 0) % view.width) - ((pixels[b] ?? 0) % view.width))
+  for (let k = 0; k < each; k++) {
+    let column = -1
+    let [x, isOnBody] = [0, false]
+    for (const i of order) {
+      const pixel = pixels[i] ?? 0
+      const px = pixel % view.width
+      if (px !== column) {
+        column = px
+        x = xAtPixel(sampler, px + (offsets[2 * k] ?? 0.5))
+        isOnBody = goToColumn(sampler, x)
+      }
+      const at = i * each + k
+      const height = heightAtPixel(sampler, Math.floor(pixel / view.width) + (offsets[2 * k + 1] ?? 0.5))
+      samples.pixel[at] = pixel
+      samples.coverage[at] = 1
+      const { high, low } = sampler.column
+      if (isOnBody && height < high && height > low && writeBodySample(sampler, height, samples, at) > 0) continue
+      if (addFinPoint(sampler, x, height, scratch, samples, at)) continue
+      samples.part[at] = PART_NONE
+      samples.coverage[at] = 0
+    }
+  }
+  return samples
+}
