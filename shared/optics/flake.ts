@@ -23,6 +23,10 @@ export interface SingleFlake { R: Float64Array, T: Float64Array }
 /** Cosines, inside the binder, that diffuse light is averaged over: equal shares of cos². */
 export const DIFFUSE_COSINES: readonly number[] = Array.from({ length: 12 }, (_, i) => Math.sqrt((i + 0.5) / 12))
 
+/** Flakes already worked out, newest last. A memory of answers, not a state: forgetting it changes nothing but time. */
+const REMEMBERED = new Map<string, SingleFlake>()
+const REMEMBERED_MOST = 96
+
 const MICA_MEAN = 350, MICA_SPREAD = 90
 const MICA_NODES = 25, MICA_REACH = 3
 const OXIDE_SPREAD = 0.05
@@ -43,6 +47,8 @@ const OXIDE = bell(OXIDE_NODES)
  *
  * Oxide | mica | oxide, averaged over mica 350 ± 90 nm thick and oxide ± 5 %; aluminium stands alone.
  *
+ * The answer is shared between callers and must not be written to.
+ *
  * @param oxide     what coats the mica, or aluminium
  * @param thickness nm, above 0 and at most 1000
  * @param cosines   of the angle in the binder, above 0 and at most 1
@@ -50,7 +56,17 @@ const OXIDE = bell(OXIDE_NODES)
  */
 export function singleFlake(oxide: Oxide, thickness: number, cosines: readonly number[], bands: Bands): SingleFlake {
   if (!(thickness > 0 && thickness <= 1000)) throw new RangeError(`flake: thickness must be above 0 and at most 1000 nm, got ${thickness}`)
-  const wavelengths = wavelengthsOf(bands)
+  const key = [oxide, thickness, bands, ...cosines].join(' ')
+  const known = REMEMBERED.get(key)
+  if (known) return known
+  if (REMEMBERED.size >= REMEMBERED_MOST) REMEMBERED.delete(REMEMBERED.keys().next().value!)
+  const fresh = workOutFlake(oxide, thickness, cosines, wavelengthsOf(bands))
+  REMEMBERED.set(key, fresh)
+  return fresh
+}
+
+/** `singleFlake` at any wavelengths, nm, without remembering the answer. */
+export function workOutFlake(oxide: Oxide, thickness: number, cosines: readonly number[], wavelengths: readonly number[]): SingleFlake {
   const R = new Float64Array(cosines.length * wavelengths.length), T = new Float64Array(R.length)
   cosines.forEach((cosine, c) => {
     const along = BINDER_INDEX * Math.sqrt(1 - cosine * cosine)

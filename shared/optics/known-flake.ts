@@ -1,6 +1,6 @@
-import { type Lab, lchFromLab } from './colorimetry'
-import { labFromReflectance } from './colorimetry'
-import { type Flake, type Oxide, singleFlake } from './flake'
+import { BANDS_36 } from './bands'
+import { type Lab, labFromReflectance, lchFromLab } from './colorimetry'
+import { type Flake, type Oxide, workOutFlake } from './flake'
 import type { KnownMetallic, KnownPearl } from './paint-optics'
 
 /** Chroma below which a wanted face colour is called silver. */
@@ -28,7 +28,7 @@ export function flakeFromKnown(known: KnownPearl | KnownMetallic): Flake {
 
 /** L*, a*, b* of the light one flake sends straight back, D65. */
 export function interferenceColour(oxide: Oxide, thickness: number): Lab {
-  return labFromReflectance(singleFlake(oxide, thickness, [1], 'exact36').R)
+  return labFromReflectance(workOutFlake(oxide, thickness, [1], BANDS_36).R)
 }
 
 /**
@@ -41,14 +41,21 @@ export function thicknessForColour(wanted: Lab | undefined, oxide: Exclude<Oxide
   if (!wanted) throw new RangeError('interference: give the oxide thickness or the colour that is wanted')
   const [, chroma, hue] = lchFromLab(wanted)
   if (chroma < SILVER_CHROMA) return SILVER_THICKNESS
-  let best = SILVER_THICKNESS, nearest = Infinity
-  for (let thickness = THINNEST; thickness <= THICKEST; thickness += 0.5) {
+  // Where two thicknesses share a hue the more colourful one is meant.
+  const cost = (thickness: number) => {
     const [, faceChroma, faceHue] = lchFromLab(interferenceColour(oxide, thickness))
-    const apart = Math.abs((faceHue - hue + 540) % 360 - 180)
-    // Where two thicknesses share a hue the more colourful one is meant.
-    const cost = apart + 200 / Math.max(faceChroma, 1)
-    if (cost < nearest) {
-      nearest = cost
+    return Math.abs((faceHue - hue + 540) % 360 - 180) + 200 / Math.max(faceChroma, 1)
+  }
+  const rough = cheapest(THINNEST, THICKEST, 3, cost)
+  return cheapest(Math.max(THINNEST, rough - 3), Math.min(THICKEST, rough + 3), 0.5, cost)
+}
+
+function cheapest(from: number, to: number, step: number, cost: (thickness: number) => number): number {
+  let best = from, least = Infinity
+  for (let thickness = from; thickness <= to; thickness += step) {
+    const here = cost(thickness)
+    if (here < least) {
+      least = here
       best = thickness
     }
   }

@@ -5,6 +5,8 @@ import { flakeFromKnown } from './known-flake'
 import { filmFromDye, filmFromMasstone, filmFromTwoSwatches } from './known-film'
 import type { Finish } from './surface'
 
+export { type DropPart, mixOptics } from './mix-optics'
+
 /** How a paint came to be known; it decides how far its promises can be trusted. */
 export type KnownHow = 'two-swatches' | 'masstone-hide' | 'dye-over-white' | 'interference' | 'metallic' | 'clear'
 

@@ -12,7 +12,7 @@ export interface FoundSpectrum {
 }
 
 /** Darkest and brightest share of white that a found spectrum is asked to reach, in each of X, Y and Z. */
-const DARKEST = 0.002, BRIGHTEST = 0.99
+const DARKEST = 0.0001, BRIGHTEST = 0.999
 const BAND_COUNT = BANDS_36.length
 const SIZE = BAND_COUNT + 3
 const STEP_MOST = 1.2
@@ -28,7 +28,7 @@ export function spectrumFromLab(lab: Lab, light: Light = 'D65'): FoundSpectrum {
  * The calmest reflectance that has a colour under a light: least squared slope of atanh(2R − 1), so that it stays
  * between 0 and 1 by itself and a grey comes out flat.
  *
- * @param xyz Y of white is 1; each of X, Y, Z is brought into 0.2…99 % of white first
+ * @param xyz Y of white is 1; each of X, Y, Z is brought into 0.01…99.9 % of white first
  * @accuracy the colour comes back within 1e-8 CIEDE2000 for all of sRGB (tests/unit/optics/spectrum-from-colour.test.ts)
  * @source the least-slope idea: S. A. Burns, "Numerical methods for smoothest reflectance reconstruction",
  *         Color Res. Appl. 45 (2020) 8–21; solved here by Newton's method on the Karush–Kuhn–Tucker equations
