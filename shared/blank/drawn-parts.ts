@@ -20,31 +20,32 @@ export interface DrawnEye {
   radius: number
 }
 
-/** A diving lip as a flat plate with four corners in the picture; drawn behind the body. */
+/** A diving lip as a flat plate with four corners in the picture. */
 export interface DrawnLip {
-  /** Slot left, slot right, tip right, tip left. On edge these make a bar as thick as the plate. */
+  /** Slot, slot, tip, tip, round the outline. On edge these make a bar as thick as the plate. */
   corners: readonly [PicturePoint, PicturePoint, PicturePoint, PicturePoint]
   facing: ViewDirection
   /** 0 on edge, 1 seen flat. */
   flatness: number
   /** Pixels: half the width of the bright edge. */
   edge: number
+  /** True when it stands before the body in this view; otherwise the body hides its slot. */
+  isInFront: boolean
 }
 
-/** A wire ring and its stem. */
+/** A wire ring in the mid-plane of the blank, and its stem. */
 export interface DrawnRing {
-  /** What it is for. */
+  /** For the line, or for a hook. */
   kind: 'tie' | 'hanger'
   centre: PicturePoint
-  /** Half axes of the ellipse of the wire's centre line, pixels, and the long axis's angle in the picture, radians. */
+  /** Half axes of the wire's centre line, pixels: along the picture's X and Y. */
   halfAxes: readonly [number, number]
-  angle: number
   /** Half the thickness of the wire, pixels. */
   wire: number
-  /** The stem's two ends. */
+  /** The stem's two ends, from inside the body out to the foot of the ring. */
   stem: readonly [PicturePoint, PicturePoint]
-  /** True when the body hides it from this view. */
-  isBehind: boolean
+  /** True when it stands before the body in this view; otherwise the body hides its foot. */
+  isInFront: boolean
 }
 
 /** A pin across a joint gap, as a bar in the picture. */
@@ -54,10 +55,11 @@ export interface DrawnPin {
   half: number
 }
 
-/** What is drawn beside the painted samples: eyes in front of the body, the rest behind or over the fins. */
+/** What is drawn beside the painted samples. */
 export interface DrawnParts {
+  /** Those that face the viewer. */
   eyes: DrawnEye[]
-  lip?: DrawnLip
+  lip?: DrawnLip | undefined
   rings: DrawnRing[]
   pins: DrawnPin[]
 }
