@@ -1,0 +1,48 @@
+import { z } from 'zod'
+import { NewPassword, PersonName } from './person'
+
+export const WORKSHOP_NAME_MAX = 80
+
+/** What the workshop measures in. Everything is kept in metric; this is how it is shown and typed. */
+export const UNITS = ['metric', 'inch'] as const
+export const Units = z.enum(UNITS)
+export type Units = z.output<typeof Units>
+
+/** The units as a person reads them. */
+export const UNITS_WORDS: Readonly<Record<Units, string>> = {
+  metric: 'Millimetres, millilitres, bar',
+  inch: 'Inches, fluid ounces, psi',
+}
+
+export const WorkshopName = z.string().trim().min(1, 'The workshop needs a name.').max(WORKSHOP_NAME_MAX)
+
+/** How a workshop is set up. A part it never chose has its default. */
+export const WorkshopSettings = z.object({ units: Units.default('metric') })
+export type WorkshopSettings = z.output<typeof WorkshopSettings>
+
+/** One more workshop for somebody who is signed in. */
+export const WorkshopDraft = z.object({ name: WorkshopName })
+export type WorkshopDraft = z.output<typeof WorkshopDraft>
+
+/** Opening a first workshop, from the link in the letter. */
+export const SignUp = z.object({ name: PersonName, workshopName: WorkshopName, password: NewPassword })
+export type SignUp = z.output<typeof SignUp>
+
+/** Changing a workshop; what is left out stays. */
+export const WorkshopChange = z.object({ name: WorkshopName, units: Units }).partial()
+export type WorkshopChange = z.output<typeof WorkshopChange>
+
+export const WorkshopParams = z.object({ workshopId: z.uuid() })
+
+/** Going over to another of one's workshops. */
+export const WorkshopChoice = z.object({ workshopId: z.uuid() })
+export type WorkshopChoice = z.output<typeof WorkshopChoice>
+
+/** A workshop as its people see it. */
+export interface WorkshopView {
+  id: string
+  name: string
+  units: Units
+  isDemo: boolean
+  since: string
+}

@@ -1,0 +1,7 @@
+import type { AccessRow } from './access/row'
+import { PEOPLE_ACCESS } from './access/people'
+
+/** Every route and who gets what from it. */
+export const ACCESS_TABLE: readonly AccessRow[] = [
+  ...PEOPLE_ACCESS,
+]
