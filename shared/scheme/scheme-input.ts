@@ -26,9 +26,9 @@ export const SchemeStart = z.object({
 })
 export type SchemeStart = z.output<typeof SchemeStart>
 
-/** Another name or fish. */
-export const SchemeRename = z.object({ name: Name.optional(), fish: Fish.optional() })
-export type SchemeRename = z.output<typeof SchemeRename>
+/** Another name or fish; taking a scheme out of the lists, or back into them. */
+export const SchemeChange = z.object({ name: Name.optional(), fish: Fish.optional(), retired: z.boolean().optional() })
+export type SchemeChange = z.output<typeof SchemeChange>
 
 /** A draft as it is saved; the version it was made from travels as `If-Match`. */
 export const DraftSave = z.object({ body: SchemeBody })

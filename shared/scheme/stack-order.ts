@@ -1,6 +1,7 @@
 import type { Coat } from './coat'
 import type { Mask } from './mask'
 import type { SchemeBody, StackItem } from './body'
+import { laidCoats } from './laid-coats'
 
 /** Either the stack as it would then be, or the reason why that cannot be done, as a sentence. */
 export type StackOutcome = { ok: true, stack: StackItem[] } | { ok: false, because: string }
@@ -79,7 +80,7 @@ export function brackets(body: Pick<SchemeBody, 'stack' | 'masks'>): Bracket[] {
 
 /** Masks that are on while a coat is laid, in the order they were fitted. */
 export function masksOver(body: Pick<SchemeBody, 'stack' | 'masks'>, coatId: string): Mask[] {
-  return brackets(body).filter(bracket => bracket.coatIds.includes(coatId)).map(bracket => bracket.mask)
+  return laidCoats(body).find(laid => laid.coat.id === coatId)?.masks ?? []
 }
 
 /** Everything in a stack that could not be done at a bench; empty when all of it can. */
