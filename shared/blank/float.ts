@@ -26,6 +26,11 @@ function positive(name: string, value: number): void {
   if (!(value > 0)) throw new RangeError(`${name} is more than nothing`)
 }
 
+/** Density in g/cm³ from a wood or lead chart in pounds per cubic foot (453.59237 g and 28 316.846592 cm³, exact). */
+export function densityFromPounds(poundsPerCubicFoot: number): number {
+  return poundsPerCubicFoot * 453.59237 / 28316.846592
+}
+
 /** A part of known mass and density (g/cm³). */
 export function partByMass(mass: number, density: number): LurePart {
   positive('a density', density)
