@@ -58,6 +58,13 @@ export const passwordResets = pgTable('password_resets', {
   expiresAt: at('expires_at').notNull(),
 })
 
+/** A letter was sent to somebody who wants to open a workshop; its link shows that the address is theirs. */
+export const signUps = pgTable('sign_ups', {
+  tokenHash: text('token_hash').primaryKey(),
+  email: varchar({ length: 254 }).notNull(),
+  expiresAt: at('expires_at').notNull(),
+})
+
 /** Tries at a door (sign-in, reset, public link) by key, counted in the database so that every process counts together. */
 export const tries = pgTable('tries', {
   key: text().primaryKey(),
