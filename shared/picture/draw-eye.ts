@@ -1,0 +1,89 @@
+import type { DrawnEye } from '#shared/blank/drawn-parts'
+import { linearFromXyz } from '#shared/optics/screen-colour'
+import { xyzFromLab, type Lab } from '#shared/optics/colorimetry'
+import type { Eyes } from '#shared/scheme/body'
+import { layOver, type Canvas } from './canvas'
+import { noise2 } from './deposit/noise'
+import { atNormal, type LightTables } from './light-tables'
+import { glossLight } from './paint-light'
+import { addGloss, tonePaint } from './tone'
+
+/** Samples a pixel in each direction. */
+const FINE = 4
+/** Where the pupil ends and the dark rim begins, shares of the radius; how much longer the pupil is toward the nose. */
+const PUPIL = 0.47
+const RIM = 0.8
+const TOWARD_NOSE = 0.06
+/** The lens throws light through the iris to its far side: darker above, brighter below. */
+const LENS = 0.42
+const STREAKS = 0.2
+/** An eye is polished: its highlight outshines the clear round it. */
+const SHINE = 1.25
+
+const linear = (lab: Lab) => linearFromXyz(xyzFromLab(lab)).map(value => Math.max(0, value))
+const smooth = (from: number, to: number, x: number) => {
+  const t = Math.min(1, Math.max(0, (x - from) / (to - from)))
+  return t * t * (3 - 2 * t)
+}
+
+/** Draws a fitted eye: foil iris with its streaks, pupil, rim and the highlight of its dome. */
+export function drawEye(canvas: Canvas, eye: DrawnEye, eyes: Eyes, tables: LightTables, plain: boolean): void {
+  const colours = { iris: linear(eyes.iris), pupil: linear(eyes.pupil), rim: linear(eyes.rim) }
+  const [i00, i01, i10, i11] = eye.inverse
+  const determinant = Math.abs(i00 * i11 - i01 * i10)
+  if (!(determinant > 0)) return
+  // Half extents of the ellipse in the picture, from the inverse of its matrix.
+  const reachX = Math.hypot(i01, i11) / determinant + 1, reachY = Math.hypot(i00, i10) / determinant + 1
+  const soft = Math.sqrt(determinant)
+  const rgb = new Float32Array(3)
+  const left = Math.max(0, Math.floor(eye.centre[0] - reachX)), right = Math.min(canvas.width - 1, Math.ceil(eye.centre[0] + reachX))
+  const top = Math.max(0, Math.floor(eye.centre[1] - reachY)), bottom = Math.min(canvas.height - 1, Math.ceil(eye.centre[1] + reachY))
+  for (let row = top; row <= bottom; row++) {
+    for (let column = left; column <= right; column++) {
+      let hits = 0, red = 0, green = 0, blue = 0
+      for (let k = 0; k < FINE * FINE; k++) {
+        const dx = column + (k % FINE + 0.5) / FINE - eye.centre[0], dy = row + (Math.floor(k / FINE) + 0.5) / FINE - eye.centre[1]
+        const a = i00 * dx + i01 * dy, b = i10 * dx + i11 * dy
+        if (a * a + b * b > 1) continue
+        eyeLight(eye, colours, a, b, soft, tables, plain, rgb)
+        hits++
+        red += rgb[0]!
+        green += rgb[1]!
+        blue += rgb[2]!
+      }
+      if (hits === 0) continue
+      const share = hits / FINE ** 2
+      // Only where the body is: an eye near the outline ends with it.
+      layOver(canvas, row * canvas.width + column, share, red / FINE ** 2, green / FINE ** 2, blue / FINE ** 2)
+    }
+  }
+}
+
+type EyeColours = Record<'iris' | 'pupil' | 'rim', number[]>
+
+function eyeLight(eye: DrawnEye, colours: EyeColours, a: number, b: number, soft: number, tables: LightTables, plain: boolean, rgb: Float32Array): void {
+  const q = Math.hypot(a, b)
+  const lean = 0.85 + 0.3 * q ** 5
+  const [tx, ty, tz] = eye.toTail, [ux, uy, uz] = eye.up, [fx, fy, fz] = eye.facing
+  const x = fx + lean * (a * tx + b * ux), y = fy + lean * (a * ty + b * uy), z = fz + lean * (a * tz + b * uz)
+  const size = Math.hypot(x, y, z)
+  const light = plain ? 1 : 1 + 0.5 * (atNormal(tables.irradiance, x / size, y / size) - 1)
+
+  const angle = Math.atan2(b, a)
+  const streak = 1 + STREAKS * noise2(9 * Math.cos(angle), 9 * Math.sin(angle), 5) * 0.5
+    + STREAKS * noise2(22 * Math.cos(angle), 22 * Math.sin(angle) + 3 * q, 9) * 0.4
+  const along = a < 0 ? a / (1 + TOWARD_NOSE) : a
+  const toPupil = smooth(PUPIL + soft, PUPIL - soft, Math.hypot(along, b))
+  const toRim = smooth(RIM - 0.02, RIM + 0.13, q)
+  // A fine bright ring where the foil turns in to the pupil, and a dark seat round the whole eye.
+  const ring = 1 + 0.35 * Math.exp(-(((q - PUPIL - 0.05) / 0.05) ** 2))
+  const seat = 1 - 0.75 * smooth(0.93, 1, q)
+  const foil = streak * ring * (1 - LENS * b) * (0.92 + 0.25 * smooth(0.5, 0.75, q))
+  for (let c = 0; c < 3; c++) {
+    const iris = colours.iris[c]! * foil
+    const ringed = iris + (colours.rim[c]! - iris) * toRim
+    rgb[c] = light * seat * (ringed + (colours.pupil[c]! * (1 - 0.3 * b) - ringed) * toPupil)
+  }
+  tonePaint(rgb, 0)
+  if (!plain) addGloss(rgb, 0, SHINE * glossLight(tables, x / size, y / size, z / size))
+}

@@ -1,0 +1,136 @@
+import { TILT_MAX, TILT_MIN, type PictureLight } from './picture-options'
+
+const DEGREE = Math.PI / 180
+
+/** A lit strip of the tent: degrees of elevation above the view axis and of azimuth toward the tail. */
+export interface Strip {
+  elevation: number
+  azimuth: number
+  halfHeight: number
+  halfWidth: number
+  edge: number
+  radiance: number
+}
+
+/** A tent of cloth round the bench with its lamps; radiances are relative until the gain is set. */
+export interface LightRig {
+  /** The cloth's own radiance overhead, at the horizon and from the floor. */
+  overhead: number
+  horizon: number
+  floor: number
+  strips: readonly Strip[]
+}
+
+/** Centre, radius and softness of the hole the camera looks through, degrees, and the light it leaves. */
+const HOLE = { elevation: 15, radius: 9, edge: 4, left: 0.4 }
+
+const RIM = { elevation: 108, azimuth: 0, halfHeight: 5, halfWidth: 48, edge: 3 }
+const CARD: Strip = { elevation: -40, azimuth: 0, halfHeight: 10, halfWidth: 60, edge: 7, radiance: 0.95 }
+/** A lamp behind cloth is seen with a soft glow round it, at this share of its radiance. Chosen by eye. */
+const GLOW = { halfHeight: 12, edge: 10, share: 0.055 }
+
+interface Setting { overhead: number, horizon: number, floor: number, key: Strip, glow: number, rim: number, card: number }
+
+// Narrow and bright looks like epoxy; twice as high and half as bright looked like a drawing.
+const BENCH: Setting = {
+  overhead: 0.36, horizon: 0.26, floor: 0.62, glow: 1, rim: 7, card: 1,
+  key: { elevation: 47, azimuth: -8, halfHeight: 3.4, halfWidth: 50, edge: 1.7, radiance: 19 },
+}
+const FACE: Setting = {
+  overhead: 0.20, horizon: 0.15, floor: 0.30, glow: 0, rim: 5, card: 0,
+  key: { elevation: 20, azimuth: -8, halfHeight: 5, halfWidth: 40, edge: 1.7, radiance: 15 },
+}
+const FLOP: Setting = {
+  overhead: 0.13, horizon: 0.10, floor: 0.10, glow: 0, rim: 5, card: 0,
+  key: { elevation: 34, azimuth: 70, halfHeight: 40, halfWidth: 6.5, edge: 1.7, radiance: 17 },
+}
+/** The tilt at which the arc passes the bench lamp, degrees. */
+const BENCH_TILT = 45
+
+/** The tent for a light: one of the three settings, or a lamp anywhere on the arc from face to flop. */
+export function lightRig(light: PictureLight): LightRig {
+  switch (light) {
+    case 'bench': return rigOf(BENCH)
+    case 'face': return rigOf(FACE)
+    case 'flop': return rigOf(FLOP)
+    default: return rigOf(settingAt(light.tilt))
+  }
+}
+
+/** Names a light for caches. */
+export function lightKey(light: PictureLight): string {
+  return typeof light === 'string' ? light : `tilt-${light.tilt}`
+}
+
+function settingAt(tilt: number): Setting {
+  const at = Math.min(TILT_MAX, Math.max(TILT_MIN, tilt))
+  if (at <= BENCH_TILT) {
+    const face = { ...FACE, key: { ...FACE.key, elevation: TILT_MIN + 2 } }
+    return between(face, BENCH, (at - TILT_MIN) / (BENCH_TILT - TILT_MIN))
+  }
+  return between(BENCH, FLOP, (at - BENCH_TILT) / (TILT_MAX - BENCH_TILT))
+}
+
+/** Sizes and radiances are mixed by ratio, so that a strip that turns upright keeps its area. */
+function between(a: Setting, b: Setting, share: number): Setting {
+  const straight = (from: number, to: number) => from + (to - from) * share
+  const ratio = (from: number, to: number) => from * (to / from) ** share
+  return {
+    overhead: straight(a.overhead, b.overhead),
+    horizon: straight(a.horizon, b.horizon),
+    floor: straight(a.floor, b.floor),
+    glow: straight(a.glow, b.glow),
+    rim: straight(a.rim, b.rim),
+    card: straight(a.card, b.card),
+    key: {
+      elevation: straight(a.key.elevation, b.key.elevation),
+      azimuth: straight(a.key.azimuth, b.key.azimuth),
+      halfHeight: ratio(a.key.halfHeight, b.key.halfHeight),
+      halfWidth: ratio(a.key.halfWidth, b.key.halfWidth),
+      edge: a.key.edge,
+      radiance: ratio(a.key.radiance, b.key.radiance),
+    },
+  }
+}
+
+function rigOf({ overhead, horizon, floor, key, glow, rim, card }: Setting): LightRig {
+  const strips = [key, { ...RIM, radiance: rim }]
+  if (glow > 0) strips.push({ ...key, halfHeight: GLOW.halfHeight, edge: GLOW.edge, radiance: GLOW.share * glow * key.radiance })
+  if (card > 0) strips.push({ ...CARD, radiance: CARD.radiance * card })
+  return { overhead, horizon, floor, strips }
+}
+
+function smooth(from: number, to: number, x: number): number {
+  const t = Math.min(1, Math.max(0, (x - from) / (to - from)))
+  return t * t * (3 - 2 * t)
+}
+
+/** How far inside a strip a direction lies, 0 outside to 1; elevation and azimuth in degrees. */
+export function stripShare(strip: Strip, elevation: number, azimuth: number): number {
+  let up = Math.abs(elevation - strip.elevation)
+  if (up > 180) up = 360 - up
+  const along = Math.abs(azimuth - strip.azimuth)
+  if (up >= strip.halfHeight + strip.edge || along >= strip.halfWidth + strip.edge) return 0
+  return (1 - smooth(strip.halfHeight - strip.edge, strip.halfHeight + strip.edge, up))
+    * (1 - smooth(strip.halfWidth - strip.edge, strip.halfWidth + strip.edge, along))
+}
+
+/** The cloth's radiance in a direction, without its lamps. */
+export function clothRadiance(rig: LightRig, x: number, y: number, z: number): number {
+  // Away from the horizon the cloth soon takes the tone of what it hangs over.
+  const away = 1 - (1 - Math.abs(y)) ** 2
+  const cloth = rig.horizon + ((y >= 0 ? rig.overhead : rig.floor) - rig.horizon) * away
+  const toHole = y * Math.sin(HOLE.elevation * DEGREE) + z * Math.cos(HOLE.elevation * DEGREE)
+  if (toHole < 0.9) return cloth
+  const off = Math.acos(Math.min(1, toHole)) / DEGREE
+  return cloth * (HOLE.left + (1 - HOLE.left) * smooth(HOLE.radius - HOLE.edge, HOLE.radius + HOLE.edge, off))
+}
+
+/** Radiance of the tent in a unit direction of the view frame, before the gain. */
+export function tentRadiance(rig: LightRig, x: number, y: number, z: number): number {
+  const elevation = Math.atan2(y, z) / DEGREE
+  const azimuth = Math.asin(Math.min(1, Math.max(-1, x))) / DEGREE
+  let light = clothRadiance(rig, x, y, z)
+  for (const strip of rig.strips) light += strip.radiance * stripShare(strip, elevation, azimuth)
+  return light
+}

@@ -1,0 +1,155 @@
+import { prepareBlank, type PreparedBlank } from '#shared/blank/prepared-blank'
+import { projectPoint, type View } from '#shared/blank/view'
+import { fitView, subpixelSamples, viewSamples } from '#shared/blank/view-samples'
+import { groundFromLab } from '#shared/optics/known-film'
+import { toPictureBands } from '#shared/optics/to-picture-bands'
+import { canonicalJson } from '#shared/scheme/canonical'
+import { canvasOf, copyCanvas, encodeCanvas, type Canvas } from './canvas'
+import { coatTable, type CoatTable } from './coat-table'
+import { drawEye } from './draw-eye'
+import { drawBehind, drawInFront } from './draw-hardware'
+import { lightKey } from './light-rig'
+import { lightTables, type LightTables } from './light-tables'
+import type { Look } from './look'
+import { paintLight, type Lighting } from './paint-light'
+import { pictureOptions, type Picture, type PictureLight, type PictureOptions, type PictureWish } from './picture-options'
+import { FOUR_PLACES, jumpingPixels, NINE_PLACES, putRefined, shownPixels } from './refine'
+import { eyesAreFitted, shownCoats } from './shown-coats'
+import { composeKept, keptMap, tidyMaps, viewKit, type KeyedCoat, type ViewKit } from './view-kit'
+
+/** A coarse picture is this much smaller in each direction. */
+export const COARSE = 4
+/** Jumps worth four samples, in screen values of 0-1. */
+const JUMP = { screen: 0.1, print: 0.035 }
+/** Pictures up to this width take nine samples everywhere. */
+const SMALL_WIDTH = 320
+/** How many of each are kept. */
+const KEPT = { blanks: 4, views: 4, refinedViews: 2, tables: 120, lights: 8 }
+
+/** Draws looks and keeps what a next picture can use: views, deposits, the coats below an edit, tables and lights. */
+export interface PictureBench {
+  /** One picture at the quality asked for. */
+  draw(look: Look, wish: PictureWish): Picture
+  /** The same picture, better and better: coarse, full, then with its edges refined. */
+  stages(look: Look, wish: PictureWish): Generator<Picture, void, undefined>
+}
+
+/** Puts up an empty bench. */
+export function pictureBench(): PictureBench {
+  const blanks = keepSome<PreparedBlank>(KEPT.blanks), lights = keepSome<LightTables>(KEPT.lights)
+  const views = keepSome<ViewKit>(KEPT.views), refinedViews = keepSome<ViewKit>(KEPT.refinedViews)
+  const tables = keepSome<CoatTable>(KEPT.tables)
+
+  return {
+    draw(look, wish) {
+      const options = pictureOptions(wish)
+      if (options.quality === 'coarse') return finish(look, coarser(options), drawFull(look, coarser(options)))
+      return finish(look, options, refine(look, options, drawFull(look, options)))
+    },
+    * stages(look, wish) {
+      const options = pictureOptions(wish)
+      yield finish(look, coarser(options), drawFull(look, coarser(options)))
+      if (options.quality === 'coarse') return
+      const full = drawFull(look, options)
+      yield finish(look, options, full)
+      yield finish(look, options, refine(look, options, full))
+    },
+  }
+
+  function blankOf({ materials: { blank: { shape } } }: Look): { key: string, blank: PreparedBlank } {
+    const key = canonicalJson(shape)
+    return { key, blank: blanks(key, () => prepareBlank(shape)) }
+  }
+
+  function viewOf(blank: PreparedBlank, { width, height, roll, mmPerPixel }: PictureOptions): View {
+    return fitView(blank, { width, height, roll, ...(mmPerPixel ? { scale: 1 / mmPerPixel } : {}) })
+  }
+
+  function kitOf(look: Look, options: PictureOptions): { kit: ViewKit, key: string, blank: PreparedBlank, view: View } {
+    const { key: shapeKey, blank } = blankOf(look)
+    const view = viewOf(blank, options)
+    const key = `${canonicalJson(view)}${shapeKey}`
+    return { key, blank, view, kit: views(key, () => viewKit(blank, view, viewSamples(blank, view))) }
+  }
+
+  function lightOf(light: PictureLight): LightTables {
+    return lights(lightKey(light), () => lightTables(light))
+  }
+
+  /** Light of every sample of a kit. */
+  function lit(kit: ViewKit, look: Look, options: PictureOptions): Float32Array {
+    const coats = shownCoats(look, options).map((coat): KeyedCoat => {
+      const { codes, peak } = keptMap(kit, coat)
+      const paintKey = canonicalJson([coat.paint, coat.passes * peak])
+      return { codes, key: `${coat.placeKey}${paintKey}`, table: tables(paintKey, () => coatTable(coat.paint, coat.passes * peak)) }
+    })
+    tidyMaps(kit, coats.length)
+    const { colour, finish } = look.body.ground
+    const ground = toPictureBands(groundFromLab(colour, finish))
+    const reflectance = composeKept(kit, canonicalJson(look.body.ground), ground, coats)
+    const form = eyesAreFitted(look, options.upTo) ? kit.form : kit.blindForm
+    return paintLight(form, { reflectance, coats }, lightingOf(options))
+  }
+
+  function lightingOf({ light, clear, plain }: PictureOptions): Lighting {
+    return { tables: lightOf(light), clear, plain, aspecular: aspecularOf(light) }
+  }
+
+  function drawFull(look: Look, options: PictureOptions): Canvas {
+    const { kit } = kitOf(look, options)
+    return canvasOf(kit.samples, lit(kit, look, options))
+  }
+
+  function refine(look: Look, options: PictureOptions, canvas: Canvas): Canvas {
+    const { key, blank, view } = kitOf(look, options)
+    const isSmall = options.width <= SMALL_WIDTH
+    const pixels = isSmall ? shownPixels(canvas) : jumpingPixels(canvas, options.quality === 'print' ? JUMP.print : JUMP.screen)
+    if (pixels.length === 0) return canvas
+    const places = isSmall ? NINE_PLACES : FOUR_PLACES
+    const kit = refinedViews(`${key}${places.length}${pixels.join()}`, () => viewKit(blank, view, subpixelSamples(blank, view, pixels, places)))
+    putRefined(canvas, pixels, kit.samples, lit(kit, look, options), places.length / 2)
+    return canvas
+  }
+
+  /** Adds eyes, lip and wire, and encodes for the screen. */
+  function finish(look: Look, options: PictureOptions, painted: Canvas): Picture {
+    const { kit, view } = kitOf(look, options)
+    const canvas = copyCanvas(painted)
+    drawBehind(canvas, kit.parts)
+    const { eyes } = look.body
+    if (eyes && eyesAreFitted(look, options.upTo)) {
+      for (const eye of kit.parts.eyes) drawEye(canvas, eye, eyes, lightOf(options.light), options.plain)
+    }
+    drawInFront(canvas, kit.parts)
+    return {
+      width: options.width, height: options.height, rgba: encodeCanvas(canvas, options), mmPerPixel: 1 / view.scale,
+      origin: projectPoint(view, look.materials.blank.shape.length, 0, 0, 0),
+    }
+  }
+}
+
+/** Angle from the gloss at which a light shows flakes on a flank that faces the viewer, degrees. */
+export function aspecularOf(light: PictureLight): number {
+  if (typeof light === 'object') return light.tilt
+  return light === 'bench' ? 45 : light === 'face' ? 20 : 110
+}
+
+function coarser(options: PictureOptions): PictureOptions {
+  return {
+    ...options, quality: 'coarse',
+    width: Math.ceil(options.width / COARSE), height: Math.ceil(options.height / COARSE),
+    ...(options.mmPerPixel ? { mmPerPixel: options.mmPerPixel * COARSE } : {}),
+  }
+}
+
+/** Keeps the few values that were asked for last. */
+function keepSome<T>(most: number): (key: string, make: () => T) => T {
+  const kept = new Map<string, T>()
+  return (key, make) => {
+    const value = kept.get(key) ?? make()
+    kept.delete(key)
+    kept.set(key, value)
+    if (kept.size > most) kept.delete(kept.keys().next().value!) // there is one: size is above 0
+    return value
+  }
+}
