@@ -41,6 +41,7 @@ export const STATUS = {
   'photo/not-an-image': 415,
   'photo/too-large': 413,
   'photo/unreadable': 422,
+  'photo/too-many': 409,
   'card/not-found': 404,
   'card/changed-meanwhile': 412,
   'card/no-photo': 409,

@@ -8,5 +8,5 @@ import { BlankDraft } from '#shared/blank/blank-view'
 export default defineApiHandler(async (event) => {
   const ctx = await requireContext(event, 'blank:change')
   const draft = await parseBody(event, BlankDraft)
-  return idempotent(event, ctx, 201, () => addBlank(ctx, draft))
+  return idempotent(event, ctx, 201, tx => addBlank(tx, draft))
 })

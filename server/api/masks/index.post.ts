@@ -8,5 +8,5 @@ import { MaskDraft } from '#shared/scheme/mask-view'
 export default defineApiHandler(async (event) => {
   const ctx = await requireContext(event, 'mask:change')
   const draft = await parseBody(event, MaskDraft)
-  return idempotent(event, ctx, 201, () => addMask(ctx, draft))
+  return idempotent(event, ctx, 201, tx => addMask(tx, draft))
 })

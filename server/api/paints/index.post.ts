@@ -8,5 +8,5 @@ import { PaintDraft } from '#shared/shelf/paint'
 export default defineApiHandler(async (event) => {
   const ctx = await requireContext(event, 'shelf:change')
   const draft = await parseBody(event, PaintDraft)
-  return idempotent(event, ctx, 201, () => addPaint(ctx, draft))
+  return idempotent(event, ctx, 201, tx => addPaint(tx, draft))
 })

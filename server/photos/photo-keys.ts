@@ -1,0 +1,7 @@
+/** Where a photo's files lie in the object store; the only place that knows. */
+export const photoKeys = {
+  folder: (workshopId: string, photoId: string) => `workshops/${workshopId}/photos/${photoId}/`,
+  /** As it came, for the workshop's own safe keeping; never served. */
+  original: (workshopId: string, photoId: string) => `${photoKeys.folder(workshopId, photoId)}original`,
+  rendition: (workshopId: string, photoId: string, file: string) => `${photoKeys.folder(workshopId, photoId)}${file}`,
+}

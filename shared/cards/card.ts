@@ -1,0 +1,75 @@
+import { z } from 'zod'
+import { SchemeParams } from '#shared/scheme/scheme-input'
+
+export const CARD_TITLE_MAX = 80
+export const CARD_WORDS_MAX = 1200
+export const CARD_LINE_MAX = 120
+export const CARD_PHOTOS_MAX = 12
+export const CARD_CHIPS_MAX = 8
+
+export const CardParams = z.object({ cardId: z.uuid() })
+export const NewCard = z.object({ schemeId: SchemeParams.shape.schemeId })
+/** The secret part of a card's link: 192 random-looking bits in base64url. */
+export const CardToken = z.string().regex(/^[\w-]{32}$/)
+export const CardTokenParams = z.object({ token: CardToken })
+
+/** A colour of the finish as it is seen, where on the fish, and in words. Nothing of how it was made. */
+export const CardChip = z.object({
+  where: z.string().max(40),
+  colour: z.string().regex(/^#[0-9a-f]{6}$/),
+  words: z.string().max(80),
+})
+export type CardChip = z.output<typeof CardChip>
+
+/** What a person writes on a card. */
+export const CardDraft = z.object({
+  title: z.string().trim().min(1).max(CARD_TITLE_MAX),
+  words: z.string().trim().max(CARD_WORDS_MAX),
+  fish: z.string().trim().max(CARD_LINE_MAX),
+  sizes: z.string().trim().max(CARD_LINE_MAX),
+  price: z.string().trim().max(CARD_LINE_MAX),
+  leadTime: z.string().trim().max(CARD_LINE_MAX),
+  photoIds: z.array(z.uuid()).max(CARD_PHOTOS_MAX),
+  showsChips: z.boolean(),
+})
+export type CardDraft = z.output<typeof CardDraft>
+
+/** What a card keeps: its words, and copies of the few facts of the scheme that a customer may see. */
+export const CardContent = CardDraft.extend({
+  workshop: z.string(),
+  blank: z.string(),
+  chips: z.array(CardChip).max(CARD_CHIPS_MAX),
+})
+export type CardContent = z.output<typeof CardContent>
+
+/** A card as the workshop sees it. */
+export const CardView = CardContent.extend({
+  id: z.uuid(),
+  schemeId: z.uuid(),
+  schemeName: z.string(),
+  version: z.number().int(),
+  state: z.enum(['not shared', 'shared', 'revoked']),
+  /** The public address while it is shared. */
+  link: z.string().nullable(),
+  sharedAt: z.iso.datetime().nullable(),
+  createdAt: z.iso.datetime(),
+})
+export type CardView = z.output<typeof CardView>
+
+/** A photo on a public card: an address below the card's own, its size and its words. */
+export const PublicPhoto = z.strictObject({ id: z.uuid(), width: z.number().int(), height: z.number().int(), alt: z.string() })
+
+/** Everything a public card may ever say; the one allow-list. Strict, so that nothing else can ride along. */
+export const PublicCard = z.strictObject({
+  workshop: z.string(),
+  title: z.string(),
+  words: z.string(),
+  fish: z.string(),
+  blank: z.string(),
+  sizes: z.string(),
+  price: z.string(),
+  leadTime: z.string(),
+  chips: z.array(z.strictObject(CardChip.shape)),
+  photos: z.array(PublicPhoto),
+})
+export type PublicCard = z.output<typeof PublicCard>
