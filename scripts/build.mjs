@@ -1,0 +1,20 @@
+// Builds the application into .output, in a build folder of its own: a development server, a type check or a test that
+// reads .nuxt meanwhile is left alone.
+import { rm } from 'node:fs/promises'
+import { join } from 'node:path'
+import { ROOT } from './lib/environment.mjs'
+
+process.env.NODE_ENV = 'production'
+process.env.NUXT_TELEMETRY_DISABLED = '1'
+
+const { build, loadNuxt } = await import('nuxt')
+const buildDir = join(ROOT, 'node_modules/.cache/countershade/build')
+await rm(buildDir, { recursive: true, force: true })
+
+const nuxt = await loadNuxt({ cwd: ROOT, dev: false, dotenv: false, overrides: { buildDir } })
+nuxt.hook('build:error', () => {
+  process.exitCode = 1
+})
+await build(nuxt)
+await nuxt.close()
+process.exit()
