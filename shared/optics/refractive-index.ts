@@ -34,7 +34,7 @@ const TABLES: Record<Exclude<Oxide, 'rutile'>, Table> = {
  *
  * @param nm wavelength, 380…740
  * @returns n and k, k ≥ 0
- * @accuracy the curve between table values is within 0.01 of the denser tables for anatase and aluminium, 0.04 for hematite
+ * @accuracy between the table's values the curve is within 0.012 of denser tables in n, hematite 0.023; in k 0.034 at worst
  * @source rutile, ordinary ray: J. R. Devore, J. Opt. Soc. Am. 41 (1951) 416–419; the rest as listed in this file
  */
 export function refractiveIndex(oxide: Oxide, nm: number): { n: number, k: number } {
