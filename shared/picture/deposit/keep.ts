@@ -1,0 +1,110 @@
+import type { PreparedBlank } from '#shared/blank/prepared-blank'
+import { halfGirth, TABLE_COLUMNS, TABLE_ROWS, type SurfaceTable } from '#shared/blank/surface-table'
+import { PART_FIN, PART_NONE, type ViewSamples } from '#shared/blank/view-sample-lists'
+import { gillEdge } from '#shared/blank/zones'
+import { hashShare } from './noise'
+
+/** How many maps of marks are kept for a view; masks are few and all kept. */
+const MARK_MAPS_MAX = 40
+
+/** Noise on the surface, in a few independent fields that every coat mixes in its own way. */
+export interface SurfaceNoise { hand: Float32Array[], edge: Float32Array[], droplets: Float32Array[] }
+
+/** Stray drops of a view: which samples a drop touches, how much it lays there, and the draw that decides whether it fell. */
+export interface Specks { sample: Uint32Array, weight: Float32Array, draw: Float32Array }
+
+/** What is the same for every coat of one view. Make it once per list of samples; maps gather in it as coats are laid. */
+export interface DepositKeep {
+  readonly samples: ViewSamples
+  readonly blank: PreparedBlank
+  /** Half the girth beside each sample, mm. */
+  readonly girth: Float32Array
+  /** mm ahead of the back edge of the gill cover; negative behind it. */
+  readonly ahead: Float32Array
+  /** mm round the girth to the ridge of the back. */
+  readonly toBack: Float32Array
+  /** A share in [0, 1) for each sample, lying on the surface. */
+  readonly dither: Float32Array
+  /** Samples on the body, and samples on fins, in order. */
+  readonly onBody: Uint32Array
+  readonly onFins: Uint32Array
+  /** mm of one pixel. */
+  readonly pixel: number
+  /** Work space, one value per sample. */
+  readonly deposit: Float32Array
+  readonly zone: Float32Array
+  readonly wideZone: Float32Array
+  readonly maskMaps: Map<string, Float32Array>
+  readonly markMaps: Map<string, Float32Array>
+  noise: SurfaceNoise | null
+  specks: Specks | null
+}
+
+/** Prepares a list of samples of a prepared blank: a whole view, or a few pixels of it four times over. */
+export function depositKeep(samples: ViewSamples, blank: PreparedBlank): DepositKeep {
+  const { count, part, u, v, U, V, side } = samples
+  const { gill, length } = blank.shape
+  const [girth, ahead, toBack, dither] = [0, 1, 2, 3].map(() => new Float32Array(count)) as [Float32Array, Float32Array, Float32Array, Float32Array] // four made above
+  const [body, fins]: [number[], number[]] = [[], []]
+  const back = backHeights(blank.table)
+  for (let i = 0; i < count; i++) {
+    const on = part[i] ?? PART_NONE
+    const U_ = U[i] ?? 0
+    const V_ = V[i] ?? 0
+    dither[i] = hashShare(Math.floor(U_ * 50), Math.floor(V_ * 50) * 2 + ((side[i] ?? 1) > 0 ? 1 : 0), 0x2545f491)
+    if (on === PART_NONE) continue
+    if (on >= PART_FIN) {
+      fins.push(i)
+      continue
+    }
+    body.push(i)
+    const u_ = u[i] ?? 0
+    girth[i] = halfGirth(blank.table, u_)
+    ahead[i] = (gillEdge(gill, v[i] ?? 0) - u_) * length
+    toBack[i] = Math.max(0, evenly(back, u_) - V_)
+  }
+  return {
+    samples, blank, girth, ahead, toBack, dither,
+    onBody: Uint32Array.from(body), onFins: Uint32Array.from(fins),
+    pixel: 1 / samples.view.scale,
+    deposit: new Float32Array(count), zone: new Float32Array(count), wideZone: new Float32Array(count),
+    maskMaps: new Map(), markMaps: new Map(), noise: null, specks: null,
+  }
+}
+
+/** V of the back ridge, mm, at places even in u. */
+function backHeights(table: SurfaceTable): Float64Array {
+  const out = new Float64Array(TABLE_ROWS)
+  let row = 0
+  for (let i = 0; i < TABLE_ROWS; i++) {
+    const wanted = i / (TABLE_ROWS - 1)
+    while (row < TABLE_ROWS - 2 && (table.u[row + 1] ?? 1) < wanted) row++
+    const [a, b] = [table.u[row] ?? 0, table.u[row + 1] ?? 1]
+    const f = Math.min(1, Math.max(0, (wanted - a) / (b - a)))
+    out[i] = (table.V[row * TABLE_COLUMNS] ?? 0) * (1 - f) + (table.V[(row + 1) * TABLE_COLUMNS] ?? 0) * f
+  }
+  return out
+}
+
+/** Value at a share 0 to 1 of a table with even steps. */
+export function evenly(table: ArrayLike<number>, share: number): number {
+  const at = Math.min(1, Math.max(0, share)) * (table.length - 1)
+  const i = Math.min(table.length - 2, Math.floor(at))
+  const low = table[i] ?? 0
+  return low + ((table[i + 1] ?? 0) - low) * (at - i)
+}
+
+/** A map of marks out of the keep, or made and kept; the one unused for longest makes room. */
+export function keptMarkMap(keep: DepositKeep, key: string, make: () => Float32Array): Float32Array {
+  const found = keep.markMaps.get(key)
+  const map = found ?? make()
+  keep.markMaps.delete(key)
+  keep.markMaps.set(key, map)
+  if (keep.markMaps.size > MARK_MAPS_MAX) {
+    for (const oldest of keep.markMaps.keys()) {
+      keep.markMaps.delete(oldest)
+      break
+    }
+  }
+  return map
+}

@@ -1,0 +1,78 @@
+import type { Mark, Place } from '#shared/scheme/mark'
+import { dotField, placedDots, scatteredDots } from './dot-field'
+import { keptMarkMap, type DepositKeep } from './keep'
+import { cutEdge, outlineReach } from './mask-map'
+import { outlineField } from './outline-field'
+import { spongeMap, wormMap } from './pattern-map'
+import { fieldMap, type PlaneField } from './plane-field'
+import { draped, planePlace, type PlanePoint } from './plane-place'
+import { strokeField, type PlaneStroke } from './stroke-field'
+
+/** Strokes of a fan run together at its root; a hand flicks them off there, so they never lay more than this. */
+const FAN_MOST = 1.6
+
+/**
+ * How much the marks of a coat lay at every sample of the body, as shares of the coat, into `out`. Marks of one coat come one
+ * after the other from the same cup: airbrushed ones add up, what covers covers.
+ */
+export function layMarks(keep: DepositKeep, marks: readonly Mark[], seed: number, out: Float32Array): void {
+  out.fill(0)
+  marks.forEach((mark, order) => {
+    const map = markMap(keep, mark, seed + order)
+    if (meetsByAdding(mark)) for (const i of keep.onBody) out[i] = (out[i] ?? 0) + (map[i] ?? 0)
+    else for (const i of keep.onBody) out[i] = Math.max(out[i] ?? 0, map[i] ?? 0)
+  })
+}
+
+function meetsByAdding(mark: Mark): boolean {
+  return mark.kind === 'fan' || (mark.kind === 'strokes' && mark.with === 'airbrush')
+}
+
+function markMap(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
+  // Only freehand edges depend on the coat that draws them.
+  const key = JSON.stringify(mark.kind === 'outline' ? [mark, seed] : mark)
+  return keptMarkMap(keep, key, () => drawMark(keep, mark, seed))
+}
+
+function drawMark(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
+  const { table } = keep.blank
+  const bothSides = (field: (side: 1 | -1) => PlaneField) => fieldMap(keep, field(1), field(-1))
+  switch (mark.kind) {
+    case 'strokes': {
+      const field = strokeField(mark.strokes.map(stroke => ({ ...stroke, points: draped(table, stroke.points, false) })), mark.with)
+      return fieldMap(keep, field, field)
+    }
+    case 'fan': {
+      const field = strokeField(fanStrokes(planePlace(table, ...mark.root), mark, keep.blank.shape.length), 'airbrush')
+      const map = fieldMap(keep, field, field)
+      for (const i of keep.onBody) map[i] = FAN_MOST * (1 - Math.exp(-(map[i] ?? 0) / FAN_MOST))
+      return map
+    }
+    case 'dots': return bothSides(side => dotField(placedDots(table, mark, side), mark.soft))
+    case 'scatter': return bothSides(side => dotField(scatteredDots(table, mark, side), mark.soft))
+    case 'outline': {
+      const points: readonly Place[] = mark.points
+      const field = outlineField([draped(table, points, true)], outlineReach(mark.soft, mark.wobble))
+      const map = bothSides(side => cutEdge(field, mark.soft, mark.wobble, seed, side))
+      for (const i of keep.onBody) map[i] = mark.amount * (map[i] ?? 0)
+      return map
+    }
+    case 'worm tracks': return wormMap(keep, mark)
+    case 'torn sponge': return spongeMap(keep, mark)
+  }
+}
+
+/**
+ * The strokes of a fan from its root, first to last: lengths and angles run from the first to the last stroke, widths and amounts
+ * along each. It keeps its form: all of it grows with the body (mm at 100 mm).
+ */
+export function fanStrokes(root: PlanePoint, fan: Extract<Mark, { kind: 'fan' }>, length: number): PlaneStroke[] {
+  const scale = length / 100
+  return Array.from({ length: fan.count }, (_, k) => {
+    const share = k / (fan.count - 1)
+    const reach = scale * (fan.length[0] + (fan.length[1] - fan.length[0]) * share)
+    const angle = (fan.angle[0] + (fan.angle[1] - fan.angle[0]) * share) * Math.PI / 180
+    const tip: PlanePoint = [root[0] + reach * Math.cos(angle), root[1] - reach * Math.sin(angle)]
+    return { points: [root, tip], width: [scale * fan.width[0], scale * fan.width[1]], amount: fan.amount }
+  })
+}
