@@ -18,6 +18,8 @@ export interface OpenDraft {
   materials: ShallowRef<Materials>
   saveState: ShallowRef<SaveState>
   conflict: ShallowRef<DraftConflict | null>
+  /** The body the server had last: what unsaved work was made from. */
+  base: SchemeBody
   /** Saves it; null on the server and until the page has come alive. */
   keeper: DraftKeeper | null
 }
@@ -29,6 +31,7 @@ export function openDraft(scheme: SchemeView): OpenDraft {
     materials: shallowRef(scheme.materials),
     saveState: shallowRef<SaveState>({ is: 'saved', at: scheme.savedAt }),
     conflict: shallowRef<DraftConflict | null>(null),
+    base: scheme.draft,
     keeper: null,
   }
 }

@@ -10,7 +10,7 @@ import { type History, record, redo, startHistory, undo } from '#shared/scheme/h
 import { sameValue } from '#shared/scheme/canonical'
 import type { SchemeBody } from '#shared/scheme/body'
 import type { Materials } from '#shared/scheme/materials'
-import type { RevisionView, SchemeView } from '#shared/scheme/scheme-view'
+import type { DraftSavedView, RevisionView, SchemeView } from '#shared/scheme/scheme-view'
 
 const CHOOSE_FIRST = 'Somebody else saved this scheme meanwhile. Choose one of the two versions first.'
 
@@ -47,7 +47,6 @@ export interface SchemeDraft {
 export function useSchemeDraft(scheme: SchemeView): SchemeDraft {
   const store = import.meta.client ? useSchemeDraftStore() : null
   const { session } = useSession()
-  const address = `/api/schemes/${scheme.id}`
   const found = store?.find(scheme.id)
   const draft = found && (found.keeper?.isUnsaved() || found.keeper?.version() === scheme.version) ? found : openDraft(scheme)
   store?.put(scheme.id, draft)
@@ -72,9 +71,11 @@ export function useSchemeDraft(scheme: SchemeView): SchemeDraft {
 
   async function readConflict() {
     try {
-      const theirs: SchemeView = await $fetch(address)
+      const theirs: SchemeView = await $fetch(`/api/schemes/${scheme.id}`)
       const mine = history.value.present
       if (sameValue(theirs.draft, mine)) draft.keeper?.settle(theirs.version, null, theirs.savedAt)
+      // Only the name or the fish changed: the coats are as they were when this work began.
+      else if (sameValue(theirs.draft, draft.base)) draft.keeper?.settle(theirs.version, mine, theirs.savedAt)
       else conflict.value = { mine, theirs }
     }
     catch {
@@ -82,10 +83,16 @@ export function useSchemeDraft(scheme: SchemeView): SchemeDraft {
     }
   }
 
+  async function send(unsaved: SchemeBody, version: number): Promise<DraftSavedView> {
+    const saved: DraftSavedView = await $fetch(`/api/schemes/${scheme.id}/draft`, { method: 'PUT', body: { body: unsaved }, headers: { 'if-match': `"v${version}"` } })
+    draft.base = unsaved
+    return saved
+  }
+
   function startKeeping() {
     const shelf = draftShelf(window.localStorage, session.value?.person.id ?? 'nobody')
     draft.keeper = createDraftKeeper(scheme.version, {
-      send: (unsaved, version) => $fetch(`${address}/draft`, { method: 'PUT', body: { body: unsaved }, headers: { 'if-match': `"v${version}"` } }),
+      send,
       failure,
       keep: (unsaved, version) => shelf.write(scheme.id, { version, body: unsaved }),
       forget: () => shelf.remove(scheme.id),
@@ -111,7 +118,7 @@ export function useSchemeDraft(scheme: SchemeView): SchemeDraft {
   }
 
   async function refreshMaterials() {
-    materials.value = await $fetch(`${address}/materials`, { query: { blankId: body.value.blankId } })
+    materials.value = await $fetch(`/api/schemes/${scheme.id}/materials`, { query: { blankId: body.value.blankId } })
   }
 
   watch(() => body.value.blankId, (blankId) => {
@@ -164,10 +171,10 @@ export function useSchemeDraft(scheme: SchemeView): SchemeDraft {
     redoWords: computed(() => history.value.future[0]?.words ?? null),
     async publish(note) {
       await draft.keeper?.flush()
-      return $fetch(`${address}/revisions`, { method: 'POST', body: { note }, headers: { 'if-match': `"v${draft.keeper?.version() ?? scheme.version}"` } })
+      return $fetch(`/api/schemes/${scheme.id}/revisions`, { method: 'POST', body: { note }, headers: { 'if-match': `"v${draft.keeper?.version() ?? scheme.version}"` } })
     },
     async restore(number) {
-      const revision: RevisionView = await $fetch(`${address}/revisions/${number}`)
+      const revision: RevisionView = await $fetch(`/api/schemes/${scheme.id}/revisions/${number}`)
       takeOver(revision.body, `Restore revision ${number}`)
       changed()
       await draft.keeper?.flush()
@@ -177,6 +184,7 @@ export function useSchemeDraft(scheme: SchemeView): SchemeDraft {
       if (!two) return
       conflict.value = null
       materials.value = two.theirs.materials
+      draft.base = two.theirs.draft
       // Both versions stay within reach: the one not kept is one undo away.
       if (keep === 'theirs') {
         history.value = record(startHistory(two.mine), two.theirs.draft, { words: 'Take the other version', field: null, at: Date.now() })

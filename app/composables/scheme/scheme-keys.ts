@@ -1,0 +1,12 @@
+/** Key of the list of schemes in the page's data. */
+export const SCHEMES_KEY = 'schemes'
+
+/** Key of one scheme in the page's data. */
+export function schemeKey(schemeId: string): string {
+  return `scheme ${schemeId}`
+}
+
+/** Key of two versions side by side. */
+export function compareKey(schemeId: string, from: string, to: string): string {
+  return `scheme ${schemeId} ${from} ${to}`
+}

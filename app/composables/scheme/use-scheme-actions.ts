@@ -1,0 +1,39 @@
+import { schemeKey, SCHEMES_KEY } from './scheme-keys'
+import type { z } from 'zod'
+import type { Fork, SchemeChange, SchemeStart } from '#shared/scheme/scheme-input'
+import type { RevisionView, SchemeView } from '#shared/scheme/scheme-view'
+
+/** What can be done with schemes outside their draft; each throws when it is refused. */
+export interface SchemeActions {
+  create: (start: z.input<typeof SchemeStart>) => Promise<SchemeView>
+  /** Renames, sets the fish, retires or brings back; `version` is the one that was read. */
+  change: (scheme: Pick<SchemeView, 'id' | 'version'>, change: SchemeChange) => Promise<SchemeView>
+  /** Starts a colourway from a revision or from the draft. */
+  fork: (schemeId: string, fork: Fork) => Promise<SchemeView>
+  readRevision: (schemeId: string, number: number) => Promise<RevisionView>
+}
+
+/** Starting, naming, retiring and forking schemes. */
+export function useSchemeActions(): SchemeActions {
+  const again = async (...keys: string[]) => refreshNuxtData([SCHEMES_KEY, ...keys])
+
+  return {
+    async create(start) {
+      // The key lets a request that is sent again on a bad line start one scheme, not two.
+      const scheme = await $fetch('/api/schemes', { method: 'POST', body: start, headers: { 'idempotency-key': crypto.randomUUID() } })
+      await again()
+      return scheme
+    },
+    async change({ id, version }, change) {
+      const scheme = await $fetch(`/api/schemes/${id}`, { method: 'PATCH', body: change, headers: { 'if-match': `"v${version}"` } })
+      await again(schemeKey(id))
+      return scheme
+    },
+    async fork(schemeId, fork) {
+      const scheme = await $fetch(`/api/schemes/${schemeId}/fork`, { method: 'POST', body: fork, headers: { 'idempotency-key': crypto.randomUUID() } })
+      await again()
+      return scheme
+    },
+    readRevision: (schemeId, number) => $fetch(`/api/schemes/${schemeId}/revisions/${number}`),
+  }
+}

@@ -1,0 +1,32 @@
+import { computed, type ComputedRef, type Ref } from 'vue'
+import { compareKey, schemeKey } from './scheme-keys'
+import type { CompareView, SchemeLookView, SchemeView } from '#shared/scheme/scheme-view'
+
+/** One scheme as the page reads it. */
+export interface SchemeOnPage<View> {
+  /** Null while it cannot be read; `error` says why. */
+  scheme: ComputedRef<View | null>
+  error: Ref<unknown>
+  refresh: () => Promise<void>
+}
+
+/** A scheme with its draft, materials and revisions, for those who read recipes. */
+export async function useScheme(schemeId: string): Promise<SchemeOnPage<SchemeView>> {
+  const request = useRequestFetch()
+  const { data, error, refresh } = await useAsyncData(schemeKey(schemeId), () => request(`/api/schemes/${schemeId}`), { deep: false })
+  return { scheme: computed(() => data.value ?? null), error, refresh: () => refresh() }
+}
+
+/** A published scheme as everybody in the workshop may see it. */
+export async function useSchemeLook(schemeId: string): Promise<SchemeOnPage<SchemeLookView>> {
+  const request = useRequestFetch()
+  const { data, error, refresh } = await useAsyncData(`${schemeKey(schemeId)} look`, () => request(`/api/schemes/${schemeId}/look`), { deep: false })
+  return { scheme: computed(() => data.value ?? null), error, refresh: () => refresh() }
+}
+
+/** Two versions of a scheme; `draft` or a revision's number. */
+export async function useSchemeCompare(schemeId: string, from: string, to: string): Promise<{ two: ComputedRef<CompareView | null>, error: Ref<unknown> }> {
+  const request = useRequestFetch()
+  const { data, error } = await useAsyncData(compareKey(schemeId, from, to), () => request(`/api/schemes/${schemeId}/compare`, { query: { from, to } }), { deep: false })
+  return { two: computed(() => data.value ?? null), error }
+}
