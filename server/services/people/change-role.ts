@@ -16,14 +16,14 @@ export async function changeRole(ctx: Ctx, personId: string, role: Role): Promis
 }
 
 /**
- * Takes somebody out of the workshop; what they made stays, and their sessions here end with it.
+ * Takes somebody out of the workshop; what they made stays, and their sessions in it end.
  * An owner may take out anybody, everybody may leave; the last owner may not.
  */
 export async function removePerson(ctx: Ctx, personId: string): Promise<void> {
   if (personId !== ctx.personId) assertMay(ctx, 'people:change')
   await inTransaction(ctx, async (tx) => {
     await refuseWithoutOwner(tx, personId, null)
-    await tx.db.update(sessions).set({ workshopId: null })
+    await tx.db.delete(sessions)
       .where(and(eq(sessions.personId, personId), eq(sessions.workshopId, tx.workshopId)))
     await tx.db.delete(memberships).where(membershipOf(tx, personId))
   })

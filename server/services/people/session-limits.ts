@@ -10,5 +10,8 @@ export const SEEN_EVERY = 3 * MINUTE
 /** An invitation can be accepted this long, in milliseconds. */
 export const INVITATION_LASTS = 7 * DAY
 
+/** The link that opens a workshop works this long, in milliseconds. */
+export const SIGN_UP_LASTS = DAY
+
 /** A link to a new password works this long, in milliseconds. */
 export const RESET_LASTS = 60 * MINUTE
