@@ -1,3 +1,5 @@
+import type { Config } from 'tailwindcss'
+
 /**
  * theme.extend for Tailwind v3: names only, every value lives in tokens.css.
  *
@@ -5,7 +7,7 @@
  * says what "here" is, so one button works on all three. Name a surface's own colours only where that surface is laid.
  * No colour takes an opacity modifier: a tint of grey over a judged colour is a lie about that colour.
  */
-export const extend = {
+export const extend: Config['theme'] = {
   colors: {
     here: {
       'DEFAULT': 'var(--here)', 'ink': 'var(--here-ink)', 'quiet': 'var(--here-ink-2)', 'line': 'var(--here-line)',
@@ -41,5 +43,6 @@ export const extend = {
   outlineColor: { ring: 'var(--ring-out)' },
   transitionDuration: { quick: 'var(--quick)', settle: 'var(--settle)' },
   transitionTimingFunction: { settle: 'var(--ease)' },
-  screens: { hand: { max: '560px' }, tablet: { max: '1100px' }, desk: '1101px', finger: { raw: '(pointer: coarse)' } },
-} as const
+  // The narrower comes later, so that it wins.
+  screens: { tablet: { max: '1100px' }, hand: { max: '560px' }, desk: '1101px', finger: { raw: '(pointer: coarse)' } },
+}

@@ -1,4 +1,4 @@
-import sharp from 'sharp'
+import sharp, { type Sharp } from 'sharp'
 import { photoKind } from './photo-kind'
 import { PHOTO_BYTES_MAX, PHOTO_PIXELS_MAX, PREVIEW_SIZE, RENDITION_WIDTHS, type PhotoFormat } from '#shared/photos/photo-limits'
 
@@ -73,6 +73,6 @@ async function drawCopies(bytes: Uint8Array, format: PhotoFormat): Promise<Proce
   }
 }
 
-async function whole(image: sharp.Sharp): Promise<Uint8Array<ArrayBuffer>> {
+async function whole(image: Sharp): Promise<Uint8Array<ArrayBuffer>> {
   return new Uint8Array(await image.toBuffer())
 }
