@@ -33,9 +33,10 @@ export function addressOf(adminUrl: string, role: string, name: string): string 
 /** Makes the two roles where they are missing; asks for the server's superuser. */
 export async function ensureRoles(adminUrl: string): Promise<void> {
   await onClient(adminUrl, async (client) => {
-    for (const role of [OWNER_ROLE, APP_ROLE]) {
+    // The owner may make roles, since the migrations make the app role where a server has none yet.
+    for (const [role, rights] of [[OWNER_ROLE, 'login createrole'], [APP_ROLE, 'login']] as const) {
       const { rowCount } = await client.query('select 1 from pg_roles where rolname = $1', [role])
-      if (rowCount === 0) await client.query(`create role ${role} login`)
+      if (rowCount === 0) await client.query(`create role ${role} ${rights}`)
     }
     // The owner hands rights to the app role, and may act as it.
     await client.query(`grant ${APP_ROLE} to ${OWNER_ROLE}`)

@@ -19,13 +19,17 @@ export function postgresFolders() {
 /** @type {DebianPackage} */
 export const POSTGRESQL = { name: 'postgresql', has: () => postgresFolders().length > 0 }
 
-/** What the tests need beyond the application: a browser, a second S3 client, colour profiles, a reader of photo metadata. */
-export const FOR_TESTS = [
-  { name: 'chromium', has: () => existsSync('/usr/bin/chromium') },
-  { name: 'awscli', has: () => existsSync('/usr/bin/aws') },
+/** A browser, for the tests. @type {DebianPackage} */
+export const CHROMIUM = { name: 'chromium', has: () => existsSync('/usr/bin/chromium') }
+
+/** An S3 client of other make, to judge the photo store. @type {DebianPackage} */
+export const AWSCLI = { name: 'awscli', has: () => existsSync('/usr/bin/aws') }
+
+/** A reader of photo metadata that is not ours, and colour profiles and measurements to hold colours against. @type {DebianPackage[]} */
+export const JUDGES = [
+  { name: 'libimage-exiftool-perl', has: () => existsSync('/usr/bin/exiftool') },
   { name: 'colord-data', has: () => existsSync('/usr/share/color/icc/colord') },
   { name: 'argyll-ref', has: () => existsSync('/usr/share/color/argyll/ref') },
-  { name: 'libimage-exiftool-perl', has: () => existsSync('/usr/bin/exiftool') },
 ]
 
 const APT = ['-o', 'DPkg::Lock::Timeout=300', '-o', 'Acquire::Retries=3', '-q']

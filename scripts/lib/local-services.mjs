@@ -1,4 +1,5 @@
 // The services an application needs beside itself: PostgreSQL, a photo store, a mail server.
+import { mkdirSync } from 'node:fs'
 import { join } from 'node:path'
 import { startCluster } from './postgres.mjs'
 import { say } from './say.mjs'
@@ -28,8 +29,10 @@ export async function openPostgres(options, closing) {
  */
 export async function openPhotoStore({ dataDir, secret, buckets }, closing) {
   const { startObjectServer } = /** @type {StoreModule} */ (await importTypeScript('docker-less-s3-fake/server.ts'))
+  const root = join(dataDir, 'objects')
+  mkdirSync(root, { recursive: true, mode: 0o700 })
   const server = await startObjectServer({
-    root: join(dataDir, 'objects'),
+    root,
     accessKeyId: STORE.accessKeyId,
     secretAccessKey: secret,
     region: STORE.region,

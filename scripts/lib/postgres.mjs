@@ -13,6 +13,8 @@ import { Halt, say } from './say.mjs'
 const SUPERUSER = 'postgres'
 /** Where clusters lie when the data folder is one that only root may enter. */
 const OUT_OF_HOME = '/var/lib/countershade'
+/** The file in a data folder that says where its cluster is, when that is elsewhere. */
+const NOTE = 'postgres-is-at.txt'
 const START_TRIES = 12
 const PAUSE_MS = 1500
 
@@ -49,7 +51,7 @@ async function giveToServer(folder) {
  * @param {string} dataDir
  */
 async function clusterFolder(dataDir) {
-  const note = join(dataDir, 'postgres-is-at.txt')
+  const note = join(dataDir, NOTE)
   if (existsSync(note)) return readFileSync(note, 'utf8').trim()
   const near = join(dataDir, 'postgres')
   await giveToServer(near)
@@ -59,10 +61,24 @@ async function clusterFolder(dataDir) {
   const far = join(OUT_OF_HOME, createHash('sha256').update(dataDir).digest('hex').slice(0, 16))
   mkdirSync(OUT_OF_HOME, { recursive: true })
   chmodSync(OUT_OF_HOME, 0o755)
+  if (existsSync(far)) {
+    const aside = `${far}.of-a-deleted-data-folder-${Date.now()}`
+    renameSync(far, aside)
+    say(`  an older database of the same place was moved to ${aside}`)
+  }
   await giveToServer(far)
   writeFileSync(note, `${far}\n`)
   say(`  PostgreSQL's own account cannot enter ${dataDir}; its data lies in ${far}`)
   return far
+}
+
+/**
+ * Removes the cluster of a data folder that is done with; it must have been stopped.
+ * @param {string} dataDir
+ */
+export function removeCluster(dataDir) {
+  const note = join(dataDir, NOTE)
+  rmSync(existsSync(note) ? readFileSync(note, 'utf8').trim() : join(dataDir, 'postgres'), { recursive: true, force: true })
 }
 
 /** @param {string} data */

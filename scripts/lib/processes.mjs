@@ -4,7 +4,7 @@ import { readFileSync } from 'node:fs'
 import { setTimeout as delay } from 'node:timers/promises'
 import { Halt } from './say.mjs'
 
-/** @typedef {{ cwd?: string, env?: NodeJS.ProcessEnv, show?: boolean }} RunOptions */
+/** @typedef {{ cwd?: string, env?: NodeJS.ProcessEnv, show?: boolean, limitMs?: number }} RunOptions */
 /** @typedef {{ code: number, output: string }} RunResult */
 
 /** @type {Set<import('node:child_process').ChildProcess>} */
@@ -31,7 +31,7 @@ export function startProgram(command, args, { cwd, env, stdio = 'pipe' } = {}) {
  * @param {RunOptions} options
  * @returns {Promise<RunResult>}
  */
-export function run(command, args, { show = false, ...options } = {}) {
+export function run(command, args, { show = false, limitMs, ...options } = {}) {
   return new Promise((resolve, reject) => {
     const child = startProgram(command, args, options)
     /** @type {Buffer[]} */
@@ -42,8 +42,15 @@ export function run(command, args, { show = false, ...options } = {}) {
         if (show) to.write(chunk)
       })
     }
+    const limit = limitMs === undefined
+      ? undefined
+      : setTimeout(() => {
+          output.push(Buffer.from(`\nstopped after ${limitMs / 1000} seconds\n`))
+          void stopProgram(child)
+        }, limitMs)
     child.once('error', reject)
     child.once('close', (code, signal) => {
+      clearTimeout(limit)
       resolve({ code: code ?? 1, output: Buffer.concat(output).toString('utf8') + (signal ? `\nended by ${signal}\n` : '') })
     })
   })

@@ -54,4 +54,5 @@ export function sayFailure(error) {
     return
   }
   process.stderr.write(`\n✗ ${error instanceof Error ? error.stack ?? error.message : String(error)}\n`)
+  if (error instanceof Error && error.cause) process.stderr.write(`  because: ${error.cause instanceof Error ? error.cause.message : error.cause}\n`)
 }
