@@ -15,6 +15,8 @@ export interface SurfacePoint {
   area: number
 }
 
+const TINY = 1e-300
+
 /** An empty point to fill. */
 export function newSurfacePoint(): SurfacePoint {
   return { y: 0, z: 0, yf: 0, zf: 0, yt: 0, zt: 0, nx: 0, ny: 0, nz: 0, area: 0 }
@@ -26,10 +28,13 @@ export function girthPoint(s: Section, phi: number, out: SurfacePoint): void {
   const sin = Math.sin(phi)
   const ac = Math.abs(cos)
   const as = Math.abs(sin)
-  const pc = ac ** (s.n - 1)
-  const ps = as ** (s.n - 1)
-  const Q = pc * ac + ps * as
-  const rho = Q ** (-1 / s.n)
+  // Logarithms once, then exponentials: half the time of three powers.
+  const qc = ac > TINY ? Math.exp(s.n * Math.log(ac)) : 0
+  const qs = as > TINY ? Math.exp(s.n * Math.log(as)) : 0
+  const Q = qc + qs
+  const rho = Math.exp(-Math.log(Q) / s.n)
+  const pc = ac > TINY ? qc / ac : 0
+  const ps = as > TINY ? qs / as : 0
   const rhoF = rho * ((cos < 0 ? -pc : pc) * sin - (sin < 0 ? -ps : ps) * cos) / Q
   out.y = s.c + s.h * rho * cos + s.g * sin * sin
   out.z = s.w * rho * sin
@@ -43,15 +48,15 @@ export function surfacePoint(s: Section, phi: number, out: SurfacePoint): void {
   const sin = Math.sin(phi)
   const ac = Math.abs(cos)
   const as = Math.abs(sin)
-  const lc = ac > 1e-300 ? Math.log(ac) : -690
-  const ls = as > 1e-300 ? Math.log(as) : -690
+  const lc = ac > TINY ? Math.log(ac) : -690
+  const ls = as > TINY ? Math.log(as) : -690
   const qc = Math.exp(s.n * lc)
   const qs = Math.exp(s.n * ls)
   const Q = qc + qs
   const lQ = Math.log(Q)
   const rho = Math.exp(-lQ / s.n)
-  const pc = ac > 1e-300 ? qc / ac : 0
-  const ps = as > 1e-300 ? qs / as : 0
+  const pc = ac > TINY ? qc / ac : 0
+  const ps = as > TINY ? qs / as : 0
   const rhoF = rho * ((cos < 0 ? -pc : pc) * sin - (sin < 0 ? -ps : ps) * cos) / Q
   const rhoN = rho * (lQ / (s.n * s.n) - (qc * lc + qs * ls) / (s.n * Q))
   const rhoT = rhoN * s.nt

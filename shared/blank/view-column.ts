@@ -1,5 +1,6 @@
 import { newSection, tOfShare, type Profile, type Section } from './profile'
-import { girthPoint, type SurfacePoint } from './surface-point'
+import { girthPoint, surfacePoint, type SurfacePoint } from './surface-point'
+import { hermite } from './surface-table'
 import type { ViewTurn } from './view'
 
 const CIRCLE = 64
@@ -16,9 +17,10 @@ export interface ViewColumn {
   low: number
   phiHigh: number
   phiLow: number
-  /** Girth angles and heights of the visible half, `count` of them, falling in height. */
+  /** Girth angles and heights of the visible half, `count` of them, falling in height, and the change of height with angle. */
   phis: Float64Array
   heights: Float64Array
+  slopes: Float64Array
   count: number
   /** Where the last search ended. */
   cursor: number
@@ -28,7 +30,7 @@ export interface ViewColumn {
 export function newViewColumn(): ViewColumn {
   return {
     section: newSection(), high: 0, low: 0, phiHigh: 0, phiLow: Math.PI,
-    phis: new Float64Array(CIRCLE + 3), heights: new Float64Array(CIRCLE + 3), count: 0, cursor: 0,
+    phis: new Float64Array(CIRCLE + 3), heights: new Float64Array(CIRCLE + 3), slopes: new Float64Array(CIRCLE + 3), count: 0, cursor: 0,
   }
 }
 
@@ -51,7 +53,7 @@ function extreme(section: Section, turn: ViewTurn, phi: number, sign: 1 | -1, po
  */
 export function fillViewColumn(profile: Profile, turn: ViewTurn, x: number, point: SurfacePoint, out: ViewColumn): boolean {
   if (x <= 0 || x >= profile.length) return false
-  const { section, phis, heights } = out
+  const { section, phis, heights, slopes } = out
   profile.section(tOfShare(x / profile.length), section)
   if (section.h <= 0 || section.w <= 0) return false
   const heightAt = (phi: number) => {
@@ -83,6 +85,7 @@ export function fillViewColumn(profile: Profile, turn: ViewTurn, x: number, poin
     if (phi - out.phiHigh < 1e-3 || out.phiLow - phi < 1e-3) continue
     phis[count] = phi
     heights[count] = heightAt(phi)
+    slopes[count] = point.yf * turn.cos - point.zf * turn.sin
     count++
   }
   phis[count] = out.phiLow
@@ -92,20 +95,27 @@ export function fillViewColumn(profile: Profile, turn: ViewTurn, x: number, poin
   return true
 }
 
-/** Girth angle of the visible place at a height of the rolled frame. Asking for heights in order is quickest. */
+/** Gaps next to the highest and lowest point in which the angle runs too steeply with height to be looked up. */
+const STEEP = 2
+
+/** Girth angle of the visible place at a height of the rolled frame, to 1e-5. Asking for heights in order is quickest. */
 export function phiAtHeight(column: ViewColumn, turn: ViewTurn, height: number, point: SurfacePoint): number {
-  const { phis, heights, section } = column
+  const { phis, heights, slopes, section } = column
   const last = column.count - 2
   let k = column.cursor
   while (k < last && (heights[k + 1] as number) > height) k++ // k stays within the filled half
   while (k > 0 && (heights[k] as number) < height) k--
   column.cursor = k
   const [a, b] = [phis[k] as number, phis[k + 1] as number]
-  const share = ((heights[k] as number) - height) / ((heights[k] as number) - (heights[k + 1] as number))
+  const rise = (heights[k + 1] as number) - (heights[k] as number)
+  const share = (height - (heights[k] as number)) / rise
+  if (k > STEEP && k < last - STEEP) {
+    return hermite(a, 1 / (slopes[k] as number), b, 1 / (slopes[k + 1] as number), rise, share)
+  }
   // Beside the highest and lowest point the height runs like a square.
   const f = k === 0 ? Math.sqrt(Math.max(0, share)) : k === last ? 1 - Math.sqrt(Math.max(0, 1 - share)) : share
   let phi = a + f * (b - a)
-  const rounds = k === 0 || k === last ? 3 : 1
+  const rounds = k === 0 || k === last ? 3 : 2
   for (let i = 0; i < rounds; i++) {
     girthPoint(section, phi, point)
     const slope = point.yf * turn.cos - point.zf * turn.sin
@@ -115,4 +125,10 @@ export function phiAtHeight(column: ViewColumn, turn: ViewTurn, height: number, 
     else if (phi > b) phi = b
   }
   return phi
+}
+
+/** Change of the outline's height with x at the highest (or lowest) point of a column. */
+export function outlineSlope(column: ViewColumn, turn: ViewTurn, phi: number, point: SurfacePoint): number {
+  surfacePoint(column.section, phi, point)
+  return (point.yt * turn.cos - point.zt * turn.sin) / column.section.xt
 }

@@ -1,6 +1,8 @@
 import { goToColumn, heightAtPixel, newBodySampler, writeBodySample, xAtPixel, type BodySampler } from './body-sample'
 import { FIN_EDGE_ON, newFinScratch, rimDistance, writeFinSample, type FinScratch } from './fin-sample'
 import type { PreparedBlank } from './prepared-blank'
+import { newSection, tOfShare } from './profile'
+import { outlineSlope } from './view-column'
 import { emptyViewSamples, PART_NONE, type ViewSamples } from './view-sample-lists'
 import type { View } from './view'
 
@@ -8,46 +10,27 @@ export { emptyViewSamples, PART_BODY, PART_FIN, PART_GAP, PART_NONE, samplesTran
 export { fitView, type ViewWish } from './fit-view'
 export type { View } from './view'
 
-/** Outline of the body in every column of a view, heights of the rolled frame in mm; NaN beside the body. */
-interface Silhouette {
-  high: Float64Array
-  low: Float64Array
-}
-
 const clamp = (value: number) => Math.min(1, Math.max(0, value))
 
-function silhouetteOf(sampler: BodySampler): Silhouette {
-  const { width } = sampler.view
-  const high = new Float64Array(width).fill(Number.NaN)
-  const low = new Float64Array(width).fill(Number.NaN)
-  for (let px = 0; px < width; px++) {
-    if (!goToColumn(sampler, xAtPixel(sampler, px + 0.5))) continue
-    high[px] = sampler.column.high
-    low[px] = sampler.column.low
-  }
-  return { high, low }
-}
-
-/** Cosine of the slope of an outline: turns a distance measured up the column into one across the outline. */
-function steepness(line: Float64Array, px: number, step: number): number {
-  const here = line[px] ?? Number.NaN
-  const before = line[px - 1] ?? Number.NaN
-  const after = line[px + 1] ?? Number.NaN
-  const rise = Number.isNaN(before) ? after - here : Number.isNaN(after) ? here - before : (after - before) / 2
-  return Number.isNaN(rise) ? 1 : step / Math.hypot(step, rise)
-}
-
-function roomNeeded(blank: PreparedBlank, view: View, line: Silhouette): number {
+/** Enough room for a view: every section fits in a box of its own height and width. */
+function roomNeeded(sampler: BodySampler): number {
+  const { blank, view, turn } = sampler
+  const section = newSection()
   let room = 0
   for (let px = 0; px < view.width; px++) {
-    const tall = (line.high[px] ?? Number.NaN) - (line.low[px] ?? Number.NaN)
-    if (tall > 0) room += Math.ceil(tall * view.scale) + 4
+    const x = xAtPixel(sampler, px + 0.5)
+    if (x <= 0 || x >= blank.shape.length) continue
+    blank.profile.section(tOfShare(x / blank.shape.length), section)
+    room += Math.ceil(2 * view.scale * ((section.h + Math.abs(section.g)) * Math.abs(turn.cos) + section.w * Math.abs(turn.sin))) + 4
   }
   for (const fin of blank.fins) {
     room += (Math.ceil((fin.right - fin.left) * view.scale) + 5) * (Math.ceil((fin.high - fin.low) * view.scale) + 5)
   }
   return room
 }
+
+/** Turns a distance measured up the column into one across an outline of that slope. */
+const across = (slope: number) => 1 / Math.sqrt(1 + slope * slope)
 
 function cut(samples: ViewSamples, count: number): ViewSamples {
   return {
@@ -72,24 +55,25 @@ function cut(samples: ViewSamples, count: number): ViewSamples {
   }
 }
 
-function addBody(sampler: BodySampler, line: Silhouette, samples: ViewSamples, covered: Float32Array): number {
+function addBody(sampler: BodySampler, samples: ViewSamples, covered: Float32Array): number {
   const { view, turn } = sampler
   const pixel = 1 / view.scale
   let count = 0
   for (let px = 0; px < view.width; px++) {
     if (!goToColumn(sampler, xAtPixel(sampler, px + 0.5))) continue
-    const { high, low } = sampler.column
+    const { high, low, phiHigh, phiLow } = sampler.column
     const edges = [view.centreY - turn.way * view.scale * high, view.centreY - turn.way * view.scale * low]
     const first = Math.max(0, Math.floor(Math.min(...edges)))
     const last = Math.min(view.height - 1, Math.floor(Math.max(...edges)))
-    const flatter = [steepness(line.high, px, pixel), steepness(line.low, px, pixel)] as const
+    const acrossHigh = across(outlineSlope(sampler.column, turn, phiHigh, sampler.point))
+    const acrossLow = across(outlineSlope(sampler.column, turn, phiLow, sampler.point))
     // A pixel cut by the outline is sampled a little inside it, where most of what shows of it lies.
     const inset = Math.min(0.25 * pixel, 0.25 * (high - low))
     for (let py = first; py <= last; py++) {
       const height = heightAtPixel(sampler, py + 0.5)
       const seen = Math.min(high - inset, Math.max(low + inset, height))
       const kept = writeBodySample(sampler, seen, samples, count) - Math.min(high - seen, seen - low)
-      const cosine = high - height < height - low ? flatter[0] : flatter[1]
+      const cosine = high - height < height - low ? acrossHigh : acrossLow
       const share = clamp(0.5 + (Math.min(high - height, height - low) + kept) * cosine * view.scale)
       if (share <= 0.004) continue
       const index = py * view.width + px
@@ -138,10 +122,9 @@ function addFins(sampler: BodySampler, samples: ViewSamples, covered: Float32Arr
 /** Everything a view shows of the painted blank, one sample a pixel and part, at pixel centres; body first, then fins. */
 export function viewSamples(blank: PreparedBlank, view: View): ViewSamples {
   const sampler = newBodySampler(blank, view)
-  const line = silhouetteOf(sampler)
-  const samples = emptyViewSamples(view, roomNeeded(blank, view, line))
+  const samples = emptyViewSamples(view, roomNeeded(sampler))
   const covered = new Float32Array(view.width * view.height)
-  const bodies = addBody(sampler, line, samples, covered)
+  const bodies = addBody(sampler, samples, covered)
   return cut(samples, addFins(sampler, samples, covered, bodies))
 }
 
