@@ -1,4 +1,4 @@
-import type { ViewSamples } from '#shared/blank/view-sample-lists'
+import { PART_FIN, type ViewSamples } from '#shared/blank/view-sample-lists'
 import type { PictureOptions } from './picture-options'
 import { decodeChannel } from '#shared/optics/screen-colour'
 import { dither, screenCode } from './screen-code'
@@ -9,18 +9,19 @@ export interface Canvas {
   height: number
   /** Three a pixel. */
   light: Float32Array
-  /** Share of each pixel that is filled. */
+  /** Share of each pixel that is filled, and the part of it that the body fills. */
   cover: Float32Array
+  body: Float32Array
 }
 
 /** An empty canvas. */
 export function newCanvas(width: number, height: number): Canvas {
-  return { width, height, light: new Float32Array(3 * width * height), cover: new Float32Array(width * height) }
+  return { width, height, light: new Float32Array(3 * width * height), cover: new Float32Array(width * height), body: new Float32Array(width * height) }
 }
 
 /** A copy to draw on further. */
-export function copyCanvas({ width, height, light, cover }: Canvas): Canvas {
-  return { width, height, light: light.slice(), cover: cover.slice() }
+export function copyCanvas({ width, height, light, cover, body }: Canvas): Canvas {
+  return { width, height, light: light.slice(), cover: cover.slice(), body }
 }
 
 /** A canvas with the light of every sample in its pixel. */
@@ -29,6 +30,7 @@ export function canvasOf(samples: ViewSamples, light: Float32Array): Canvas {
   for (let i = 0; i < samples.count; i++) {
     const pixel = samples.pixel[i]!, share = samples.coverage[i]!
     canvas.cover[pixel]! += share
+    if (samples.part[i]! < PART_FIN) canvas.body[pixel]! += share
     for (let c = 0; c < 3; c++) canvas.light[3 * pixel + c]! += share * light[3 * i + c]!
   }
   for (let pixel = 0; pixel < canvas.cover.length; pixel++) if (canvas.cover[pixel]! > 1) canvas.cover[pixel] = 1
@@ -42,6 +44,12 @@ export function layOver({ light, cover }: Canvas, pixel: number, share: number, 
   light[3 * pixel + 1] = green + left * light[3 * pixel + 1]!
   light[3 * pixel + 2] = blue + left * light[3 * pixel + 2]!
   cover[pixel] = share + left * cover[pixel]!
+}
+
+/** Lays light over a pixel but not over the body in it. */
+export function layOverFins(canvas: Canvas, pixel: number, share: number, red: number, green: number, blue: number): void {
+  const free = 1 - Math.min(1, canvas.body[pixel]!)
+  if (free > 0) layOver(canvas, pixel, free * share, free * red, free * green, free * blue)
 }
 
 /** Slips light under what a pixel already shows. */

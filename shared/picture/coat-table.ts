@@ -127,8 +127,8 @@ function fillBetween(array: Float32Array, width: number): void {
 
 /** Aluminium glints most, fine pearls (whose tilts spread wide) least. Chosen by eye. */
 function sparkleOf({ oxide, sigma }: Flake): number {
-  if (oxide === 'aluminium') return 0.2
-  return sigma > 10 ? 0.05 : 0.12
+  if (oxide === 'aluminium') return 0.14
+  return sigma > 10 ? 0.04 : 0.08
 }
 
 function emptyLevel({ R, through }: CoatTable): number {

@@ -1,23 +1,20 @@
-import type { DrawnLip, DrawnParts, DrawnPin, DrawnRing, PicturePoint } from '#shared/blank/drawn-parts'
-import { layOver, layUnder, type Canvas } from './canvas'
+import type { DrawnLip, DrawnParts, DrawnRing, PicturePoint } from '#shared/blank/drawn-parts'
+import { layOver, layOverFins, layUnder, type Canvas } from './canvas'
 
 type Put = typeof layOver
 
 /** Bright wire against the light of a white surface, and the one highlight it carries. Chosen by eye. */
 const STEEL = { dark: 0.045, body: 0.36, shine: 0.85, narrow: 0.055 }
 /** A clear plate darkens what lies behind it; its cut edges collect light. */
-const PLATE = { behind: 0.75, haze: 0.035, edge: 0.42, sheen: 0.08 }
+const PLATE = { behind: 0.75, haze: 0.07, edge: 0.5, sheen: 0.1 }
+/** Wire is drawn stouter than it is, or it would vanish beside the body. */
+const STOUT = 1.7
 
-/** Draws what hides behind the body: the lip, and rings on the far side. */
-export function drawBehind(canvas: Canvas, parts: DrawnParts): void {
-  for (const ring of parts.rings) if (ring.isBehind) drawRing(canvas, ring, layUnder)
-  if (parts.lip) drawLip(canvas, parts.lip)
-}
-
-/** Draws what stands in front: pins in the joints, rings for line and hooks. */
-export function drawInFront(canvas: Canvas, parts: DrawnParts): void {
-  for (const pin of parts.pins) drawPin(canvas, pin)
-  for (const ring of parts.rings) if (!ring.isBehind) drawRing(canvas, ring, layOver)
+/** Draws the lip, the rings and the pins of joints. What the body hides of them stays hidden; rings stand before fins. */
+export function drawHardware(canvas: Canvas, { lip, rings, pins }: DrawnParts): void {
+  if (lip) drawLip(canvas, lip)
+  for (const pin of pins) drawRod(canvas, pin.ends[0], pin.ends[1], pin.half, layOver)
+  for (const ring of rings) drawRing(canvas, ring, ring.isInFront ? layOver : layOverFins)
 }
 
 /** Light of a wire across its width: `across` -1 below to 1 above, in the picture. */
@@ -36,34 +33,26 @@ function forBox(canvas: Canvas, from: PicturePoint, to: PicturePoint, around: nu
   }
 }
 
-function drawRing(canvas: Canvas, ring: DrawnRing, put: Put): void {
-  const { centre: [cx, cy], halfAxes: [long, short], angle, wire, stem } = ring
+function drawRing(canvas: Canvas, { centre: [cx, cy], halfAxes: [wide, tall], wire: thin, stem }: DrawnRing, put: Put): void {
+  const wire = STOUT * thin
   drawRod(canvas, stem[0], stem[1], wire, put)
-  const cos = Math.cos(angle), sin = Math.sin(angle)
-  const reach = Math.max(long, short) + wire + 1
-  forBox(canvas, [cx, cy], [cx, cy], reach, (x, y, pixel) => {
-    const a = (x - cx) * cos + (y - cy) * sin, b = -(x - cx) * sin + (y - cy) * cos
-    const { off, nx, ny } = fromEllipse(a, b, long, Math.max(short, 0.01))
+  forBox(canvas, [cx, cy], [cx, cy], Math.max(wide, tall) + wire + 1, (x, y, pixel) => {
+    const { off, ny } = fromEllipse(x - cx, y - cy, wide, Math.max(tall, 0.01))
     const share = Math.min(1, Math.max(0, wire - Math.abs(off) + 0.5))
     if (share <= 0) return
-    // Outward across the wire, turned back into the picture, where down is +y.
-    const up = -(nx * sin + ny * cos)
-    const light = share * wireLight(Math.min(1, Math.max(-1, off / wire)), up)
+    // Down is + in the picture.
+    const light = share * wireLight(Math.min(1, Math.max(-1, off / wire)), -ny)
     put(canvas, pixel, share, light, light, light)
   })
 }
 
-/** Distance from an ellipse, + outside, and the outward direction there; first order, good near the line. */
-function fromEllipse(a: number, b: number, long: number, short: number): { off: number, nx: number, ny: number } {
-  const value = Math.hypot(a / long, b / short)
-  const gx = a / (long * long), gy = b / (short * short)
+/** Distance from an ellipse, + outside, and how far down the outward direction points there; first order, good near the line. */
+function fromEllipse(x: number, y: number, wide: number, tall: number): { off: number, ny: number } {
+  const value = Math.hypot(x / wide, y / tall)
+  const gx = x / (wide * wide), gy = y / (tall * tall)
   const slope = Math.hypot(gx, gy)
-  if (slope === 0) return { off: -Math.min(long, short), nx: 0, ny: 1 }
-  return { off: (value - 1) * value / slope, nx: gx / slope, ny: gy / slope }
-}
-
-function drawPin(canvas: Canvas, { ends, half }: DrawnPin): void {
-  drawRod(canvas, ends[0], ends[1], half, layOver)
+  if (slope === 0) return { off: -Math.min(wide, tall), ny: 1 }
+  return { off: (value - 1) * value / slope, ny: gy / slope }
 }
 
 function drawRod(canvas: Canvas, from: PicturePoint, to: PicturePoint, half: number, put: Put): void {
@@ -82,7 +71,8 @@ function drawRod(canvas: Canvas, from: PicturePoint, to: PicturePoint, half: num
   })
 }
 
-function drawLip(canvas: Canvas, { corners, edge, flatness, facing }: DrawnLip): void {
+function drawLip(canvas: Canvas, { corners, edge, flatness, facing, isInFront }: DrawnLip): void {
+  const put = isInFront ? layOver : layUnder
   const [a, b, c, d] = corners
   const turned = (b[0] - a[0]) * (d[1] - a[1]) - (b[1] - a[1]) * (d[0] - a[0]) < 0
   const ring = turned ? [a, d, c, b] : [a, b, c, d]
@@ -94,10 +84,10 @@ function drawLip(canvas: Canvas, { corners, edge, flatness, facing }: DrawnLip):
     const inside = insideOf(ring, x, y)
     const share = Math.min(1, Math.max(0, inside + 0.5))
     if (share <= 0) return
-    const rim = Math.exp(-((inside / Math.max(0.8, edge)) ** 2))
-    const hidden = 1 - PLATE.behind + 0.45 * rim
+    const rim = Math.exp(-((inside / Math.max(0.9, 0.4 * edge)) ** 2))
+    const hidden = 1 - PLATE.behind + 0.5 * rim
     const light = share * (PLATE.haze + sheen + PLATE.edge * rim)
-    layUnder(canvas, pixel, share * hidden, light, light, light)
+    put(canvas, pixel, share * hidden, light, light, light)
   })
 }
 

@@ -14,6 +14,8 @@ const FORM = 0.85
 /** Mirrored light of a matt film against the lobe worked out. Chosen by eye. */
 const MATT_SHARE = 0.62
 const GLOSS_ON_FINS = 0.8
+/** The rounded rim of a fin is too narrow to carry a highlight without breaking it into dots, mm. */
+const RIM_WITHOUT_GLOSS = 0.8
 /** Light that comes out of the open gap of a joint. */
 const GAP_LIGHT = 0.12
 const GLINT_LEAST = 0.15
@@ -95,7 +97,7 @@ export function glossLight(tables: LightTables, x: number, y: number, z: number)
 }
 
 function glossAt({ samples, glossNormal }: SampleForm, i: number, tables: LightTables): number {
-  const share = samples.part[i]! >= PART_FIN ? GLOSS_ON_FINS : 1
+  const share = samples.part[i]! >= PART_FIN ? GLOSS_ON_FINS * Math.min(1, samples.rim[i]! / RIM_WITHOUT_GLOSS) ** 2 : 1
   return share * glossLight(tables, glossNormal[3 * i]!, glossNormal[3 * i + 1]!, glossNormal[3 * i + 2]!)
 }
 

@@ -7,7 +7,7 @@ import { canonicalJson } from '#shared/scheme/canonical'
 import { canvasOf, copyCanvas, encodeCanvas, type Canvas } from './canvas'
 import { coatTable, type CoatTable } from './coat-table'
 import { drawEye } from './draw-eye'
-import { drawBehind, drawInFront } from './draw-hardware'
+import { drawHardware } from './draw-hardware'
 import { lightKey } from './light-rig'
 import { lightTables, type LightTables } from './light-tables'
 import type { Look } from './look'
@@ -25,6 +25,11 @@ const JUMP = { screen: 0.1, print: 0.035 }
 const SMALL_WIDTH = 320
 /** How many of each are kept. */
 const KEPT = { blanks: 4, views: 4, refinedViews: 2, tables: 120, lights: 8 }
+/** Share of the jumps of a picture that kept samples must hold to be used again: an edit of one coat moves few of them. */
+const SAME_JUMPS = 0.9
+
+/** Several samples for each of some pixels of a view. */
+interface RefinedView { pixels: Uint32Array, kit: ViewKit }
 
 /** Draws looks and keeps what a next picture can use: views, deposits, the coats below an edit, tables and lights. */
 export interface PictureBench {
@@ -37,7 +42,7 @@ export interface PictureBench {
 /** Puts up an empty bench. */
 export function pictureBench(): PictureBench {
   const blanks = keepSome<PreparedBlank>(KEPT.blanks), lights = keepSome<LightTables>(KEPT.lights)
-  const views = keepSome<ViewKit>(KEPT.views), refinedViews = keepSome<ViewKit>(KEPT.refinedViews)
+  const views = keepSome<ViewKit>(KEPT.views), refinedViews = keepSome<RefinedView>(KEPT.refinedViews)
   const tables = keepSome<CoatTable>(KEPT.tables)
 
   return {
@@ -106,8 +111,12 @@ export function pictureBench(): PictureBench {
     const pixels = isSmall ? shownPixels(canvas) : jumpingPixels(canvas, options.quality === 'print' ? JUMP.print : JUMP.screen)
     if (pixels.length === 0) return canvas
     const places = isSmall ? NINE_PLACES : FOUR_PLACES
-    const kit = refinedViews(`${key}${places.length}${pixels.join()}`, () => viewKit(blank, view, subpixelSamples(blank, view, pixels, places)))
-    putRefined(canvas, pixels, kit.samples, lit(kit, look, options), places.length / 2)
+    const refined = refinedViews(
+      `${places.length}${key}`,
+      () => ({ pixels, kit: viewKit(blank, view, subpixelSamples(blank, view, pixels, places)) }),
+      kept => shareHeld(kept.pixels, pixels) >= SAME_JUMPS,
+    )
+    putRefined(canvas, refined.pixels, refined.kit.samples, lit(refined.kit, look, options), places.length / 2)
     return canvas
   }
 
@@ -115,12 +124,11 @@ export function pictureBench(): PictureBench {
   function finish(look: Look, options: PictureOptions, painted: Canvas): Picture {
     const { kit, view } = kitOf(look, options)
     const canvas = copyCanvas(painted)
-    drawBehind(canvas, kit.parts)
     const { eyes } = look.body
     if (eyes && eyesAreFitted(look, options.upTo)) {
       for (const eye of kit.parts.eyes) drawEye(canvas, eye, eyes, lightOf(options.light), options.plain)
     }
-    drawInFront(canvas, kit.parts)
+    drawHardware(canvas, kit.parts)
     return {
       width: options.width, height: options.height, rgba: encodeCanvas(canvas, options), mmPerPixel: 1 / view.scale,
       origin: projectPoint(view, look.materials.blank.shape.length, 0, 0, 0),
@@ -142,11 +150,22 @@ function coarser(options: PictureOptions): PictureOptions {
   }
 }
 
-/** Keeps the few values that were asked for last. */
-function keepSome<T>(most: number): (key: string, make: () => T) => T {
+/** Share of `wanted` that `held` holds; both in rising order. */
+function shareHeld(held: Uint32Array, wanted: Uint32Array): number {
+  let found = 0, at = 0
+  for (const pixel of wanted) {
+    while (at < held.length && held[at]! < pixel) at++
+    if (held[at] === pixel) found++
+  }
+  return found / wanted.length
+}
+
+/** Keeps the few values that were asked for last; one that no longer serves is made anew. */
+function keepSome<T>(most: number): (key: string, make: () => T, serves?: (kept: T) => boolean) => T {
   const kept = new Map<string, T>()
-  return (key, make) => {
-    const value = kept.get(key) ?? make()
+  return (key, make, serves = () => true) => {
+    const found = kept.get(key)
+    const value = found !== undefined && serves(found) ? found : make()
     kept.delete(key)
     kept.set(key, value)
     if (kept.size > most) kept.delete(kept.keys().next().value!) // there is one: size is above 0

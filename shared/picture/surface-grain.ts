@@ -3,7 +3,7 @@ import { hashShare, noise2 } from './deposit/noise'
 
 /** A clear is never ruled: its surface tilts by so much, radians rms, in waves of these lengths, mm. Chosen by eye. */
 const WAVE_TILT = 0.02
-const WAVES = [{ length: 8, share: 0.8 }, { length: 2.6, share: 0.6 }] as const
+const WAVES = [{ length: 8, share: 0.88 }, { length: 2.6, share: 0.47 }] as const
 /** Cells of the sparkle of flakes, mm, and their shares. */
 const SPARKLE_CELLS = [{ size: 0.085, share: 1 }, { size: 0.2, share: 0.7 }] as const
 /** Pixel size, mm, up to which sparkle is seen whole; above it averages away. */
