@@ -1,3 +1,4 @@
+import type { FinOutline } from './fin-outline'
 import { jointDip, jointPlace, jointShade, jointTilt, type JointPlace } from './joint-place'
 import type { PreparedBlank } from './prepared-blank'
 import { reliefOf, reliefPlace, type Relief, type ReliefPlace } from './relief'
@@ -24,9 +25,9 @@ export interface BodySampler {
   relief: Relief
   reliefPlace: ReliefPlace
   jointPlace: JointPlace
-  /** Whether a fin stands on the back, and on the belly, of the current column. */
-  finOnBack: boolean
-  finOnBelly: boolean
+  /** How far along the body, mm, the current column is from the nearest fin root on the back, and on the belly; 0 beside one. */
+  toBackFin: number
+  toBellyFin: number
 }
 
 /** Makes ready to sample the body in a view. */
@@ -37,7 +38,7 @@ export function newBodySampler(blank: PreparedBlank, view: View): BodySampler {
     relief: reliefOf(blank),
     reliefPlace: { slopeTail: 0, slopeX: 0, slopeY: 0, light: 1 },
     jointPlace: { distance: Infinity, round: 1, towardX: 0, towardY: 0 },
-    finOnBack: false, finOnBelly: false,
+    toBackFin: Infinity, toBellyFin: Infinity,
   }
 }
 
@@ -56,15 +57,16 @@ export function goToColumn(sampler: BodySampler, x: number): boolean {
   const { blank, column, row } = sampler
   if (!fillViewColumn(blank.profile, sampler.turn, x, sampler.point, column)) return false
   fillSurfaceRow(blank.table, column.section.t, row)
-  sampler.finOnBack = false
-  sampler.finOnBelly = false
-  const reach = blank.shape.length * 0.01
-  blank.shape.fins.forEach((fin, i) => {
-    const outline = blank.fins[i]
-    if (!outline || x < outline.left - reach || x > outline.right + reach) return
-    if (fin.measuredFrom === 'back') sampler.finOnBack = true
-    if (fin.measuredFrom === 'belly') sampler.finOnBelly = true
-  })
+  sampler.toBackFin = Infinity
+  sampler.toBellyFin = Infinity
+  for (let i = 0; i < blank.fins.length; i++) {
+    const outline = blank.fins[i] as FinOutline // i runs over the list
+    const measuredFrom = blank.shape.fins[i]?.measuredFrom
+    if (measuredFrom === 'point') continue
+    const away = Math.max(0, outline.rootLeft - x, x - outline.rootRight)
+    if (measuredFrom === 'back') sampler.toBackFin = Math.min(sampler.toBackFin, away)
+    else sampler.toBellyFin = Math.min(sampler.toBellyFin, away)
+  }
   return true
 }
 
@@ -97,10 +99,12 @@ export function writeBodySample(sampler: BodySampler, height: number, samples: V
   const relief = sampler.reliefPlace
   reliefPlace(sampler.relief, section.x, point.y, Math.abs(point.z), row.u, v, relief)
   let light = relief.light
-  if (sampler.finOnBack || sampler.finOnBelly) {
-    const reach = 1.1 * length / 100 + 0.3
-    if (sampler.finOnBack && V > 0) light *= 1 - ROOT_SHADE * Math.exp(-((row.V[0] as number) - V) / reach)
-    if (sampler.finOnBelly && V < 0) light *= 1 - ROOT_SHADE * Math.exp(-(V - (row.V[TABLE_COLUMNS - 1] as number)) / reach)
+  const reach = 1.1 * length / 100 + 0.3
+  if (V > 0 && sampler.toBackFin < 4 * reach) {
+    light *= 1 - ROOT_SHADE * Math.exp(-Math.hypot(sampler.toBackFin, (row.V[0] as number) - V) / reach)
+  }
+  else if (V < 0 && sampler.toBellyFin < 4 * reach) {
+    light *= 1 - ROOT_SHADE * Math.exp(-Math.hypot(sampler.toBellyFin, V - (row.V[TABLE_COLUMNS - 1] as number)) / reach)
   }
   let inside = Math.min(column.high - height, height - column.low)
   const joint = sampler.jointPlace

@@ -14,6 +14,9 @@ export interface FinOutline {
   right: number
   low: number
   high: number
+  /** Ends of the root along the body. */
+  rootLeft: number
+  rootRight: number
   /** The fin's own zero on the body. */
   rootX: number
   rootY: number
@@ -121,6 +124,7 @@ export function finOutline(fin: Fin, profile: Profile): FinOutline {
   return {
     id: fin.id, xs, ys,
     left: Math.min(...xs), right: Math.max(...xs), low: Math.min(...ys), high: Math.max(...ys),
+    rootLeft: Math.min(ax, bx), rootRight: Math.max(ax, bx),
     rootX: fin.x, rootY, originX, originY,
     raysPerRadian: fin.rays && span !== 0 ? fin.rays.count / span : 0,
     firstRay: fin.rays ? radians(fin.rays.fromAngle) : 0,
