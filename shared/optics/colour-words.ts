@@ -17,36 +17,39 @@ export function distanceWords(deltaE: number): DistanceWords {
   return DISTANCES.find(([upTo]) => deltaE <= upTo)?.[1] ?? 'another colour'
 }
 
-/** Hue words by the angle they begin at, degrees of Lab hue, for colours of middling lightness. */
-const HUES: readonly (readonly [from: number, light: string, middle: string, dark: string])[] = [
-  [0, 'pink', 'rose', 'wine'],
-  [20, 'salmon', 'red', 'maroon'],
-  [46, 'peach', 'orange', 'brown'],
-  [68, 'buff', 'amber', 'brown'],
-  [80, 'cream yellow', 'gold', 'umber'],
-  [92, 'yellow', 'mustard', 'olive'],
-  [104, 'chartreuse', 'olive', 'olive'],
-  [118, 'lime', 'leaf green', 'moss'],
-  [138, 'light green', 'green', 'forest green'],
-  [168, 'mint', 'sea green', 'pine'],
-  [195, 'aqua', 'teal', 'deep sea'],
-  [225, 'sky', 'cyan blue', 'petrol'],
-  [255, 'sky blue', 'blue', 'navy'],
-  [290, 'periwinkle', 'ultramarine', 'midnight blue'],
-  [306, 'lavender', 'violet', 'violet'],
-  [325, 'orchid', 'purple', 'plum'],
-  [345, 'pink', 'magenta', 'wine'],
+type HueWords = readonly [from: number, pale: string, bright: string, middle: string, dark: string]
+
+/** Hue words by the angle they begin at, degrees of Lab hue. */
+const HUES: readonly HueWords[] = [
+  [0, 'pink', 'hot pink', 'rose', 'wine'],
+  [16, 'salmon', 'coral', 'red', 'maroon'],
+  [44, 'peach', 'orange', 'orange', 'brown'],
+  [62, 'tan', 'orange', 'ochre', 'brown'],
+  [77, 'buff', 'golden yellow', 'ochre', 'umber'],
+  [88, 'cream', 'yellow', 'mustard', 'olive'],
+  [102, 'cream', 'chartreuse', 'olive', 'olive'],
+  [116, 'lime', 'lime', 'leaf green', 'moss'],
+  [132, 'apple green', 'green', 'green', 'forest green'],
+  [165, 'mint', 'mint', 'sea green', 'pine'],
+  [190, 'aqua', 'turquoise', 'teal', 'teal'],
+  [222, 'sky', 'sky', 'sky', 'petrol'],
+  [252, 'sky blue', 'sky blue', 'blue', 'navy'],
+  [286, 'periwinkle', 'periwinkle', 'ultramarine', 'navy'],
+  [310, 'lavender', 'violet', 'violet', 'violet'],
+  [326, 'lilac', 'orchid', 'purple', 'plum'],
+  [344, 'pink', 'hot pink', 'magenta', 'wine'],
 ]
 
-const GREY_CHROMA = 4
+const GREY_CHROMA = 4, TINTED_CHROMA = 10, BRIGHT_CHROMA = 45
+const LIGHT = 72, DARK = 38
 
 /** A colour in two or three words, such as "deep olive"; for captions and screen readers, never for matching. */
 export function colourWords(lab: Lab): string {
   const [L, C, h] = lchFromLab(lab)
   if (C < GREY_CHROMA) return greyWord(L)
-  const hue = HUES.findLast(([from]) => h >= from)!
-  const name = L > 72 ? hue[1] : L > 38 ? hue[2] : hue[3]
-  if (C < 12) return `${greyWord(L)}, leaning ${name}`
+  const [, pale, bright, middle, dark] = HUES.findLast(([from]) => h >= from)!
+  const name = L <= DARK ? dark : L <= LIGHT ? middle : C < BRIGHT_CHROMA ? pale : bright
+  if (C < TINTED_CHROMA) return `${greyWord(L)}, leaning ${name}`
   return [toneWord(L, C), name].filter(Boolean).join(' ')
 }
 
@@ -60,7 +63,7 @@ function greyWord(L: number): string {
 
 function toneWord(L: number, C: number): string {
   if (L < 22) return 'very deep'
-  if (L < 38) return 'deep'
-  if (C < 24) return L > 72 ? 'pale' : 'soft'
+  if (L <= DARK) return 'deep'
+  if (L <= LIGHT && C < 24) return 'soft'
   return C > 70 ? 'bright' : ''
 }

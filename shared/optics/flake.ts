@@ -1,6 +1,7 @@
 import { type Bands, wavelengthsOf } from './bands'
 import { BINDER_INDEX, MICA_INDEX, type Oxide, refractiveIndex } from './refractive-index'
-import { admittance, boundary, type Complex, phase, through, uprightPart, type Wave } from './thin-film'
+import { type Complex, multiply, power } from './complex'
+import { admittance, boundary, phase, through, uprightPart, type Wave } from './thin-film'
 
 export type { Oxide } from './refractive-index'
 
@@ -28,7 +29,6 @@ const REMEMBERED = new Map<string, SingleFlake>()
 const REMEMBERED_MOST = 96
 
 const MICA_MEAN = 350, MICA_SPREAD = 90
-const MICA_NODES = 25, MICA_REACH = 3
 const OXIDE_SPREAD = 0.05
 const OXIDE_NODES = [-2, -1, 0, 1, 2]
 
@@ -39,13 +39,12 @@ function bell(steps: readonly number[]): { step: number, share: number }[] {
   return steps.map((step, i) => ({ step, share: heights[i]! / whole }))
 }
 
-const MICA = bell(Array.from({ length: MICA_NODES }, (_, i) => MICA_REACH * (2 * i / (MICA_NODES - 1) - 1)))
 const OXIDE = bell(OXIDE_NODES)
 
 /**
  * Reflectance and transmittance of one flake lying in the binder, unpolarised.
  *
- * Oxide | mica | oxide, averaged over mica 350 ± 90 nm thick and oxide ± 5 %; aluminium stands alone.
+ * Oxide | mica | oxide, averaged over mica 350 ± 90 nm thick (in closed form) and oxide ± 5 %; aluminium stands alone.
  *
  * The answer is shared between callers and must not be written to.
  *
@@ -97,19 +96,52 @@ function averagePower(oxide: Oxide, thickness: number, swing: 's' | 'p', along: 
     addPower(sum, through(intoOxide, phase(upright, thickness, nm), outOfOxide), 1)
     return sum
   }
-  const micaIndex = { re: MICA_INDEX, im: 0 }
-  const uprightMica = uprightPart(micaIndex, along)
-  const etaMica = admittance(swing, micaIndex, uprightMica)
+  const uprightMica = uprightPart({ re: MICA_INDEX, im: 0 }, along)
+  const etaMica = admittance(swing, { re: MICA_INDEX, im: 0 }, uprightMica)
   const oxideToMica = boundary(etaOxide, etaMica), micaToOxide = boundary(etaMica, etaOxide)
+  const turn = 2 * Math.PI * uprightMica.re / nm
   for (const { step, share } of OXIDE) {
     const crossing = phase(upright, thickness * (1 + OXIDE_SPREAD * step), nm)
-    const under = through(micaToOxide, crossing, outOfOxide)
-    for (const mica of MICA) {
-      const core = through(oxideToMica, phase(uprightMica, MICA_MEAN + MICA_SPREAD * mica.step, nm), under)
-      addPower(sum, through(intoOxide, crossing, core), share * mica.share)
-    }
+    const face = through(intoOxide, crossing, oxideToMica)
+    const back = through(micaToOxide, crossing, outOfOxide)
+    addMeanOverMica(sum, face, back, turn * MICA_MEAN, turn * MICA_SPREAD, share)
   }
   return sum
+}
+
+/**
+ * Adds the power of two coated faces with mica between, averaged over mica whose phase is normally spread.
+ *
+ * The wave that has crossed the mica k times more than another keeps exp(−2k²·spread²) of its interference, so the mean is
+ * a short sum instead of many thicknesses.
+ *
+ * @param face  from the binder through the coat into the mica
+ * @param back  from the mica through the coat into the binder; the same coat, so also what the face looks like from inside
+ * @param phase of one crossing of mica of mean thickness, and its standard deviation, radians
+ */
+function addMeanOverMica(sum: { r: number, t: number }, face: Wave, back: Wave, phase: number, spread: number, share: number): void {
+  const within = multiply(back.r, back.r)
+  const straight = multiply(face.t, back.t)
+  const first = multiply(straight, back.r)
+  const kept = 1 / (1 - power(within))
+  let r = power(face.r) + power(first) * kept
+  let t = 1
+  let loops = { re: 1, im: 0 }
+  for (let k = 1; ; k++) {
+    const fringe = Math.exp(-2 * (k * spread) ** 2)
+    if (fringe < 1e-15) break
+    const wheel = { re: fringe * Math.cos(2 * k * phase), im: -fringe * Math.sin(2 * k * phase) }
+    const late = multiply(first, loops)
+    loops = multiply(loops, within)
+    const meeting = {
+      re: late.re * face.r.re + late.im * face.r.im + power(first) * kept * loops.re,
+      im: late.im * face.r.re - late.re * face.r.im + power(first) * kept * loops.im,
+    }
+    r += 2 * multiply(meeting, wheel).re
+    t += 2 * multiply(loops, wheel).re
+  }
+  sum.r += share * r
+  sum.t += share * power(straight) * kept * t
 }
 
 function etaOf(swing: 's' | 'p', index: Complex, along: number): Complex {
@@ -118,8 +150,8 @@ function etaOf(swing: 's' | 'p', index: Complex, along: number): Complex {
 
 /** The medium is the same above and below, so power is the square of the amplitude. */
 function addPower(sum: { r: number, t: number }, { r, t }: Wave, share: number): void {
-  sum.r += share * (r.re * r.re + r.im * r.im)
-  sum.t += share * (t.re * t.re + t.im * t.im)
+  sum.r += share * power(r)
+  sum.t += share * power(t)
 }
 
 /** One flake's R and T in diffuse light, one value per band: the mean over `DIFFUSE_COSINES`. */

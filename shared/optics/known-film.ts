@@ -13,7 +13,7 @@ export const CARD_WHITE: Lab = [93, 0, 2]
 /** Share of the light over white that a hiding film shows over black. @source ISO 6504-3, ASTM D2805 (from memory) */
 export const HIDING_CONTRAST = 0.98
 /** Luminance of the white ground that hiding is judged over, as measured. @source ISO 6504-3, ASTM D2805 (from memory) */
-const HIDING_WHITE = 0.80
+export const HIDING_WHITE = 0.80
 
 /**
  * A film from its colours over black and over white: the colour over white becomes a spectrum, then the ratio of the two

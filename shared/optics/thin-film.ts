@@ -1,3 +1,5 @@
+import { type Complex, divide, multiply, squareRoot } from './complex'
+
 /** A flat layer of one substance: index n − ik and thickness d, nm. */
 export interface ThinFilm { n: number, k: number, d: number }
 
@@ -40,9 +42,6 @@ export function thinFilm({ wavelength, angle, n0, films, nExit }: ThinFilmCase):
   return { R: (s.R + p.R) / 2, T: (s.T + p.T) / 2 }
 }
 
-/** A complex number. */
-export interface Complex { re: number, im: number }
-
 /** The two ways a wave can swing: across the plane of incidence, and in it. */
 export type Polarisation = 's' | 'p'
 
@@ -68,7 +67,7 @@ export interface Wave { r: Complex, t: Complex }
 
 /** The upright part of a wave's index, N·cosθ, on the branch that dies away downwards. */
 export function uprightPart({ re, im }: Complex, along: number): Complex {
-  const root = sqrt({ re: re * re - im * im - along * along, im: 2 * re * im })
+  const root = squareRoot({ re: re * re - im * im - along * along, im: 2 * re * im })
   return root.im > 0 ? { re: -root.re, im: -root.im } : root
 }
 
@@ -99,21 +98,6 @@ export function through(top: Wave, crossing: Complex, below: Wave): Wave {
     r: divide({ re: top.r.re + back.re, im: top.r.im + back.im }, loop),
     t: divide(multiply(top.t, multiply(crossing, below.t)), loop),
   }
-}
-
-function multiply(a: Complex, b: Complex): Complex {
-  return { re: a.re * b.re - a.im * b.im, im: a.re * b.im + a.im * b.re }
-}
-
-function divide(a: Complex, b: Complex): Complex {
-  const size = b.re * b.re + b.im * b.im
-  return { re: (a.re * b.re + a.im * b.im) / size, im: (a.im * b.re - a.re * b.im) / size }
-}
-
-function sqrt({ re, im }: Complex): Complex {
-  const size = Math.sqrt(Math.hypot(re, im))
-  const half = Math.atan2(im, re) / 2
-  return { re: size * Math.cos(half), im: size * Math.sin(half) }
 }
 
 function assertPositive(what: string, value: number): void {

@@ -7,6 +7,8 @@ import { flakeCoat, poissonShares } from '../../../shared/optics/flake-coat'
 import { FLAKE_TABLE_COSINES, flakeTable } from '../../../shared/optics/flake-table'
 import { interferenceColour, thicknessForColour } from '../../../shared/optics/known-flake'
 import { paintOpticsFrom } from '../../../shared/optics/paint-optics'
+import { refractiveIndex } from '../../../shared/optics/refractive-index'
+import { thinFilm } from '../../../shared/optics/thin-film'
 import { coefficient, flat, magnitude } from './draws'
 
 const pearl = paintOpticsFrom({ how: 'interference', thickness: 125, oxide: 'anatase', flakesPerPass: 0.4, sigma: 8, edge: 0.06 })
@@ -15,6 +17,25 @@ const none = flat(0)
 it('loses no light in a flake that does not absorb', () => {
   const { R, T } = singleFlake('rutile', 90, [1, 0.8, 0.4], 'exact36')
   R.forEach((value, i) => expect(value + T[i]!).toBeCloseTo(1, 12))
+})
+it('averages mica of uncertain thickness as adding up many thicknesses does', () => {
+  const bell = (reach: number, count: number) => Array.from({ length: count }, (_, i) => reach * (2 * i / (count - 1) - 1))
+    .map(step => ({ step, height: Math.exp(-step * step / 2) }))
+  const mean = (angle: number) => {
+    let sum = 0, whole = 0
+    for (const oxide of bell(2, 5)) for (const mica of bell(7, 401)) {
+      const coat = { ...refractiveIndex('hematite', 580), d: 95 * (1 + 0.05 * oxide.step) }
+      const films = [coat, { n: 1.59, k: 0, d: 350 + 90 * mica.step }, coat]
+      // A bell reaches below no thickness at all by one part in twenty thousand; such mica is left out here.
+      if (films[1]!.d < 0) continue
+      sum += oxide.height * mica.height * thinFilm({ wavelength: 580, angle, n0: 1.5, films, nExit: 1.5 }).R
+      whole += oxide.height * mica.height
+    }
+    return sum / whole
+  }
+  const { R } = singleFlake('hematite', 95, [1, Math.cos(Math.PI / 5)], 'exact36')
+  expect(R[20]).toBeCloseTo(mean(0), 4)
+  expect(R[36 + 20]).toBeCloseTo(mean(36), 4)
 })
 it('lets hematite take light, and aluminium let none through', () => {
   const hematite = singleFlake('hematite', 90, [1], 'exact36')
