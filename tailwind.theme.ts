@@ -25,7 +25,7 @@ export const extend: Config['theme'] = {
   },
   fontFamily: { head: 'var(--font-head)', text: 'var(--font-text)', fig: 'var(--font-fig)' },
   fontSize: {
-    small: ['var(--t-small)', '1.35'], text: ['var(--t-text)', '1.4'], lead: ['var(--t-lead)', '1.4'], fig: ['var(--t-fig)', '1.2'],
+    small: ['var(--t-small)', '1.35'], label: ['var(--t-label)', '1.35'], text: ['var(--t-text)', '1.4'], lead: ['var(--t-lead)', '1.4'], fig: ['var(--t-fig)', '1.2'],
     h3: ['var(--t-h3)', '1.15'], h2: ['var(--t-h2)', '1.05'],
     h1: ['var(--t-h1)', { lineHeight: '1.05', letterSpacing: '-0.018em' }],
     plate: ['var(--t-plate)', { lineHeight: '0.92', letterSpacing: '-0.022em' }],
