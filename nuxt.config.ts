@@ -1,5 +1,7 @@
 import type {} from 'nuxt-security'
+import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
+import { build } from 'esbuild'
 
 const here = (path: string) => fileURLToPath(new URL(path, import.meta.url))
 
@@ -24,7 +26,20 @@ export default defineNuxtConfig({
   runtimeConfig: { session: { password: 'set from SESSION_PASSWORD when the server starts' } },
   alias: { '#shared': here('./shared'), '#server': here('./server') },
   compatibilityDate: '2026-11-01',
-  nitro: { plugins: ['~~/server/boot/runtime-config.ts'] },
+  nitro: {
+    plugins: ['~~/server/boot/runtime-config.ts'],
+    hooks: {
+      // Pictures are painted on threads of their own, which start from one file that stands by itself.
+      compiled: async (nitro) => {
+        await build({
+          entryPoints: [here('./server/pictures/paint-picture.ts')],
+          outfile: join(nitro.options.output.serverDir, 'workers/paint-picture.mjs'),
+          alias: { '#shared': here('./shared'), '#server': here('./server') },
+          bundle: true, platform: 'node', format: 'esm', target: 'node20', logLevel: 'warning',
+        })
+      },
+    },
+  },
   typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
   telemetry: false,
   hooks: {
