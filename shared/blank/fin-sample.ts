@@ -79,3 +79,15 @@ export function writeFinSample(
   writeTurned(turn, round * place.rimX - ax, round * place.rimY - ay, facing, samples.normal, i)
   writeTurned(turn, round * place.rimX - GLOSS_RAYS * ax, round * place.rimY - GLOSS_RAYS * ay, facing, samples.glossNormal, i)
 }
+
+/**
+ * How far a place on a fin stands out of the body on the side turned to the viewer, mm. There the fin is before the body;
+ * negative or -Infinity where the body is before the fin.
+ */
+export function standsOut(sampler: BodySampler, x: number, y: number, scratch: FinScratch): number {
+  const { blank, turn } = sampler
+  if (turn.sin === 0 || x <= 0 || x >= blank.shape.length) return -Infinity
+  const { section } = scratch
+  blank.profile.section(tOfShare(x / blank.shape.length), section)
+  return (y - section.c) * turn.sin > 0 ? Math.abs(y - section.c) - section.h : -Infinity
+}

@@ -1,5 +1,5 @@
 import { goToColumn, heightAtPixel, newBodySampler, writeBodySample, xAtPixel, type BodySampler } from './body-sample'
-import { FIN_EDGE_ON, newFinScratch, rimDistance, writeFinSample, type FinScratch } from './fin-sample'
+import { FIN_EDGE_ON, newFinScratch, rimDistance, standsOut, writeFinSample, type FinScratch } from './fin-sample'
 import type { PreparedBlank } from './prepared-blank'
 import { newSection, tOfShare } from './profile'
 import { outlineSlope } from './view-column'
@@ -9,6 +9,12 @@ import type { View } from './view'
 export { emptyViewSamples, PART_BODY, PART_FIN, PART_GAP, PART_NONE, samplesTransfer, type ViewSamples } from './view-sample-lists'
 export { fitView, type ViewWish } from './fit-view'
 export type { View } from './view'
+
+/** What is already drawn: the share of each pixel, and 1 + the number of its body sample (0 for none). */
+interface Canvas {
+  covered: Float32Array
+  bodyAt: Uint32Array
+}
 
 const clamp = (value: number) => Math.min(1, Math.max(0, value))
 
@@ -55,7 +61,7 @@ function cut(samples: ViewSamples, count: number): ViewSamples {
   }
 }
 
-function addBody(sampler: BodySampler, samples: ViewSamples, covered: Float32Array): number {
+function addBody(sampler: BodySampler, samples: ViewSamples, { covered, bodyAt }: Canvas): number {
   const { view, turn } = sampler
   const pixel = 1 / view.scale
   let count = 0
@@ -80,17 +86,35 @@ function addBody(sampler: BodySampler, samples: ViewSamples, covered: Float32Arr
       samples.pixel[count] = index
       samples.coverage[count] = share
       covered[index] = share
+      bodyAt[index] = count + 1
       count++
     }
   }
   return count
 }
 
-function addFins(sampler: BodySampler, samples: ViewSamples, covered: Float32Array, from: number): number {
+/** Takes a share of a pixel away from the body, for a fin that stands before it. @returns the share the fin then has */
+function coverBody(samples: ViewSamples, { covered, bodyAt }: Canvas, pixel: number, share: number): number {
+  const body = (bodyAt[pixel] ?? 0) - 1
+  const total = covered[pixel] ?? 0
+  if (body < 0) return Math.min(1 - total, share)
+  const had = samples.coverage[body] ?? 0
+  const others = total - had
+  const fin = Math.min(share, 1 - others)
+  samples.coverage[body] = Math.min(had, 1 - others - fin)
+  covered[pixel] = others + (samples.coverage[body] ?? 0)
+  return fin
+}
+
+function addFins(sampler: BodySampler, samples: ViewSamples, canvas: Canvas, from: number): number {
   const { view, turn, blank } = sampler
   if (Math.abs(turn.cos) < FIN_EDGE_ON) return from
+  const { covered } = canvas
   const scratch = newFinScratch()
   const reach = 1 / view.scale
+  const mayStandBefore = turn.sin !== 0
+  // Pixels for each mm of height, as this view foreshortens it.
+  const upright = view.scale * Math.abs(turn.cos)
   let count = from
   blank.fins.forEach((fin, index) => {
     const pxAt = (x: number) => view.centreX + turn.way * view.scale * (x - blank.shape.length / 2)
@@ -104,9 +128,12 @@ function addFins(sampler: BodySampler, samples: ViewSamples, covered: Float32Arr
       for (let px = Math.max(0, Math.floor(Math.min(x0, x1)) - 1); px <= right; px++) {
         const pixel = py * view.width + px
         const free = 1 - (covered[pixel] ?? 0)
-        if (free <= 0.004) continue
+        if (free <= 0.004 && !mayStandBefore) continue
         const x = xAtPixel(sampler, px + 0.5)
-        const share = Math.min(free, clamp(0.5 + rimDistance(fin, x, y, reach, scratch) * view.scale))
+        const full = clamp(0.5 + rimDistance(fin, x, y, reach, scratch) * view.scale)
+        if (full <= 0.004) continue
+        const before = mayStandBefore ? clamp(0.5 + standsOut(sampler, x, y, scratch) * upright) : 0
+        const share = before > 0 ? coverBody(samples, canvas, pixel, Math.min(full, Math.max(free, before))) : Math.min(free, full)
         if (share <= 0.004) continue
         writeFinSample(sampler, index, fin, x, y, scratch, samples, count)
         samples.pixel[count] = pixel
@@ -123,17 +150,22 @@ function addFins(sampler: BodySampler, samples: ViewSamples, covered: Float32Arr
 export function viewSamples(blank: PreparedBlank, view: View): ViewSamples {
   const sampler = newBodySampler(blank, view)
   const samples = emptyViewSamples(view, roomNeeded(sampler))
-  const covered = new Float32Array(view.width * view.height)
-  const bodies = addBody(sampler, samples, covered)
-  return cut(samples, addFins(sampler, samples, covered, bodies))
+  const pixels = view.width * view.height
+  const canvas: Canvas = { covered: new Float32Array(pixels), bodyAt: new Uint32Array(pixels) }
+  const bodies = addBody(sampler, samples, canvas)
+  return cut(samples, addFins(sampler, samples, canvas, bodies))
 }
 
-function addFinPoint(sampler: BodySampler, x: number, height: number, scratch: FinScratch, samples: ViewSamples, i: number): boolean {
+/** Writes sample i on the fin at a place, if there is one; with `onlyBefore`, only a fin that stands before the body. */
+function addFinPoint(
+  sampler: BodySampler, x: number, height: number, onlyBefore: boolean, scratch: FinScratch, samples: ViewSamples, i: number,
+): boolean {
   const { turn, blank } = sampler
   if (Math.abs(turn.cos) < FIN_EDGE_ON) return false
   const y = height / turn.cos
   return blank.fins.some((fin, index) => {
     if (!(rimDistance(fin, x, y, 0, scratch) > 0)) return false
+    if (onlyBefore && !(standsOut(sampler, x, y, scratch) > 0)) return false
     writeFinSample(sampler, index, fin, x, y, scratch, samples, i)
     return true
   })
@@ -168,8 +200,9 @@ export function subpixelSamples(blank: PreparedBlank, view: View, pixels: Uint32
       samples.pixel[at] = pixel
       samples.coverage[at] = 1
       const { high, low } = sampler.column
+      if (sampler.turn.sin !== 0 && addFinPoint(sampler, x, height, true, scratch, samples, at)) continue
       if (isOnBody && height < high && height > low && writeBodySample(sampler, height, samples, at) > 0) continue
-      if (addFinPoint(sampler, x, height, scratch, samples, at)) continue
+      if (addFinPoint(sampler, x, height, false, scratch, samples, at)) continue
       samples.part[at] = PART_NONE
       samples.coverage[at] = 0
     }

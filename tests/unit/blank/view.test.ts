@@ -147,6 +147,24 @@ describe('carving, fins and joints', () => {
   })
 })
 
+describe('a fin on a rolled blank', () => {
+  const shad = prepareBlank(builtInBlank('shad-80'))
+  it('stands before the body on the side turned to the viewer, behind it on the other', () => {
+    // The foot of the fin, well above the back: seen with the back toward the viewer and away from them.
+    const places = [30, 330].map((roll) => {
+      const view = fitView(shad, { width: 640, height: 320, roll })
+      const [px, py] = projectPoint(view, 80, 31, 14, 0)
+      const samples = viewSamples(shad, view)
+      const pixel = Math.floor(py) * 640 + Math.floor(px)
+      const parts: number[] = []
+      for (let i = 0; i < samples.count; i++) if (samples.pixel[i] === pixel && (samples.coverage[i] ?? 0) > 0.5) parts.push(samples.part[i] ?? PART_NONE)
+      const fine = subpixelSamples(shad, view, Uint32Array.of(pixel), new Float32Array([0.5, 0.5]))
+      return { parts, fine: fine.part[0] }
+    })
+    expect(places).toEqual([{ parts: [PART_FIN], fine: PART_FIN }, { parts: [PART_BODY], fine: PART_BODY }])
+  })
+})
+
 describe('sub-pixel samples', () => {
   const view = fitView(glide, { width: 320, height: 160 })
   const whole = viewSamples(glide, view)
