@@ -11,6 +11,9 @@ declare module 'vitest' {
   }
 }
 
+/** The role the server works as: it owns no table. */
+const APP_ROLE = 'countershade_app'
+
 let current: { name: string, open: OpenDatabase } | undefined
 
 /** The database of this test file: a clone of the migrated template, opened as the server opens it. */
@@ -20,10 +23,10 @@ export async function testDatabase(): Promise<Database> {
 
 /** Where the test file's database is, for a server of its own. */
 export async function testDatabaseUrl(): Promise<string> {
-  return urlOf((await ensure()).name)
+  return urlOf((await ensure()).name, APP_ROLE)
 }
 
-/** Runs one statement as the owner of the tables, past row-level security: to see what is really there. */
+/** Runs one statement past row-level security: to see what is really there. */
 export async function asOwner<Row extends object>(statement: string, values: unknown[] = []): Promise<Row[]> {
   return onClient(urlOf((await ensure()).name), async client => (await client.query<Row>(statement, values)).rows)
 }
@@ -47,12 +50,13 @@ async function clone(): Promise<{ name: string, open: OpenDatabase }> {
   const name = `file_${crypto.randomUUID().replaceAll('-', '')}`
   await onClient(inject('pgAdminUrl'), client =>
     client.query(`create database "${name}" template "${inject('templateDatabase')}" strategy file_copy`))
-  current = { name, open: openDatabase(urlOf(name)) }
+  current = { name, open: openDatabase(urlOf(name, APP_ROLE)) }
   return current
 }
 
-function urlOf(name: string): string {
+function urlOf(name: string, role?: string): string {
   const url = new URL(inject('pgAdminUrl'))
+  if (role !== undefined) url.username = role
   url.pathname = `/${name}`
   return url.href
 }

@@ -1,73 +1,52 @@
-import { drizzle } from 'drizzle-orm/node-postgres'
-import { migrate } from 'drizzle-orm/node-postgres/migrator'
 import { Client } from 'pg'
 import type { TestProject } from 'vitest/node'
-import { startThrowAwayMailbox } from './throw-away-mailbox'
-import { startThrowAwayPostgres } from './throw-away-postgres'
+import { openTestServices } from '../../scripts/lib/test-env.mjs'
+import { Closing } from '../../scripts/lib/until-stopped.mjs'
+import { openLocalDatabase } from '../../scripts/lib/workshop-data.mjs'
 
 /**
- * The ground of all API tests: a PostgreSQL with a migrated template that each test file clones, and a mailbox.
- * Those named in the environment (TEST_PG_ADMIN_URL, TEST_SMTP_URL with TEST_MAIL_DIR) are used; missing ones are started and thrown away.
+ * The ground of all API tests: a PostgreSQL with a migrated template that each test file clones, a photo store and a
+ * mailbox. Those named in the environment (see scripts/lib/test-env.mjs) are used; without them they are started for this run.
  */
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
-  const endings: (() => Promise<void>)[] = []
-  const pgAdminUrl = process.env.TEST_PG_ADMIN_URL ?? await started(endings, startThrowAwayPostgres, it => it.adminUrl)
-  if (process.env.TEST_SMTP_URL === undefined || process.env.TEST_MAIL_DIR === undefined) {
-    await started(endings, startThrowAwayMailbox, (it) => {
-      process.env.TEST_SMTP_URL = it.url
-      process.env.TEST_MAIL_DIR = it.dir
-    })
-  }
+  const closing = new Closing()
+  if (process.env.TEST_PG_ADMIN_URL === undefined) Object.assign(process.env, (await openTestServices(closing)).env)
+  const adminUrl = named('TEST_PG_ADMIN_URL')
   const template = `template_${crypto.randomUUID().replaceAll('-', '')}`
-  await makeTemplate(pgAdminUrl, template)
-  endings.push(() => onDatabase(pgAdminUrl, 'postgres', client => client.query(`drop database "${template}" with (force)`)))
+  const { databaseUrl } = await openLocalDatabase(adminUrl, template)
+  await closing.add('The template database', () => dropDatabase(adminUrl, template))
 
-  project.provide('pgAdminUrl', pgAdminUrl)
+  project.provide('pgAdminUrl', adminUrl)
   project.provide('templateDatabase', template)
-  Object.assign(process.env, serverEnvironment(pgAdminUrl))
-  return async () => {
-    for (const end of endings.reverse()) await end()
-  }
+  Object.assign(process.env, serverEnvironment(databaseUrl))
+  return () => closing.close()
 }
 
-/** What services and servers of the tests find in their environment. The store is there when TEST_S3_ENDPOINT is. */
+/** What services and servers of the tests find in their environment; each server gets a database and an address of its own. */
 function serverEnvironment(databaseUrl: string): Record<string, string> {
   return {
     DATABASE_URL: databaseUrl,
     PUBLIC_URL: 'http://127.0.0.1:3000',
     SESSION_PASSWORD: 'only for tests, and long enough for them',
-    SMTP_URL: process.env.TEST_SMTP_URL ?? '',
+    SMTP_URL: named('TEST_SMTP_URL'),
     MAIL_FROM: 'Countershade <countershade@bench.example>',
-    S3_ENDPOINT: process.env.TEST_S3_ENDPOINT ?? 'http://127.0.0.1:9',
-    S3_BUCKET: process.env.TEST_S3_BUCKET ?? 'countershade-test',
-    S3_REGION: process.env.TEST_S3_REGION ?? 'local',
-    S3_ACCESS_KEY_ID: process.env.TEST_S3_ACCESS_KEY_ID ?? 'test',
-    S3_SECRET_ACCESS_KEY: process.env.TEST_S3_SECRET_ACCESS_KEY ?? 'test',
+    S3_ENDPOINT: named('TEST_S3_ENDPOINT'),
+    S3_BUCKET: named('TEST_S3_BUCKET'),
+    S3_REGION: named('TEST_S3_REGION'),
+    S3_ACCESS_KEY_ID: named('TEST_S3_ACCESS_KEY_ID'),
+    S3_SECRET_ACCESS_KEY: named('TEST_S3_SECRET_ACCESS_KEY'),
   }
 }
 
-async function started<S extends { stop: () => Promise<void> }, T>(
-  endings: (() => Promise<void>)[], start: () => Promise<S>, use: (it: S) => T,
-): Promise<T> {
-  const it = await start()
-  endings.push(it.stop)
-  return use(it)
+function named(name: string): string {
+  const value = process.env[name]
+  if (!value) throw new Error(`${name} is not set, though TEST_PG_ADMIN_URL is: set all of them or none.`)
+  return value
 }
 
-async function makeTemplate(adminUrl: string, name: string): Promise<void> {
-  await onDatabase(adminUrl, 'postgres', client => client.query(`create database "${name}"`))
-  await onDatabase(adminUrl, name, client => migrate(drizzle(client), { migrationsFolder: 'drizzle' }))
-}
-
-async function onDatabase(adminUrl: string, name: string, work: (client: Client) => Promise<unknown>): Promise<void> {
-  const url = new URL(adminUrl)
-  url.pathname = `/${name}`
-  const client = new Client({ connectionString: url.href })
+async function dropDatabase(adminUrl: string, name: string): Promise<void> {
+  const client = new Client({ connectionString: adminUrl })
   await client.connect()
-  try {
-    await work(client)
-  }
-  finally {
-    await client.end()
-  }
+  await client.query(`drop database "${name}" with (force)`)
+  await client.end()
 }
