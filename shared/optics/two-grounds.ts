@@ -31,7 +31,7 @@ const THINNEST = 1e-12
  *
  * @throws {RangeError} when band counts differ, a reading is outside 0…1, the grounds are not one darker than the other,
  *                      or passes is not above 0
- * @accuracy K and S come back within 1e-9 of themselves from exact readings of films that do not hide
+ * @accuracy K and S come back within 1e-8 from exact readings of films that do not hide
  * @source P. Kubelka (1948), as in `film.ts`, solved for K and S; written so that S = 0 and K = 0 need no branch
  */
 export function coefficientsFromTwoGrounds({ black, white, overBlack, overWhite, passes }: TwoGrounds): FoundCoefficients {
