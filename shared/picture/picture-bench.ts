@@ -13,6 +13,7 @@ import { lightTables, type LightTables } from './light-tables'
 import type { Look } from './look'
 import { paintLight, type Lighting } from './paint-light'
 import { pictureOptions, type Picture, type PictureLight, type PictureOptions, type PictureWish } from './picture-options'
+import { pickPlace, type PickedPlace } from './pick-place'
 import { FOUR_PLACES, jumpingPixels, NINE_PLACES, putRefined, shownPixels } from './refine'
 import { eyesAreFitted, shownCoats } from './shown-coats'
 import { composeKept, keptMap, tidyMaps, viewKit, type KeyedCoat, type ViewKit } from './view-kit'
@@ -22,7 +23,7 @@ export const COARSE = 4
 /** Jumps worth four samples, in screen values of 0-1. */
 const JUMP = { screen: 0.1, print: 0.035 }
 /** Pictures up to this width take nine samples everywhere. */
-const SMALL_WIDTH = 320
+const SMALL_WIDTH = 200
 /** How many of each are kept. */
 const KEPT = { blanks: 4, views: 4, refinedViews: 2, tables: 120, lights: 8 }
 /** Share of the jumps of a picture that kept samples must hold to be used again: an edit of one coat moves few of them. */
@@ -37,6 +38,8 @@ export interface PictureBench {
   draw(look: Look, wish: PictureWish): Picture
   /** The same picture, better and better: coarse, full, then with its edges refined. */
   stages(look: Look, wish: PictureWish): Generator<Picture, void, undefined>
+  /** What lies at a place of the picture, pixels from the left and top; undefined beside the blank. */
+  pick(look: Look, wish: PictureWish, x: number, y: number): PickedPlace | undefined
 }
 
 /** Puts up an empty bench. */
@@ -58,6 +61,9 @@ export function pictureBench(): PictureBench {
       const full = drawFull(look, options)
       yield finish(look, options, full)
       yield finish(look, options, refine(look, options, full))
+    },
+    pick(look, wish, x, y) {
+      return pickPlace(kitOf(look, pictureOptions(wish)).kit.samples, look.materials.blank.shape, x, y)
     },
   }
 

@@ -1,0 +1,84 @@
+import { onScopeDispose, ref, shallowRef, toValue, useId, watch, type MaybeRefOrGetter, type Ref, type ShallowRef } from 'vue'
+import { paintingThread, type PaintingThread } from './painting-thread'
+import type { Look } from '#shared/picture/look'
+import type { PickedPlace } from '#shared/picture/pick-place'
+import type { PictureAnswer, PictureStage } from '#shared/picture/picture-messages'
+import { pictureOptions, type Picture, type PictureWish } from '#shared/picture/picture-options'
+
+/** A picture that follows its look. */
+export interface UsePicture {
+  /** The newest painting there is; it may still be of the look before the last edit. */
+  picture: ShallowRef<Picture | null>
+  stage: Ref<PictureStage | 'none'>
+  /** Why the last request could not be painted. */
+  failed: Ref<string | null>
+  /** What lies at a place of the picture, given in shares of its width and height. */
+  pick: (right: number, down: number) => Promise<PickedPlace | undefined>
+}
+
+/**
+ * Paints a look away from the page, and again whenever the look or the wish changes: coarse first, then finer.
+ * Nothing is painted while either is null. Only in a browser.
+ */
+export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOrGetter<PictureWish | null>): UsePicture {
+  const name = useId()
+  const picture = shallowRef<Picture | null>(null)
+  const stage = ref<PictureStage | 'none'>('none')
+  const failed = ref<string | null>(null)
+  const picks = new Map<number, (place: PickedPlace | undefined) => void>()
+  let latest = 0
+  let picked = 0
+  let thread: PaintingThread | undefined
+  let hush: (() => void) | undefined
+
+  function hear(answer: PictureAnswer): void {
+    if (answer.answer === 'picked') {
+      picks.get(answer.request)?.(answer.place)
+      picks.delete(answer.request)
+      return
+    }
+    if (answer.answer === 'failed') {
+      failed.value = answer.reason
+      if (answer.request === Infinity) thread = undefined
+      return
+    }
+    // A coarse painting of an older look must not replace a fine one of it, but a fine one of a newer look may come late.
+    if (answer.request < latest && stage.value !== 'none' && answer.stage === 'coarse') return
+    picture.value = answer.painted
+    stage.value = answer.stage
+    failed.value = null
+  }
+
+  function onThread(): PaintingThread {
+    if (!thread) {
+      hush?.()
+      thread = paintingThread()
+      hush = thread.hear(name, hear)
+    }
+    return thread
+  }
+
+  watch([() => toValue(look), () => toValue(wish)], ([newLook, newWish]) => {
+    if (!newLook || !newWish) return
+    onThread().ask({ ask: 'paint', picture: name, request: ++latest, look: newLook, options: pictureOptions(newWish) })
+  }, { immediate: true, deep: true })
+
+  onScopeDispose(() => {
+    thread?.ask({ ask: 'forget', picture: name })
+    hush?.()
+  })
+
+  return {
+    picture, stage, failed,
+    pick(right, down) {
+      const [nowLook, nowWish] = [toValue(look), toValue(wish)]
+      if (!nowLook || !nowWish) return Promise.resolve(undefined)
+      const options = pictureOptions(nowWish)
+      const request = ++picked
+      return new Promise((resolve) => {
+        picks.set(request, resolve)
+        onThread().ask({ ask: 'pick', picture: name, request, look: nowLook, options, x: right * options.width, y: down * options.height })
+      })
+    },
+  }
+}
