@@ -8,12 +8,12 @@ import { normalShare } from './normal-share'
 type FinPaint = Where['fins'][number]
 
 /** Widths nobody gave, mm at a body of 100 mm. */
-const WIDTH = { 'rays': 0.3, 'leading edge': 0.9, 'rim': 0.9, 'spots': 0.8 }
+const WIDTH = { 'rays': 0.3, 'leading edge': 0.9, 'rim': 0.9, 'spots': 0.55 }
 const EDGE_SOFT = 0.08
 /** A rim is misted on: how soft, as a share of its width. */
 const RIM_SOFT = 0.35
 /** Spots stand in bows across the rays: rows and gaps in widths of a spot, and their length along the ray. */
-const SPOT = { row: 3.1, gap: 3.4, long: 1.5, missing: 0.12, strays: 0.5 }
+const SPOT = { row: 5.2, gap: 4.2, long: 2.4, missing: 0.12, strays: 0.5 }
 
 /** How much of a coat lies on the fins at each fin sample, 0 to 1, into `out`; where entries meet, the stronger counts. */
 export function layFinShare(keep: DepositKeep, fins: Where['fins'], out: Float32Array): void {

@@ -15,7 +15,7 @@ const HAND = { uneven: 0.07, edge: 0.16, allOver: 0.05, allOverMean: 0.97 }
 const MIST = { share: 0.035, throughStencil: 0.01, wider: 3.5, everywhere: 0.25 }
 /** Droplets: noise of .05 root of the deposit for one whole pass; two passes are the usual coat and part of it averages out. */
 const DROPLETS = 0.05 / Math.SQRT2
-/** Chance of a stray drop in its cell, for a whole pass. */
+/** Chance of a stray drop in its cell, for a whole pass; it follows the deposit, or far mist would pepper what lies around. */
 const SPECK_CHANCE = 0.1
 
 /**
@@ -119,6 +119,6 @@ function layStrayDrops(keep: DepositKeep, coat: Coat): void {
   for (let k = 0; k < sample.length; k++) {
     const i = sample[k] ?? 0
     const x = deposit[i] ?? 0
-    if (((draw[k] ?? 0) + shift) % 1 < SPECK_CHANCE * Math.sqrt(x)) deposit[i] = x + (weight[k] ?? 0)
+    if (((draw[k] ?? 0) + shift) % 1 < SPECK_CHANCE * x) deposit[i] = x + (weight[k] ?? 0)
   }
 }

@@ -10,8 +10,8 @@ const LEAST_GIRTH = 0.16
 const SOFT = { tight: 0.03, perLift: 0.24 }
 /** How far a net gapes at belly and back, and lifts here and there, mm. Chosen by eye. */
 const GAPE = { belly: 1.25, bellyFrom: 0.70, bellyTo: 0.95, back: 0.25, backFrom: 0.12, backTo: 0.02, here: 0.12 }
-/** How far a hand pulls cells out of true, in cells: in lanes of six cells and from cell to cell. */
-const WARP = { lanes: 0.22, laneSize: 6, cells: 0.05, cellSize: 1.25 }
+/** How far a hand pulls cells out of true, ± cells: in lanes of six cells and from cell to cell. */
+const WARP = { lanes: 0.22 * SWING, laneSize: 6, cells: 0.05 * SWING, cellSize: 1.25 }
 /** The other flank's net is not fitted like the first. Cells. */
 const OTHER_SIDE = 0.37
 /** Threads thicken where they cross, within this distance (at a pitch of 2 mm), and vary. */

@@ -79,6 +79,10 @@ function gradientMoment(): number {
   return sum / steps
 }
 
+const DIRECTIONS = 256
+const DIRECTION_X = Float64Array.from({ length: DIRECTIONS }, (_, i) => Math.cos(2 * Math.PI * i / DIRECTIONS))
+const DIRECTION_Y = Float64Array.from({ length: DIRECTIONS }, (_, i) => Math.sin(2 * Math.PI * i / DIRECTIONS))
+
 /** What `gradientNoise` hands back without making anything new: the value and its slopes along x and y. */
 export interface Slope { value: number, dx: number, dy: number }
 
@@ -98,9 +102,9 @@ export function gradientNoise(x: number, y: number, seed: number, out: Slope): v
   for (let corner = 0; corner < 4; corner++) {
     const cx = corner & 1
     const cy = corner >> 1
-    const angle = hash2(ix + cx, iy + cy, seed) * TO_SHARE * 2 * Math.PI
-    const gx = Math.cos(angle)
-    const gy = Math.sin(angle)
+    const way = hash2(ix + cx, iy + cy, seed) & (DIRECTIONS - 1)
+    const gx = DIRECTION_X[way] ?? 0
+    const gy = DIRECTION_Y[way] ?? 0
     const along = gx * (fx - cx) + gy * (fy - cy)
     const wx = cx === 1 ? sx : 1 - sx
     const wy = cy === 1 ? sy : 1 - sy
@@ -113,15 +117,19 @@ export function gradientNoise(x: number, y: number, seed: number, out: Slope): v
   out.dy = dy * UNIT_GRADIENT
 }
 
-/** Noise of several sizes, each half as large and half as strong as the one before; mean 0, variance 1. */
-export function fbm(x: number, y: number, octaves: number, seed: number): number {
+/** An empty slope to fill. */
+export const newSlope = (): Slope => ({ value: 0, dx: 0, dy: 0 })
+
+/** Gradient noise of several sizes, each half as large and half as strong as the one before; mean 0, variance 1. Uses `work`. */
+export function fbm(x: number, y: number, octaves: number, seed: number, work: Slope): number {
   let sum = 0
   let energy = 0
   let strength = 1
   let px = x
   let py = y
   for (let octave = 0; octave < octaves; octave++) {
-    sum += strength * noise2(px, py, seed + octave * 0x632be5ab)
+    gradientNoise(px, py, seed + octave * 0x632be5ab, work)
+    sum += strength * work.value
     energy += strength * strength
     strength *= 0.5
     // Turned a little each time, so that no lattice shows through.

@@ -1,18 +1,18 @@
 import type { Mark } from '#shared/scheme/mark'
 import type { DepositKeep } from './keep'
-import { fbm, gradientNoise, hash2, noise2, type Slope } from './noise'
+import { fbm, gradientNoise, hash2, newSlope, noise2 } from './noise'
 import { normalShare, smoothStep } from './normal-share'
 
 type Worms = Extract<Mark, { kind: 'worm tracks' }>
 type Sponge = Extract<Mark, { kind: 'torn sponge' }>
 
-/** Tracks run longer along the body, wander, and break off. */
-const WORM = { stretch: 1.25, wander: 0.35, wanderSize: 2.2, soft: 0.06, breakFrom: -1.0, breakTo: -0.45, breakSize: 3.5, leastSlope: 0.35 }
+/** Tracks run longer along the body, wander, and break off. Sizes in wavelengths. */
+const WORM = { stretch: 1.25, finer: 1.25, wander: 0.3, wanderSize: 1.5, soft: 0.06, breakFrom: -1.0, breakTo: -0.45, breakSize: 3.5, leastSlope: 0.35 }
 /** Standard deviation of a sponge's relief: thresholds between -1 and 1 are heights of it. */
 const RELIEF = 0.18
-const SPONGE = { stretch: 1.3, octaves: 4, tear: 0.22, tearSize: 0.33 }
+const SPONGE = { coarser: 1.35, stretch: 1.3, slant: 0.35, octaves: 4, tear: 0.12, tearSize: 0.4 }
 
-/** Height over the belly's ridge is not used: patterns run over the back unbroken and meet unmatched under the belly. */
+/** mm from the ridge of the back, + on the left: patterns run over the back unbroken and meet unmatched under the belly. */
 function roundTheBack(keep: DepositKeep, i: number): number {
   return (keep.samples.side[i] ?? 1) > 0 ? keep.toBack[i] ?? 0 : -(keep.toBack[i] ?? 0)
 }
@@ -20,19 +20,22 @@ function roundTheBack(keep: DepositKeep, i: number): number {
 /** Worm tracks: the zero line of a wandering noise, a band of even width along it. 0 to 1 at every sample of the body. */
 export function wormMap(keep: DepositKeep, mark: Worms): Float32Array {
   const scale = keep.blank.shape.length / 100
-  const size = mark.wavelength * scale
+  const size = mark.wavelength * scale / WORM.finer
   const half = mark.width * scale / 2
   const out = new Float32Array(keep.samples.count)
-  const slope: Slope = { value: 0, dx: 0, dy: 0 }
+  const [slope, pullX, pullY] = [newSlope(), newSlope(), newSlope()]
   const seed = hash2(mark.seed, 1, 0x7f4a7c15)
+  const turn = WORM.wander / WORM.wanderSize
   for (const i of keep.onBody) {
     const x = (keep.samples.U[i] ?? 0) / (size * WORM.stretch)
     const y = roundTheBack(keep, i) / size
-    gradientNoise(
-      x + WORM.wander * noise2(x / WORM.wanderSize, y / WORM.wanderSize, seed + 1),
-      y + WORM.wander * noise2(x / WORM.wanderSize, y / WORM.wanderSize, seed + 2), seed, slope,
-    )
-    const steep = Math.hypot(slope.dx / WORM.stretch, slope.dy)
+    gradientNoise(x / WORM.wanderSize, y / WORM.wanderSize, seed + 1, pullX)
+    gradientNoise(x / WORM.wanderSize, y / WORM.wanderSize, seed + 2, pullY)
+    gradientNoise(x + WORM.wander * pullX.value, y + WORM.wander * pullY.value, seed, slope)
+    // The slope on the body, wander and stretch included: a track keeps its width where the noise runs flat.
+    const dx = (slope.dx * (1 + turn * pullX.dx) + slope.dy * turn * pullY.dx) / WORM.stretch
+    const dy = slope.dx * turn * pullX.dy + slope.dy * (1 + turn * pullY.dy)
+    const steep = Math.sqrt(dx * dx + dy * dy)
     const d = Math.abs(slope.value) / Math.max(WORM.leastSlope, steep) * size
     if (d > half + 4 * WORM.soft) continue
     const unbroken = smoothStep(WORM.breakFrom, WORM.breakTo, noise2(x / WORM.breakSize, y / WORM.breakSize, seed + 3))
@@ -45,15 +48,17 @@ export function wormMap(keep: DepositKeep, mark: Worms): Float32Array {
 export function spongeMap(keep: DepositKeep, mark: Sponge): Float32Array {
   const out = new Float32Array(keep.samples.count)
   const seed = hash2(mark.seed, 2, 0x7f4a7c15)
+  const size = SPONGE.coarser * mark.size
+  const work = newSlope()
   const threshold = mark.threshold / RELIEF
   const soft = mark.soft / RELIEF
   for (const i of keep.onBody) {
-    const x = (keep.samples.U[i] ?? 0) / (mark.size * SPONGE.stretch)
-    const y = roundTheBack(keep, i) / mark.size
+    const y = roundTheBack(keep, i) / size
+    const x = (keep.samples.U[i] ?? 0) / (size * SPONGE.stretch) + SPONGE.slant * y
     // Torn rather than rounded: small folds pull the patches' edges about.
     const tearX = SPONGE.tear * noise2(x / SPONGE.tearSize, y / SPONGE.tearSize, seed + 5)
     const tearY = SPONGE.tear * noise2(x / SPONGE.tearSize, y / SPONGE.tearSize, seed + 6)
-    out[i] = normalShare((fbm(x + tearX, y + tearY, SPONGE.octaves, seed) - threshold) / soft)
+    out[i] = normalShare((fbm(x + tearX, y + tearY, SPONGE.octaves, seed, work) - threshold) / soft)
   }
   return out
 }
