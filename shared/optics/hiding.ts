@@ -33,3 +33,15 @@ export function passesToHide(optics: PaintOptics): number | undefined {
   }
   return (low + high) / 2
 }
+
+/**
+ * Passes until the wanted share is covered, when each pass covers the same share of what is still bare; round up to spray.
+ *
+ * @param perPass above 0 and below 1
+ * @param wanted  from 0 to below 1
+ */
+export function passesToCover(perPass: number, wanted: number = HIDING_CONTRAST): number {
+  if (!(perPass > 0 && perPass < 1)) throw new RangeError(`passesToCover: the share a pass covers must be between 0 and 1, got ${perPass}`)
+  if (!(wanted >= 0 && wanted < 1)) throw new RangeError(`passesToCover: the wanted share must be from 0 to below 1, got ${wanted}`)
+  return Math.log(1 - wanted) / Math.log(1 - perPass)
+}

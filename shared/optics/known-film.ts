@@ -1,9 +1,10 @@
 import { assertWithin } from './bands'
-import { type Lab, xyzFromLab, xyzFromReflectance } from './colorimetry'
-import { filmInto, overGround } from './film'
+import { type Lab, labFromReflectance, xyzFromLab, xyzFromReflectance } from './colorimetry'
+import { deltaE2000 } from './delta-e'
+import { filmInto, filmLayer, layOver, overGround } from './film'
 import type { KnownDye, KnownMasstone, KnownTwoSwatches } from './paint-optics'
 import { ratioFromXyz, spectrumFromLab } from './spectrum-from-colour'
-import { type Finish, internalFromMeasured, internalSpectrum, measuredFromInternal } from './surface'
+import { type Finish, internalFromMeasured, internalSpectrum, measuredFromInternal, measuredSpectrum } from './surface'
 import { coefficientsFromTwoGrounds, type FoundCoefficients } from './two-grounds'
 
 /** Bare black and white of a usual opacity card, as read. Common practice. */
@@ -30,14 +31,32 @@ export function filmFromTwoSwatches(known: KnownTwoSwatches): FoundCoefficients 
   const ratio = ratioFromXyz(overWhite.reflectance, xyzFromLab(known.overBlack))
   const overBlack = overWhite.reflectance.map((value, i) => value * ratio.reflectance[i]!)
 
-  const found = coefficientsFromTwoGrounds({
-    black: groundFromLab(known.blackGround ?? CARD_BLACK),
-    white: groundFromLab(known.whiteGround ?? CARD_WHITE),
+  const black = groundFromLab(known.blackGround ?? CARD_BLACK)
+  const white = groundFromLab(known.whiteGround ?? CARD_WHITE)
+  const { K, S } = coefficientsFromTwoGrounds({
+    black, white, passes: known.passes,
     overBlack: internalSpectrum(overBlack, finish),
     overWhite: internalSpectrum(overWhite.reflectance, finish),
-    passes: known.passes,
   })
-  return { ...found, clipped: found.clipped || !overWhite.exact || !ratio.exact }
+  const missed = Math.max(
+    missBy(K, S, known.passes, black, finish, known.overBlack),
+    missBy(K, S, known.passes, white, finish, known.overWhite),
+  )
+  return { K, S, clipped: missed > BENT }
+}
+
+/** Difference, CIEDE2000, past which a film that gives back other colours than it was told of counts as bent. */
+const BENT = 1
+
+/** How far the film over its ground is from the colour it was told to have. */
+function missBy(K: Float64Array, S: Float64Array, passes: number, ground: Float64Array, finish: Finish, wanted: Lab): number {
+  const seen = measuredSpectrum(layOver(filmLayer(K, S, passes), ground), finish)
+  return deltaE2000(labFromReflectance(seen), wanted)
+}
+
+/** True when a swatch hides so well that its strength is a guess: ask for a thinner one. */
+export function hidesTooWell(overBlack: Lab, overWhite: Lab): boolean {
+  return xyzFromLab(overBlack)[1] > HIDING_CONTRAST * xyzFromLab(overWhite)[1]
 }
 
 /**
@@ -81,17 +100,14 @@ export function filmFromDye(known: KnownDye): FoundCoefficients {
   const haze = known.haze ?? 0
   if (!(haze >= 0 && haze <= 10)) throw new RangeError(`dye: haze must be from 0 to 10, got ${haze}`)
   const white = groundFromLab(known.whiteGround ?? CARD_WHITE)
-  const { reflectance, exact } = spectrumFromLab(known.overWhite)
-  const over = internalSpectrum(reflectance, known.finish ?? 'gloss')
+  const finish = known.finish ?? 'gloss'
+  const over = internalSpectrum(spectrumFromLab(known.overWhite).reflectance, finish)
 
-  let clipped = !exact
-  const K = over.map((Rw, i) => {
-    const strength = Math.log(white[i]! / Math.max(Rw, 1e-6)) / 2
-    // A dye cannot lighten; readings of a pale dye may say so by a hair.
-    clipped ||= strength < -0.005
-    return haze > 0 ? absorptionBehindHaze(Rw, white[i]!, haze * known.passes) / known.passes : Math.max(0, strength) / known.passes
-  })
-  return { K, S: new Float64Array(36).fill(haze), clipped }
+  const K = over.map((Rw, i) => haze > 0
+    ? absorptionBehindHaze(Rw, white[i]!, haze * known.passes) / known.passes
+    : Math.max(0, Math.log(white[i]! / Math.max(Rw, 1e-6))) / 2 / known.passes)
+  const S = new Float64Array(36).fill(haze)
+  return { K, S, clipped: missBy(K, S, known.passes, white, finish, known.overWhite) > BENT }
 }
 
 /** Absorption of a hazy film that shows Rw over the ground; found by halving. */

@@ -25,7 +25,7 @@ export interface PaintOptics {
   flake?: Flake
   fluorescent?: Fluorescence
   how: KnownHow
-  /** True when the colours given were not all possible and the nearest possible ones were taken. */
+  /** True when no film has the colours given, and the nearest one misses them by more than 1 CIEDE2000. */
   clipped: boolean
 }
 

@@ -4,7 +4,7 @@ import { type Lab, labFromXyz, lchFromLab, xyzFromReflectance } from '../../../s
 import { deltaE2000 } from '../../../shared/optics/delta-e'
 import { xyzFromLinearRgb } from '../../../shared/optics/screen-colour'
 import { ENGINE_VERSION } from '../../../shared/optics/engine-version'
-import { CARD_BLACK, CARD_WHITE, groundFromLab } from '../../../shared/optics/known-film'
+import { CARD_BLACK, CARD_WHITE, groundFromLab, hidesTooWell } from '../../../shared/optics/known-film'
 import { mixOptics, type PaintOptics, paintOpticsFrom } from '../../../shared/optics/paint-optics'
 import { promise, stackReflectance } from '../../../shared/optics/stack'
 import { flat, linearRgb, magnitude } from './draws'
@@ -35,6 +35,15 @@ it('never has a negative or endless coefficient, whatever colours it is told', (
 })
 it('owns up when the swatch over black is lighter than the one over white', () => {
   expect(paintOpticsFrom({ how: 'two-swatches', overBlack: [70, 0, 0], overWhite: [60, 0, 0], passes: 1 }).clipped).toBe(true)
+})
+it('does not cry wolf over a vivid candy whose colours it gives back', () => {
+  const optics = paintOpticsFrom({ how: 'two-swatches', overBlack: [4, 9, 4], overWhite: [55, 65, 45], passes: 2 })
+  expect(optics.clipped).toBe(false)
+  expect(deltaE2000(on(CARD_WHITE, optics, 2), [55, 65, 45])).toBeLessThan(0.5)
+})
+it('asks for a thinner swatch when the paint hides', () => {
+  expect(hidesTooWell([50, 20, 30], [50.2, 20, 30])).toBe(true)
+  expect(hidesTooWell([45, 20, 30], [50, 20, 30])).toBe(false)
 })
 it('reaches the masstone when thick, and 98 % hiding at the passes it was told', () => {
   const masstone: Lab = [52, 40, 30]
