@@ -12,9 +12,13 @@ const buildDir = join(ROOT, 'node_modules/.cache/countershade/build')
 await rm(buildDir, { recursive: true, force: true })
 
 const nuxt = await loadNuxt({ cwd: ROOT, dev: false, dotenv: false, overrides: { buildDir } })
-nuxt.hook('build:error', () => {
-  process.exitCode = 1
-})
-await build(nuxt)
-await nuxt.close()
-process.exit()
+try {
+  await build(nuxt)
+  await nuxt.close()
+  process.exit()
+}
+catch (error) {
+  // The error carries the whole list of modules; what it says is enough.
+  process.stderr.write(`${error instanceof Error ? error.message : error}\n`)
+  process.exit(1)
+}
