@@ -4,6 +4,8 @@ import { BUILT_IN_BLANKS, builtInBlank } from '#shared/blank/built-in-blanks'
 import { prepareBlank } from '#shared/blank/prepared-blank'
 import { sideArea } from '#shared/blank/body-measures'
 import { placeOnSurface } from '#shared/blank/surface-coordinates'
+import { gillEdge } from '#shared/blank/zones'
+import { contourAt } from '#shared/blank/profile'
 import { projectPoint } from '#shared/blank/view'
 import { fitView, PART_BODY, PART_FIN, PART_GAP, PART_NONE, samplesTransfer, subpixelSamples, viewSamples, type ViewSamples } from '#shared/blank/view-samples'
 
@@ -112,7 +114,9 @@ describe('carving, fins and joints', () => {
   it('tilt the light at the gill edge, but hardly the gloss', () => {
     let [most, gloss] = [0, 0]
     for (let i = 0; i < samples.count; i++) {
-      if (samples.part[i] !== PART_BODY || (samples.u[i] ?? 1) > 0.3 || (samples.U[i] ?? 0) < -78) continue
+      const v = samples.v[i] ?? 0
+      const fromEdge = Math.abs((samples.u[i] ?? 0) - gillEdge(glide.shape.gill, v))
+      if (samples.part[i] !== PART_BODY || v < 0.4 || v > 0.6 || fromEdge > 0.005) continue
       const plain = samples.bodyNormal.subarray(3 * i, 3 * i + 3)
       const angle = (n: Float32Array) => Math.acos(Math.min(1, n.reduce((sum, value, k) => sum + value * (plain[k] ?? 0), 0)))
       most = Math.max(most, angle(samples.normal.subarray(3 * i, 3 * i + 3)))
@@ -143,6 +147,11 @@ describe('carving, fins and joints', () => {
     const { back, belly } = { back: projectPoint(view, 160, 92, 21.5, 0)[1], belly: projectPoint(view, 160, 92, -21.5, 0)[1] }
     expect(Math.min(...rows)).toBeGreaterThan(back + 1)
     expect(Math.max(...rows)).toBeLessThan(belly - 1)
+    // 3 mm below the line of the back the gap is still open to what lies behind the lure.
+    const { back: line } = contourAt(glide.profile, 93.8)
+    const [px, py] = projectPoint(view, 160, 92 + (line - 3) * (0.1 + 0.0016 * (line - 3)), line - 3, 0)
+    const through = subpixelSamples(glide, view, Uint32Array.of(Math.floor(py) * 640 + Math.floor(px)), Float32Array.of(px % 1, py % 1))
+    expect(through.part[0]).toBe(PART_NONE)
     expect(gap.every(i => Math.abs((samples.occlusion[i] ?? 0) - 0.12) < 1e-6)).toBe(true)
   })
 })
@@ -212,13 +221,16 @@ describe('eyes, lip and wire', () => {
     expect(drawnParts(shad, fitView(shad, { width: 640, height: 320, roll: 180, nose: 'right' })).eyes[0]?.side).toBe(-1)
   })
   it('turn a picture place on the rim of the eye into radius 1', () => {
-    const view = fitView(shad, { width: 640, height: 320 })
+    const view = fitView(shad, { width: 640, height: 320, roll: 25 })
     const [eye] = drawnParts(shad, view).eyes
     if (!eye) throw new Error('the eye faces the viewer')
     const [a, b, c, d] = eye.inverse
     const [dx, dy] = [eye.toTail[0] * eye.radius * view.scale, -eye.toTail[1] * eye.radius * view.scale]
     expect(a * dx + b * dy).toBeCloseTo(1, 9)
     expect(c * dx + d * dy).toBeCloseTo(0, 9)
+    const [ux, uy] = [eye.up[0] * eye.radius * view.scale, -eye.up[1] * eye.radius * view.scale]
+    expect(a * ux + b * uy).toBeCloseTo(0, 9)
+    expect(c * ux + d * uy).toBeCloseTo(1, 9)
   })
   it('show the lip as a bar from the side and as a plate from below', () => {
     const span = (roll: number) => {
