@@ -1,14 +1,18 @@
+import { letDown } from '#shared/picture/let-down'
 import { pictureBench } from '#shared/picture/picture-bench'
 import { PICTURE_STAGES, PictureAsk, type PictureAnswer } from '#shared/picture/picture-messages'
+import { zoneBench } from '#shared/picture/zone-bench'
+import { zoneColours } from '#shared/picture/zone-colours'
 
-/** Paints the pictures of a page away from the page. The latest request for each picture wins. */
+/** Paints the pictures of a page and works out its promised colours, away from the page. The latest request of a name wins. */
 
-type PaintAsk = Extract<PictureAsk, { ask: 'paint' }>
+type Work = Exclude<PictureAsk, { ask: 'forget' }>
 
 const bench = pictureBench()
-/** One request per picture; the last one asked for is painted first. */
-const wanted = new Map<string, PaintAsk>()
-let isPainting = false
+const measured = zoneBench()
+/** One request per name. */
+const wanted = new Map<string, Work>()
+let isAtWork = false
 
 function post(answer: PictureAnswer, transfer: Transferable[] = []): void {
   self.postMessage(answer, { transfer })
@@ -16,18 +20,10 @@ function post(answer: PictureAnswer, transfer: Transferable[] = []): void {
 
 self.addEventListener('message', (event: MessageEvent<unknown>) => {
   const ask = PictureAsk.parse(event.data)
-  switch (ask.ask) {
-    case 'paint':
-      wanted.delete(ask.picture)
-      wanted.set(ask.picture, ask)
-      void paintAll()
-      return
-    case 'pick':
-      post({ answer: 'picked', picture: ask.picture, request: ask.request, place: bench.pick(ask.look, ask.options, ask.x, ask.y) })
-      return
-    case 'forget':
-      wanted.delete(ask.picture)
-  }
+  wanted.delete(ask.picture)
+  if (ask.ask === 'forget') return
+  wanted.set(ask.picture, ask)
+  void workAll()
 })
 
 /** Lets messages that came meanwhile be heard. */
@@ -35,30 +31,49 @@ function breath(): Promise<void> {
   return new Promise(resolve => setTimeout(resolve))
 }
 
-async function paintAll(): Promise<void> {
-  if (isPainting) return
-  isPainting = true
-  for (let job = last(); job; job = last()) {
-    wanted.delete(job.picture)
-    await paint(job)
-  }
-  isPainting = false
+/** Quick answers first, then the picture that was asked for last. */
+function next(): Work | undefined {
+  const all = [...wanted.values()]
+  return all.find(({ ask }) => ask !== 'paint') ?? all.at(-1)
 }
 
-function last(): PaintAsk | undefined {
-  return [...wanted.values()].at(-1)
-}
-
-async function paint({ picture, request, look, options }: PaintAsk): Promise<void> {
-  try {
-    let done = 0
-    for (const painted of bench.stages(look, options)) {
-      post({ answer: 'painted', picture, request, stage: PICTURE_STAGES[done++] ?? 'refined', painted }, [painted.rgba.buffer])
-      await breath()
-      if (wanted.has(picture)) return
+async function workAll(): Promise<void> {
+  if (isAtWork) return
+  isAtWork = true
+  for (let work = next(); work; work = next()) {
+    wanted.delete(work.picture)
+    try {
+      await answer(work)
     }
+    catch (error) {
+      post({ answer: 'failed', picture: work.picture, request: work.request, reason: error instanceof Error ? error.message : String(error) })
+    }
+    await breath()
   }
-  catch (error) {
-    post({ answer: 'failed', picture, request, reason: error instanceof Error ? error.message : String(error) })
+  isAtWork = false
+}
+
+async function answer(work: Work): Promise<void> {
+  const { picture, request, look } = work
+  switch (work.ask) {
+    case 'paint': return paint(work)
+    case 'pick': return post({ answer: 'picked', picture, request, place: bench.pick(look, work.options, work.x, work.y) })
+    case 'zones': return post({ answer: 'zones', picture, request, zones: zoneColours(look, work.wish, measured) })
+    case 'let-down':
+      return post({ answer: 'let-down', picture, request, steps: letDown(look, work.coatId, work.zone, work.passesMost, work.clear, measured) })
+  }
+}
+
+/** Between the stages of a picture, whoever asks something else is answered and a newer request takes over. */
+async function paint({ picture, request, look, options }: Extract<Work, { ask: 'paint' }>): Promise<void> {
+  let done = 0
+  for (const painted of bench.stages(look, options)) {
+    post({ answer: 'painted', picture, request, stage: PICTURE_STAGES[done++] ?? 'refined', painted }, [painted.rgba.buffer])
+    await breath()
+    if (wanted.has(picture)) return
+    for (let quick = next(); quick && quick.ask !== 'paint'; quick = next()) {
+      wanted.delete(quick.picture)
+      await answer(quick)
+    }
   }
 }

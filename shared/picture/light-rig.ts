@@ -46,6 +46,8 @@ const FLOP: Setting = {
 }
 /** The tilt at which the arc passes the bench lamp, degrees. */
 const BENCH_TILT = 45
+/** A pearl's face is read between the two angles nearest its gloss, 15° and 25°. */
+const FACE_ANGLE = 20
 
 /** The tent for a light: one of the three settings, or a lamp anywhere on the arc from face to flop. */
 export function lightRig(light: PictureLight): LightRig {
@@ -60,6 +62,12 @@ export function lightRig(light: PictureLight): LightRig {
 /** Names a light for caches. */
 export function lightKey(light: PictureLight): string {
   return typeof light === 'string' ? light : `tilt-${light.tilt}`
+}
+
+/** Angle from the gloss at which a light shows flakes on a flank that faces the viewer, degrees. */
+export function aspecularOf(light: PictureLight): number {
+  if (typeof light === 'object') return light.tilt
+  return light === 'bench' ? BENCH_TILT : light === 'face' ? FACE_ANGLE : TILT_MAX
 }
 
 function settingAt(tilt: number): Setting {

@@ -1,7 +1,7 @@
 import { PART_FIN, PART_GAP, type ViewSamples } from '#shared/blank/view-sample-lists'
 import { flakeGeometry } from '#shared/optics/flake-angles'
 import { FLAKE_TABLE_COSINES } from '#shared/optics/flake-table'
-import { SURFACE_INSIDE, SURFACE_OUTSIDE, VEIL } from '#shared/optics/surface'
+import { SURFACE_INSIDE, SURFACE_OUTSIDE, VEIL, type Finish } from '#shared/optics/surface'
 import { PICTURE_LINEAR_WEIGHTS } from '#shared/optics/to-picture-bands'
 import { BANDS, type FlakeLevels } from './coat-table'
 import type { LaidTable } from './compose'
@@ -34,7 +34,7 @@ export interface LitStack {
 /** How it is lit and finished. */
 export interface Lighting {
   tables: LightTables
-  clear: boolean
+  finish: Finish
   /** Only the promised colours; `aspecular` is the angle flakes are read at, degrees. */
   plain: boolean
   aspecular: number
@@ -52,9 +52,11 @@ export interface SampleForm {
 /** Linear light of every sample, three each, as the screen will show it: paint toned, gloss on top. */
 export function paintLight(form: SampleForm, stack: LitStack, lighting: Lighting, out = new Float32Array(3 * form.samples.count)): Float32Array {
   const { samples, normal } = form
-  const { tables, clear, plain } = lighting
-  const matt = plain || clear ? undefined : tables.matt()
-  const veil = plain && !clear ? VEIL.matt : 0
+  const { tables, finish, plain } = lighting
+  const isGlossy = finish === 'gloss' && !plain
+  const matt = plain || isGlossy ? undefined : tables.matt()
+  const mattShare = MATT_SHARE * VEIL[finish] / VEIL.matt
+  const veil = plain ? VEIL[finish] : 0
   const flakes = flakeLight(form, stack.coats, lighting)
   for (let i = 0; i < samples.count; i++) {
     const x = normal[3 * i]!, y = normal[3 * i + 1]!
@@ -62,10 +64,10 @@ export function paintLight(form: SampleForm, stack: LitStack, lighting: Lighting
     const light = plain ? 1 : (1 + FORM * (atNormal(tables.irradiance, x, y) - 1)) * occlusion
     diffuseLight(stack.reflectance, i * BANDS, light, veil, out, 3 * i)
     flakes?.(i, light, out)
-    if (matt) addEvenly(out, 3 * i, MATT_SHARE * atNormal(matt, x, y) * occlusion)
+    if (matt) addEvenly(out, 3 * i, mattShare * atNormal(matt, x, y) * occlusion)
     if (plain) tonePlain(out, 3 * i)
     else tonePaint(out, 3 * i)
-    if (clear && !plain) addGloss(out, 3 * i, glossAt(form, i, tables))
+    if (isGlossy) addGloss(out, 3 * i, glossAt(form, i, tables))
     if (samples.part[i] === PART_GAP) for (let c = 0; c < 3; c++) out[3 * i + c]! *= GAP_LIGHT
   }
   return out

@@ -8,14 +8,15 @@ import { canvasOf, copyCanvas, encodeCanvas, type Canvas } from './canvas'
 import { coatTable, type CoatTable } from './coat-table'
 import { drawEye } from './draw-eye'
 import { drawHardware } from './draw-hardware'
-import { lightKey } from './light-rig'
+import { keepSome } from './keep-some'
+import { aspecularOf, lightKey } from './light-rig'
 import { lightTables, type LightTables } from './light-tables'
 import type { Look } from './look'
 import { paintLight, type Lighting } from './paint-light'
 import { pictureOptions, type Picture, type PictureLight, type PictureOptions, type PictureWish } from './picture-options'
 import { pickPlace, type PickedPlace } from './pick-place'
 import { FOUR_PLACES, jumpingPixels, NINE_PLACES, putRefined, shownPixels } from './refine'
-import { eyesAreFitted, shownCoats } from './shown-coats'
+import { eyesAreFitted, finishShown, shownCoats } from './shown-coats'
 import { composeKept, keptMap, tidyMaps, viewKit, type KeyedCoat, type ViewKit } from './view-kit'
 
 /** A coarse picture is this much smaller in each direction. */
@@ -98,12 +99,11 @@ export function pictureBench(): PictureBench {
     const { colour, finish } = look.body.ground
     const ground = toPictureBands(groundFromLab(colour, finish))
     const reflectance = composeKept(kit, canonicalJson(look.body.ground), ground, coats)
+    const lighting: Lighting = {
+      tables: lightOf(options.light), finish: finishShown(look, options), plain: options.plain, aspecular: aspecularOf(options.light),
+    }
     const form = eyesAreFitted(look, options.upTo) ? kit.form : kit.blindForm
-    return paintLight(form, { reflectance, coats }, lightingOf(options))
-  }
-
-  function lightingOf({ light, clear, plain }: PictureOptions): Lighting {
-    return { tables: lightOf(light), clear, plain, aspecular: aspecularOf(light) }
+    return paintLight(form, { reflectance, coats }, lighting)
   }
 
   function drawFull(look: Look, options: PictureOptions): Canvas {
@@ -142,12 +142,6 @@ export function pictureBench(): PictureBench {
   }
 }
 
-/** Angle from the gloss at which a light shows flakes on a flank that faces the viewer, degrees. */
-export function aspecularOf(light: PictureLight): number {
-  if (typeof light === 'object') return light.tilt
-  return light === 'bench' ? 45 : light === 'face' ? 20 : 110
-}
-
 function coarser(options: PictureOptions): PictureOptions {
   return {
     ...options, quality: 'coarse',
@@ -164,17 +158,4 @@ function shareHeld(held: Uint32Array, wanted: Uint32Array): number {
     if (held[at] === pixel) found++
   }
   return found / wanted.length
-}
-
-/** Keeps the few values that were asked for last; one that no longer serves is made anew. */
-function keepSome<T>(most: number): (key: string, make: () => T, serves?: (kept: T) => boolean) => T {
-  const kept = new Map<string, T>()
-  return (key, make, serves = () => true) => {
-    const found = kept.get(key)
-    const value = found !== undefined && serves(found) ? found : make()
-    kept.delete(key)
-    kept.set(key, value)
-    if (kept.size > most) kept.delete(kept.keys().next().value!) // there is one: size is above 0
-    return value
-  }
 }

@@ -1,4 +1,5 @@
 import type { PaintOptics } from '#shared/optics/paint-optics'
+import type { Finish } from '#shared/optics/surface'
 import { canonicalJson } from '#shared/scheme/canonical'
 import { laidCoats, type LaidCoat } from '#shared/scheme/laid-coats'
 import { effectivePasses } from '#shared/scheme/pass-strength'
@@ -41,4 +42,10 @@ export function eyesAreFitted({ body, materials }: Look, upTo: PictureOptions['u
   const colours = laidCoats(body).filter(({ coat }) => !isClearCoat(coat, materials))
   const shown = laidUpTo(body, upTo)
   return shown.length > 0 && colours.every(({ coat }) => shown.some(other => other.coat.id === coat.id))
+}
+
+/** How the surface ends: glossy under a clear, matt as coats dry, and the ground as it came. */
+export function finishShown(look: Look, options: Pick<PictureOptions, 'upTo' | 'clear'>): Finish {
+  if (options.clear) return 'gloss'
+  return shownCoats(look, options).length > 0 ? 'matt' : look.body.ground.finish
 }

@@ -37,6 +37,7 @@ export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOr
       picks.delete(answer.request)
       return
     }
+    if (answer.answer === 'zones' || answer.answer === 'let-down') return
     if (answer.answer === 'failed') {
       failed.value = answer.reason
       if (answer.request === Infinity) thread = undefined
@@ -53,7 +54,8 @@ export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOr
     if (!thread) {
       hush?.()
       thread = paintingThread()
-      hush = thread.hear(name, hear)
+      const ears = [thread.hear(name, hear), thread.hear(`${name} pick`, hear)]
+      hush = () => ears.forEach(stop => stop())
     }
     return thread
   }
@@ -77,7 +79,7 @@ export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOr
       const request = ++picked
       return new Promise((resolve) => {
         picks.set(request, resolve)
-        onThread().ask({ ask: 'pick', picture: name, request, look: nowLook, options, x: right * options.width, y: down * options.height })
+        onThread().ask({ ask: 'pick', picture: `${name} pick`, request, look: nowLook, options, x: right * options.width, y: down * options.height })
       })
     },
   }
