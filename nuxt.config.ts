@@ -29,12 +29,15 @@ export default defineNuxtConfig({
   nitro: {
     plugins: ['~~/server/boot/runtime-config.ts'],
     hooks: {
-      // Pictures are painted on threads of their own, which start from one file that stands by itself.
+      // Pictures are painted and photos taken in on threads of their own, each of which starts from a file that stands by itself.
       compiled: async (nitro) => {
         await build({
-          entryPoints: [here('./server/pictures/paint-picture.ts')],
-          outfile: join(nitro.options.output.serverDir, 'workers/paint-picture.mjs'),
+          entryPoints: [here('./server/pictures/paint-picture.ts'), here('./server/photos/take-in-photo.ts')],
+          outdir: join(nitro.options.output.serverDir, 'workers'),
+          entryNames: '[name]',
+          outExtension: { '.js': '.mjs' },
           alias: { '#shared': here('./shared'), '#server': here('./server') },
+          external: ['sharp'],
           bundle: true, platform: 'node', format: 'esm', target: 'node20', logLevel: 'warning',
         })
       },
@@ -50,5 +53,38 @@ export default defineNuxtConfig({
   },
   auth: { loadStrategy: 'none' },
   eslint: { config: { stylistic: true } },
+  // What depends on the address and on development is added at start: server/boot/security-headers.ts.
+  security: {
+    headers: {
+      contentSecurityPolicy: {
+        'default-src': ['\'none\''],
+        'base-uri': ['\'none\''],
+        'connect-src': ['\'self\''],
+        'font-src': ['\'self\''],
+        'form-action': ['\'self\''],
+        'frame-ancestors': ['\'none\''],
+        'img-src': ['\'self\'', 'blob:', 'data:'],
+        'manifest-src': ['\'self\''],
+        'media-src': ['\'self\'', 'blob:'],
+        'object-src': ['\'none\''],
+        'script-src': ['\'self\'', '\'nonce-{{nonce}}\'', '\'strict-dynamic\'', '\'wasm-unsafe-eval\''],
+        'script-src-attr': ['\'none\''],
+        'style-src': ['\'self\'', '\'nonce-{{nonce}}\''],
+        'worker-src': ['\'self\'', 'blob:'],
+        'upgrade-insecure-requests': false,
+      },
+      crossOriginEmbedderPolicy: false,
+      referrerPolicy: 'same-origin',
+      strictTransportSecurity: false,
+      xFrameOptions: 'DENY',
+      permissionsPolicy: { 'camera': ['self'], 'fullscreen': ['self'], 'display-capture': [], 'geolocation': [], 'microphone': [] },
+    },
+    // Bodies, tries and origins are counted and checked by server/http and server/middleware, which count what really arrives.
+    requestSizeLimiter: false,
+    rateLimiter: false,
+    xssValidator: false,
+    corsHandler: false,
+    removeLoggers: false,
+  },
   tailwindcss: { cssPath: '~/assets/css/tailwind.css', viewer: false },
 })
