@@ -76,6 +76,8 @@ export const PICTURE_WIDTH_MAX = 1600
 /** How a picture of a scheme is wanted. */
 export const PictureQuery = z.object({
   width: z.coerce.number().int().min(32).max(PICTURE_WIDTH_MAX).default(640),
+  /** Half the width when absent. */
+  height: z.coerce.number().int().min(32).max(PICTURE_WIDTH_MAX).optional(),
   /** A revision's number; the draft when absent (the newest revision for the front desk). */
   revision: z.coerce.number().int().min(1).max(2 ** 31 - 1).optional(),
   /** Only so far up: a coat's id, or the bare ground. Never for the front desk. */

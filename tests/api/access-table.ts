@@ -1,7 +1,9 @@
 import type { AccessRow } from './access/row'
 import { PEOPLE_ACCESS } from './access/people'
+import { SCHEME_ACCESS } from './access/scheme'
 
 /** Every route and who gets what from it. */
 export const ACCESS_TABLE: readonly AccessRow[] = [
   ...PEOPLE_ACCESS,
+  ...SCHEME_ACCESS,
 ]
