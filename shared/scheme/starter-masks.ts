@@ -63,11 +63,11 @@ function tongue(u: number, v: number, length: number, width: number, curl: numbe
   return ribbon(line, at => 0.0008 + width * 2.4 * Math.sqrt(at + 0.02) * (1 - at) ** 1.1)
 }
 
-const BARS = [
+const BARS: readonly Parameters<typeof bar>[] = [
   [0.30, 0.02, 0.60, 0.026, 0.010, 0.006], [0.395, 0.01, 0.72, 0.030, 0.011, 0.004], [0.485, 0.01, 0.74, 0.030, 0.012, 0],
   [0.575, 0.01, 0.72, 0.028, 0.011, -0.002], [0.66, 0.01, 0.70, 0.026, 0.010, -0.004], [0.745, 0.01, 0.68, 0.024, 0.010, -0.004],
   [0.825, 0.01, 0.66, 0.020, 0.010, -0.004],
-] as const
+]
 
 const spots = () => arrayOf(22, (k) => {
   const row = k % 3
@@ -84,7 +84,7 @@ const flames = () => [
 
 const wormTracks = () => arrayOf(14, (k) => {
   const [row, column] = [k % 3, Math.floor(k / 3)]
-  const [u, v] = [0.27 + 0.135 * column + 0.04 * row, 0.075 + 0.115 * row]
+  const [u, v] = [0.26 + 0.125 * column + 0.04 * row, 0.075 + 0.115 * row]
   const line = (at: number): Place => [
     u + 0.10 * at + 0.008 * Math.sin(2 * Math.PI * at + 2.1 * k), v + 0.032 * Math.sin(2 * Math.PI * (0.9 * at + 0.37 * k)),
   ]
