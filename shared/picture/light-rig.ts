@@ -19,9 +19,11 @@ export interface LightRig {
   horizon: number
   floor: number
   strips: readonly Strip[]
+  /** Light that is left where the camera looks in, as a share of the cloth round it. */
+  hole: number
 }
 
-/** Centre, radius and softness of the hole the camera looks through, degrees, and the light it leaves. */
+/** Centre, radius and softness of the hole the camera looks through, degrees; and the light it leaves. */
 const HOLE = { elevation: 15, radius: 9, edge: 4, left: 0.4 }
 
 const RIM = { elevation: 108, azimuth: 0, halfHeight: 5, halfWidth: 48, edge: 3 }
@@ -105,7 +107,7 @@ function rigOf({ overhead, horizon, floor, key, glow, rim, card }: Setting): Lig
   const strips = [key, { ...RIM, radiance: rim }]
   if (glow > 0) strips.push({ ...key, halfHeight: GLOW.halfHeight, edge: GLOW.edge, radiance: GLOW.share * glow * key.radiance })
   if (card > 0) strips.push({ ...CARD, radiance: CARD.radiance * card })
-  return { overhead, horizon, floor, strips }
+  return { overhead, horizon, floor, strips, hole: HOLE.left }
 }
 
 function smooth(from: number, to: number, x: number): number {
@@ -131,7 +133,7 @@ export function clothRadiance(rig: LightRig, x: number, y: number, z: number): n
   const toHole = y * Math.sin(HOLE.elevation * DEGREE) + z * Math.cos(HOLE.elevation * DEGREE)
   if (toHole < 0.9) return cloth
   const off = Math.acos(Math.min(1, toHole)) / DEGREE
-  return cloth * (HOLE.left + (1 - HOLE.left) * smooth(HOLE.radius - HOLE.edge, HOLE.radius + HOLE.edge, off))
+  return cloth * (rig.hole + (1 - rig.hole) * smooth(HOLE.radius - HOLE.edge, HOLE.radius + HOLE.edge, off))
 }
 
 /** Radiance of the tent in a unit direction of the view frame, before the gain. */

@@ -1,0 +1,42 @@
+import { emptyViewSamples } from '#shared/blank/view-sample-lists'
+import { labFromXyz, type Lab } from '#shared/optics/colorimetry'
+import { groundFromLab } from '#shared/optics/known-film'
+import { xyzFromLinearRgb } from '#shared/optics/screen-colour'
+import type { Finish } from '#shared/optics/surface'
+import type { Coat } from '#shared/optics/stack'
+import { toPictureBands } from '#shared/optics/to-picture-bands'
+import { coatTable } from '#shared/picture/coat-table'
+import { bareGround, layCoats } from '#shared/picture/compose'
+import type { LightTables } from '#shared/picture/light-tables'
+import { paintLight } from '#shared/picture/paint-light'
+import type { ShelfPaint } from '../../fixtures/looks/shelf'
+import { SHELF_PAINTS } from '../../fixtures/looks/shelf'
+
+/** A primed ground, and coats named from the shelf. */
+export const GROUND = groundFromLab([78, 2, 14], 'satin')
+export const coats = (...laid: [ShelfPaint, number][]): Coat[] =>
+  laid.map(([name, passes]) => ({ optics: SHELF_PAINTS.find(paint => paint.name === name)!.optics, passes }))
+
+/** Linear light of one flat patch of a stack, as the picture draws it. */
+export function patchLight(
+  stack: readonly Coat[], tables: LightTables,
+  { finish = 'gloss', plain = false, aspecular = 45, normal = [0, 0, 1], ground = GROUND }:
+  { finish?: Finish, plain?: boolean, aspecular?: number, normal?: [number, number, number], ground?: ArrayLike<number> } = {},
+): [number, number, number] {
+  const samples = emptyViewSamples({ roll: 0, nose: 'left', width: 1, height: 1, scale: 1, centreX: 0, centreY: 0 }, 1)
+  samples.occlusion.fill(1)
+  const laid = stack.map(({ optics, passes }) => ({ codes: Uint8Array.of(255), table: coatTable(optics, passes) }))
+  const reflectance = layCoats(laid, bareGround(1, toPictureBands(ground)))
+  const direction = Float32Array.from(normal)
+  const light = paintLight(
+    { samples, normal: direction, glossNormal: direction, sparkle: new Float32Array(1) },
+    { reflectance, coats: laid },
+    { tables, finish, plain, aspecular },
+  )
+  return [light[0]!, light[1]!, light[2]!]
+}
+
+/** The same as a colour. */
+export function patchLab(...ask: Parameters<typeof patchLight>): Lab {
+  return labFromXyz(xyzFromLinearRgb(patchLight(...ask)))
+}

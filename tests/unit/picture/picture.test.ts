@@ -1,0 +1,99 @@
+import { describe, expect, it } from 'vitest'
+import { labFromXyz, type Lab } from '#shared/optics/colorimetry'
+import { deltaE2000 } from '#shared/optics/delta-e'
+import { decodeChannel, xyzFromLinearRgb } from '#shared/optics/screen-colour'
+import { pictureBench } from '#shared/picture/picture-bench'
+import type { Picture } from '#shared/picture/picture-options'
+import { renderLook } from '#shared/picture/render'
+import { ember } from '../../fixtures/looks/ember'
+import { perch } from '../../fixtures/looks/perch'
+
+const SIZE = { width: 240, height: 120 }
+const bench = pictureBench()
+
+function meanLab({ rgba }: Picture): Lab {
+  const sum = [0, 0, 0]
+  let count = 0
+  for (let i = 0; i < rgba.length; i += 4) {
+    if (rgba[i + 3] !== 255) continue
+    count++
+    for (let c = 0; c < 3; c++) sum[c]! += decodeChannel(rgba[i + c]! / 255)
+  }
+  return labFromXyz(xyzFromLinearRgb(sum.map(value => value / count) as [number, number, number]))
+}
+
+describe('the surround', () => {
+  const empty = bench.draw(ember, { ...SIZE, surround: null })
+  it.each([0, 119, 146, 255])('is exactly the grey asked for wherever the blank does not reach: %i', (grey) => {
+    const picture = bench.draw(ember, { ...SIZE, surround: grey })
+    let bare = 0
+    for (let i = 0; i < picture.rgba.length; i += 4) {
+      if (empty.rgba[i + 3] !== 0) continue
+      bare++
+      expect([...picture.rgba.subarray(i, i + 4)]).toEqual([grey, grey, grey, 255])
+    }
+    expect(bare).toBeGreaterThan(0.4 * SIZE.width * SIZE.height)
+  })
+
+  it('stays neutral under a shadow', () => {
+    const { rgba } = bench.draw(ember, { ...SIZE, surround: 119, shadow: true })
+    let darkest = 255
+    for (let i = 0; i < rgba.length; i += 4) {
+      if (empty.rgba[i + 3] !== 0) continue
+      expect(rgba[i]).toBe(rgba[i + 1])
+      expect(rgba[i]).toBe(rgba[i + 2])
+      darkest = Math.min(darkest, rgba[i]!)
+    }
+    expect(darkest).toBeLessThan(115)
+  })
+})
+
+describe('a picture', () => {
+  it('is the same whenever the same is asked for', () => {
+    const small = { width: 96, height: 48 }
+    expect(renderLook(ember, small).rgba).toEqual(renderLook(ember, small).rgba)
+  })
+
+  it('comes coarse first, at a quarter of the size, and hardly changes colour as it is refined', () => {
+    const stages = [...bench.stages(perch, { ...SIZE, width: 400, height: 200, surround: null })]
+    expect(stages.map(({ width }) => width)).toEqual([100, 400, 400])
+    const [coarse, , fine] = stages.map(meanLab)
+    expect(deltaE2000(coarse!, fine!)).toBeLessThan(1)
+  })
+
+  it('shows the bare ground alone when asked for no coat', () => {
+    const ground = meanLab(bench.draw(perch, { ...SIZE, upTo: 'ground', plain: true, clear: false, surround: null }))
+    expect(deltaE2000(ground, [78, 2, 14])).toBeLessThan(2)
+  })
+
+  it('draws an edit on kept coats as it would draw it afresh', () => {
+    const kept = pictureBench()
+    const edited = structuredClone(perch)
+    const item = edited.body.stack.filter(each => each.act === 'coat')[6]
+    if (item?.act !== 'coat') throw new Error('the perch has a seventh coat')
+    for (const passes of [1, 5, 2]) {
+      item.coat.passes = passes
+      kept.draw(edited, { ...SIZE, width: 120, height: 60 })
+    }
+    const afresh = renderLook(edited, { ...SIZE, width: 120, height: 60 }).rgba
+    const again = kept.draw(edited, { ...SIZE, width: 120, height: 60 }).rgba
+    expect(Math.max(...afresh.map((value, i) => Math.abs(value - again[i]!)))).toBeLessThanOrEqual(1)
+  })
+
+  it('is glossy under a clear and not before', () => {
+    const brightest = (clear: boolean) => Math.max(...bench.draw(perch, { ...SIZE, clear, surround: 0 }).rgba.filter((_, i) => i % 4 === 1))
+    expect(brightest(true)).toBeGreaterThan(brightest(false))
+  })
+
+  it('tells what lies where somebody points', () => {
+    const options = { ...SIZE }
+    const { origin, mmPerPixel } = bench.draw(perch, options)
+    const at = (x: number, y: number) => bench.pick(perch, options, origin[0] + x / mmPerPixel, origin[1] - y / mmPerPixel)
+    expect(at(40, 9)).toMatchObject({ along: 'trunk', side: 1 })
+    expect(at(40, 11)?.zone).toBe('back')
+    expect(at(40, -11)?.zone).toBe('belly')
+    expect(at(6, 0)?.along).toBe('head')
+    expect(at(86, 5)?.zone).toBe('fin:tail')
+    expect(at(-30, 30)).toBeUndefined()
+  })
+})

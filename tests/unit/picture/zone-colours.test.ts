@@ -1,0 +1,93 @@
+import { describe, expect, it } from 'vitest'
+import { deltaE2000 } from '#shared/optics/delta-e'
+import { letDown } from '#shared/picture/let-down'
+import { pictureText } from '#shared/picture/picture-hash'
+import { zoneBench } from '#shared/picture/zone-bench'
+import { zoneColours } from '#shared/picture/zone-colours'
+import { ember } from '../../fixtures/looks/ember'
+import { perch } from '../../fixtures/looks/perch'
+import { roach } from '../../fixtures/looks/roach'
+
+const bench = zoneBench()
+const ALL = { upTo: 'all', clear: true, light: 'bench' } as const
+const coatIds = (look: typeof perch) => look.body.stack.flatMap(item => item.act === 'coat' ? [item.coat.id] : [])
+const of = (look: typeof perch, wish: Parameters<typeof zoneColours>[1] = ALL) => new Map(zoneColours(look, wish, bench).map(zone => [zone.zone, zone]))
+
+describe('promised colours', () => {
+  it('has one for every zone of the flank and every fin', () => {
+    expect([...of(perch).keys()]).toEqual(['back', 'upper-flank', 'lower-flank', 'belly', 'head', 'gill-cover', 'tail', ...perch.materials.blank.shape.fins.map(fin => `fin:${fin.id}`)])
+  })
+
+  it('goes up from the ground coat by coat and ends at the promise', () => {
+    for (const { wayUp, promised } of of(roach).values()) {
+      expect(wayUp[0]!.coatId).toBeNull()
+      expect(deltaE2000(wayUp.at(-1)!.lab, promised.lab)).toBeLessThan(1e-6)
+      const ids = wayUp.slice(1).map(step => step.coatId)
+      expect(ids).toEqual(coatIds(roach).filter(id => ids.includes(id)))
+    }
+  })
+
+  it('has a face and a flop only where flakes lie, the face brighter', () => {
+    const zones = of(roach)
+    const flank = zones.get('upper-flank')!
+    expect(flank.face!.lab[0] - flank.flop!.lab[0]).toBeGreaterThan(15)
+    expect(zones.get('fin:tail')!.face).toBeUndefined()
+  })
+
+  it('follows the lamp on its arc', () => {
+    const at = (tilt: number) => of(roach, { ...ALL, light: { tilt } }).get('lower-flank')!.promised.lab[0]
+    expect(at(15)).toBeGreaterThan(at(35))
+    expect(at(35)).toBeGreaterThan(at(60))
+    expect(at(60)).toBeGreaterThan(at(110))
+  })
+
+  it('deepens dark colours under a clear', () => {
+    const dry = of(perch, { ...ALL, clear: false }).get('back')!.promised.lab, clear = of(perch).get('back')!.promised.lab
+    expect(dry[0] - clear[0]).toBeGreaterThan(5)
+  })
+})
+
+describe('a let-down', () => {
+  it('starts at the present ground and moves less and less', () => {
+    const coatId = coatIds(perch)[5]!
+    const steps = letDown(perch, coatId, 'upper-flank', 24, true, bench)
+    const below = of(perch, { ...ALL, upTo: coatIds(perch)[4]! }).get('upper-flank')!.promised.lab
+    expect(deltaE2000(steps[0]!.lab, below)).toBeLessThan(1e-6)
+    expect(steps.map(step => step.passes)).toEqual([...Array(25).keys()])
+    expect(steps[24]!.change).toBeLessThan(steps[1]!.change)
+  })
+
+  it('ends at the promise with as many passes as the coat has', () => {
+    const coatId = coatIds(perch)[5]!
+    const laid = of(perch, { ...ALL, upTo: coatId }).get('back')!.promised.lab
+    expect(deltaE2000(letDown(perch, coatId, 'back', 3, true, bench)[3]!.lab, laid)).toBeLessThan(1e-6)
+  })
+
+  it('has nothing to say of a coat that is not there', () => {
+    expect(letDown(perch, coatIds(ember)[0]!, 'back', 3, true, bench)).toEqual([])
+  })
+})
+
+describe('what a picture shows, as a text', () => {
+  const size = { width: 320, height: 160 }
+  it('does not change with names and notes', () => {
+    const renamed = structuredClone(perch)
+    for (const item of renamed.body.stack) if (item.act === 'coat') item.coat.note = 'thinner next time'
+    expect(pictureText(renamed, size)).toBe(pictureText(perch, size))
+  })
+
+  it('changes with a pass, and not with a pass of a coat that is not shown', () => {
+    const more = structuredClone(perch)
+    const last = more.body.stack.filter(item => item.act === 'coat').at(-1)
+    if (last?.act !== 'coat') throw new Error('the perch has coats')
+    last.coat.passes++
+    expect(pictureText(more, size)).not.toBe(pictureText(perch, size))
+    const upTo = coatIds(perch)[3]!
+    expect(pictureText(more, { ...size, upTo })).toBe(pictureText(perch, { ...size, upTo }))
+  })
+
+  it('changes with size, light and surround', () => {
+    const texts = [size, { ...size, width: 640 }, { ...size, light: 'face' as const }, { ...size, surround: null }].map(wish => pictureText(perch, wish))
+    expect(new Set(texts).size).toBe(4)
+  })
+})
