@@ -1,6 +1,11 @@
 import { builtInBlank } from '#shared/blank/built-in-blanks'
 import type { Mark, Place } from '#shared/scheme/mark'
 
+/** Widths are written for a body of 100 mm and follow its length. */
+export function atLength(blank: string, mm: number): number {
+  return mm * builtInBlank(blank).length / 100
+}
+
 /** Places along the back edge of a blank's gill cover, shifted along the body. */
 function gillEdge(blank: string, shift = 0): Place[] {
   const { gill } = builtInBlank(blank)
@@ -14,14 +19,14 @@ function gillEdge(blank: string, shift = 0): Place[] {
 /** Shade along the edge of the gill cover, and a fainter second line on the cover. */
 export function gillShade(blank: string): Mark {
   return { kind: 'strokes', with: 'airbrush', strokes: [
-    { points: gillEdge(blank), width: [0.6, 1], amount: [1, 0.4] },
-    { points: gillEdge(blank, -0.05).slice(2, 10), width: [0.6, 0.6], amount: [0.5, 0.4] },
+    { points: gillEdge(blank), width: [atLength(blank, 0.6), atLength(blank, 1)], amount: [1, 0.4] },
+    { points: gillEdge(blank, -0.05).slice(2, 10), width: [atLength(blank, 0.6), atLength(blank, 0.6)], amount: [0.5, 0.4] },
   ] }
 }
 
 /** A line just behind the gill cover. */
 export function gillLine(blank: string, width: number, amount = 1): Mark {
-  return { kind: 'strokes', with: 'airbrush', strokes: [{ points: gillEdge(blank), width: [width, width * 0.7], amount: [amount, amount * 0.5] }] }
+  return { kind: 'strokes', with: 'airbrush', strokes: [{ points: gillEdge(blank), width: [atLength(blank, width), atLength(blank, width * 0.7)], amount: [amount, amount * 0.5] }] }
 }
 
 /** A pectoral fin in dagger strokes from one root behind the gill cover. */
@@ -34,9 +39,9 @@ export function pectoralRays(blank: string, v = 0.62): Mark {
   return { kind: 'fan', root: [builtInBlank(blank).gill.along + 0.03, v], count: 7, length: [10, 12], angle: [8, 52], width: [0.13, 0.13], amount: [0.8, 0.25] }
 }
 
-/** A straight dagger stroke from one place to another. */
-export function dagger(from: Place, to: Place, width: number, amount = 1.1) {
-  return { points: [from, to], width: [width, 0.25] as [number, number], amount: [amount, 0.5] as [number, number] }
+/** A straight dagger stroke on a blank from one place to another. */
+export function dagger(blank: string, from: Place, to: Place, width: number, amount = 1.1) {
+  return { points: [from, to], width: [atLength(blank, width), atLength(blank, 0.25)] as [number, number], amount: [amount, 0.5] as [number, number] }
 }
 
 /** Short ticks along the lateral line. */

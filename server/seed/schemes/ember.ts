@@ -1,10 +1,10 @@
-import { dagger, gillLine } from '../marks'
+import { atLength, dagger, gillLine } from '../marks'
 import { BRUSH, coat, EPOXY, FINE, mesh, THROUGH_MESH, under, type DemoScheme } from '../write-scheme'
 
 const DAGGERS = [
-  dagger([0.36, 0.05], [0.36, 0.60], 1.25, 1.1), dagger([0.45, 0.06], [0.452, 0.59], 1.2, 1.1), dagger([0.54, 0.06], [0.543, 0.58], 1.1, 1.1),
-  dagger([0.63, 0.07], [0.634, 0.56], 1.0, 1.05), dagger([0.72, 0.08], [0.724, 0.55], 0.9, 1.05), dagger([0.80, 0.09], [0.804, 0.53], 0.8, 1),
-  dagger([0.87, 0.1], [0.873, 0.51], 0.7, 1),
+  dagger('deep-crank-62', [0.36, 0.05], [0.36, 0.60], 1.25, 1.1), dagger('deep-crank-62', [0.45, 0.06], [0.452, 0.59], 1.2, 1.1), dagger('deep-crank-62', [0.54, 0.06], [0.543, 0.58], 1.1, 1.1),
+  dagger('deep-crank-62', [0.63, 0.07], [0.634, 0.56], 1.0, 1.05), dagger('deep-crank-62', [0.72, 0.08], [0.724, 0.55], 0.9, 1.05), dagger('deep-crank-62', [0.80, 0.09], [0.804, 0.53], 0.8, 1),
+  dagger('deep-crank-62', [0.87, 0.1], [0.873, 0.51], 0.7, 1),
 ]
 
 export const EMBER: DemoScheme = {
@@ -28,7 +28,7 @@ export const EMBER: DemoScheme = {
     coat('Black daggers', 'Opaque black', 1.5, { gun: [70, 2], tool: FINE, marks: [{ kind: 'strokes', with: 'airbrush', strokes: DAGGERS }] }),
     coat('Gill slash, cerise', 'Fluorescent cerise', 2.4, { gun: [90, 2], tool: FINE, marks: [gillLine('deep-crank-62', 1.4)] }),
     coat('Gill edge, black line', 'Opaque black', 1, { gun: [85, 2], tool: FINE, marks: [gillLine('deep-crank-62', 0.45)] }),
-    coat('Shoulder dot', 'Opaque black', 3, { gun: [90, 2], tool: BRUSH, marks: [{ kind: 'dots', dots: [[0.362, 0.4, 2.3]], soft: 0.08, grow: 0 }] }),
+    coat('Shoulder dot', 'Opaque black', 3, { gun: [90, 2], tool: BRUSH, marks: [{ kind: 'dots', dots: [[0.362, 0.4, atLength('deep-crank-62', 2.3)]], soft: 0.08, grow: 0 }] }),
     EPOXY,
   ],
 }

@@ -27,7 +27,7 @@ export const PERCH: DemoScheme = {
       }),
     ]),
     coat('Candy yellow, lower flank', 'Candy yellow', 0.8, { gun: [100, 0.55], where: { zones: ['trunk'], fade: 5 } }),
-    coat('Olive back', 'Olive green', 2.4, { gun: [22, 0.75], where: { zones: ['back', 'upper flank'], reach: -1, fade: 9, fins: [{ fin: 'dorsal', root: 0.9, tip: 0.7, on: 'whole' }] } }),
+    coat('Olive back', 'Olive green', 2.4, { gun: [22, 0.75], where: { zones: ['back', 'upper flank'], reach: -1, fade: 9, fins: [{ fin: 'dorsal', root: 0.9, tip: 0.7, on: 'whole' }, { fin: 'tail', root: 0.9, tip: 0.25, on: 'whole' }] } }),
     coat('Dark ridge', DARK_OLIVE, 2.6, { gun: [12, 0.7], where: { zones: ['back'], reach: 1.5, fade: 5 } }),
     ...under('Bars', 4102, { kind: 'stencil', does: 'opens', soft: 0.55, wobble: 0.5, outlines: BARS.map(numbers => bar(...numbers)) }, [
       coat('Bars', DARK_OLIVE, 2.1, { gun: [60, 1.4], tool: THROUGH_MESH, note: 'Stop when the foot of the bar goes smoky, not black.' }),
@@ -41,11 +41,11 @@ export const PERCH: DemoScheme = {
     coat('White belly', 'Cream', 2.2, { gun: [170, 0.75], where: { zones: ['belly'], reach: 1.5, fade: 5 } }),
     coat('Gill cover shade', 'Brown glaze', 1, { gun: [75, 1.2], tool: FINE, marks: [gillShade('shad-80')] }),
     coat('Head smoke', DARK_OLIVE, 2.4, { gun: [30, 0.85], where: { zones: ['head', 'back', 'upper flank'], fade: 6 } }),
-    coat('Orange fins', 'Fin orange', 1.6, { where: { body: false, fins: [{ fin: 'tail', root: 0.5, tip: 1, on: 'whole' }, { fin: 'anal', root: 0.8, tip: 1, on: 'whole' }] } }),
+    coat('Orange fins', 'Fin orange', 1.6, { where: { body: false, fins: [{ fin: 'tail', root: 0.25, tip: 0.8, on: 'whole' }, { fin: 'anal', root: 0.8, tip: 1, on: 'whole' }] } }),
     coat('Red on the fin tips', 'Candy red', 1, { where: { body: false, fins: [{ fin: 'tail', root: 0, tip: 1, on: 'whole' }, { fin: 'anal', root: 0, tip: 0.8, on: 'whole' }] } }),
     coat('Pectoral fin, daggers', 'Fin orange', 1.7, { gun: [90, 2], tool: FINE, marks: [pectoral('shad-80')] }),
     coat('Pectoral rays', 'Brown glaze', 1.4, { gun: [90, 2], tool: FINE, marks: [pectoralRays('shad-80')] }),
-    coat('Ray shade', 'Opaque black', 1.1, { where: { body: false, fins: [{ fin: 'dorsal', root: 0.2, tip: 0.5, on: 'rays' }, { fin: 'dorsal', root: 0, tip: 0.7, on: 'spots' }] }, tool: FINE }),
+    coat('Ray shade', 'Opaque black', 1.1, { where: { body: false, fins: [{ fin: 'dorsal', root: 0.2, tip: 0.5, on: 'rays' }, { fin: 'tail', root: 0.3, tip: 0.2, on: 'rays' }] }, tool: FINE }),
     EPOXY,
   ],
 }

@@ -26,8 +26,8 @@ export const ROACH: DemoScheme = {
     coat('White belly', 'Opaque white', 2, { gun: [172, 0.75], where: { zones: ['belly'], reach: 2, fade: 10 } }),
     coat('Gill shade and lateral line', 'Smoke', 1, { gun: [75, 1.3], tool: FINE, marks: [gillLine('glide-160', 1), lateralLine(0.25, 0.95, 62)] }),
     coat('Head, blue-green smoke', 'Blue-green', 1.5, { gun: [20, 0.75], where: { zones: ['head', 'back', 'upper flank'], reach: -1, fade: 9 } }),
-    coat('Red fins', 'Fin orange', 1.3, { where: { body: false, fins: RED_FINS.map(fin => ({ fin, root: 0.6, tip: 1, on: 'whole' })) } }),
-    coat('Candy red on the tips', 'Candy red', 1.5, { where: { body: false, fins: RED_FINS.map(fin => ({ fin, root: 0.1, tip: 1, on: 'whole' })) } }),
+    coat('Red fins', 'Fin orange', 1.3, { where: { body: false, fins: RED_FINS.map(fin => ({ fin, root: 0.45, tip: 0.9, on: 'whole' })) } }),
+    coat('Candy red on the tips', 'Candy red', 1.5, { where: { body: false, fins: ['tail', 'anal', 'pelvic'].map(fin => ({ fin, root: 0.1, tip: 0.7, on: 'whole' })) } }),
     coat('Pectoral fin', 'Fin orange', 1.4, { gun: [90, 2], tool: FINE, marks: [pectoral('glide-160', 0.64)] }),
     coat('Pectoral rays', 'Candy red', 1.6, { gun: [90, 2], tool: FINE, marks: [pectoralRays('glide-160', 0.64)] }),
     coat('Fin rays and smoke edge', 'Smoke', 1, {
