@@ -20,6 +20,10 @@ export interface OpenDraft {
   conflict: ShallowRef<DraftConflict | null>
   /** The body the server had last: what unsaved work was made from. */
   base: SchemeBody
+  /** Bodies sent since then without an answer: any of them may have arrived. */
+  sent: readonly SchemeBody[]
+  /** What a save was last refused with. */
+  failed: unknown
   /** Saves it; null on the server and until the page has come alive. */
   keeper: DraftKeeper | null
 }
@@ -32,6 +36,8 @@ export function openDraft(scheme: SchemeView): OpenDraft {
     saveState: shallowRef<SaveState>({ is: 'saved', at: scheme.savedAt }),
     conflict: shallowRef<DraftConflict | null>(null),
     base: scheme.draft,
+    sent: [],
+    failed: null,
     keeper: null,
   }
 }

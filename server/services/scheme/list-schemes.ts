@@ -33,7 +33,7 @@ const head = and(eq(revisions.schemeId, schemes.id), eq(revisions.number, scheme
 export async function listSchemes(ctx: Ctx, query: SchemeQuery, after: SchemesAfter | null): Promise<SchemeRowView[]> {
   assertMay(ctx, 'scheme:look')
   if (query.paintId) assertMay(ctx, 'scheme:read')
-  return inTransaction(ctx, tx => may(tx.role, 'scheme:read') ? recipes(tx, query, after) : looks(tx, query, after))
+  return inTransaction<Ctx, SchemeRowView[]>(ctx, tx => may(tx.role, 'scheme:read') ? recipes(tx, query, after) : looks(tx, query, after))
 }
 
 async function recipes(tx: Ctx, query: SchemeQuery, after: SchemesAfter | null): Promise<SchemeListItem[]> {

@@ -12,7 +12,7 @@ import type { SchemeView } from '#shared/scheme/scheme-view'
 import type { PaintKnown } from '#shared/shelf/paint'
 
 const OPTICS: StoredOptics = {
-  engineVersion: '1', bands: 36, kind: 'film', K: Array<number>(36).fill(0.01), S: Array<number>(36).fill(0.4), how: 'hiding paint', clipped: false,
+  engineVersion: '1', bands: 36, kind: 'film', K: Array<number>(36).fill(0.01), S: Array<number>(36).fill(0.4), how: 'masstone-hide', clipped: false,
 }
 const WHITE: PaintKnown = { how: 'masstone-hide', masstone: [95, -1, 2], passesToHide: 6 }
 

@@ -16,7 +16,7 @@ export function id(kind: 'coat' | 'mask' | 'paint' | 'blank', n: number): string
 export function paint(n: number, more: Partial<PaintSnapshot> = {}): PaintSnapshot {
   return {
     id: id('paint', n), name: `Paint ${n}`, kind: 'opaque', base: 'water', reducerPer100: 25, filmPerPass: 4, volumeSolids: 25, density: 1.1, hazards: [], opticsId: id('paint', n),
-    optics: { engineVersion: '1', bands: 36, kind: 'film', K: Array<number>(36).fill(0.1), S: Array<number>(36).fill(0.1), how: 'test', clipped: false },
+    optics: { engineVersion: '1', bands: 36, kind: 'film', K: Array<number>(36).fill(0.1), S: Array<number>(36).fill(0.1), how: 'masstone-hide', clipped: false },
     ...more,
   }
 }

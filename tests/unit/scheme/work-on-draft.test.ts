@@ -1,0 +1,280 @@
+import { beforeEach, describe, expect, it } from 'vitest'
+import type { KeptDraft } from '~/composables/scheme/kept-draft'
+import { workOnDraft } from '~/composables/scheme/work-on-draft'
+import { openDraft } from '~/stores/scheme-draft'
+import { builtInBlank } from '#shared/blank/built-in-blanks'
+import { Problem } from '#shared/errors/problem'
+import type { SchemeBody } from '#shared/scheme/body'
+import type { RevisionView, SchemeView } from '#shared/scheme/scheme-view'
+import { body, coat, id, paint, rows } from './bodies'
+
+const SCHEME = id('blank', 77)
+const materials = (blankId: string) => ({ paints: [paint(1)], blank: { id: blankId, shape: builtInBlank('minnow-90') } })
+
+/** The server's one scheme, and a line to it that can break. */
+class Server {
+  version = 1
+  draft: SchemeBody = body(1)
+  online = true
+  losesAnswers = false
+  published: { note: string, draft: SchemeBody }[] = []
+
+  view(): SchemeView {
+    return {
+      id: SCHEME, name: 'Perch', fish: '', version: this.version, draft: structuredClone(this.draft), materials: materials(this.draft.blankId), headNumber: 0,
+      savedAt: `v${this.version}`, savedBy: null, retired: false, origin: null, revisions: [],
+    }
+  }
+
+  private reach() {
+    if (!this.online) throw new TypeError('Failed to fetch')
+  }
+
+  async save(draft: SchemeBody, version: number) {
+    this.reach()
+    if (version !== this.version) throw new Problem({ code: 'scheme/changed-meanwhile', version: this.version })
+    this.version++
+    this.draft = structuredClone(draft)
+    if (this.losesAnswers) throw new TypeError('Failed to fetch')
+    return { version: this.version, savedAt: `v${this.version}` }
+  }
+
+  async publish(note: string, version: number): Promise<RevisionView> {
+    this.reach()
+    if (version !== this.version) throw new Problem({ code: 'scheme/changed-meanwhile', version: this.version })
+    this.published.push({ note, draft: this.draft })
+    return { id: SCHEME, number: 1, note, coats: 1, publishedAt: '', publishedBy: null, schemeId: SCHEME, schemeName: '', body: this.draft, materials: materials(this.draft.blankId), engineVersion: '1' }
+  }
+
+  async read() {
+    this.reach()
+    return this.view()
+  }
+}
+
+/** One painter with a page and a device. Time passes only when `wait` is called. */
+function painter(server: Server, device: { kept: KeptDraft | null } = { kept: null }, mayChange = true) {
+  const scheme = server.view()
+  const draft = openDraft(scheme)
+  let timers: (() => void)[] = []
+  let clock = 0
+  const work = workOnDraft(scheme, draft, {
+    readScheme: () => server.read(),
+    readRevision: async () => ({ ...await server.publish('', server.version), body: body(7) }),
+    readMaterials: async blankId => materials(blankId),
+    save: (unsaved, version) => server.save(unsaved, version),
+    publish: (note, version) => server.publish(note, version),
+    now: () => clock += 10_000,
+  }, mayChange)
+  work.start({
+    shelf: {
+      read: () => structuredClone(device.kept),
+      write: (_, kept) => {
+        device.kept = structuredClone(kept)
+      },
+      remove: () => {
+        device.kept = null
+      },
+    },
+    later: (_, run) => {
+      timers.push(run)
+      return () => {
+        timers = timers.filter(each => each !== run)
+      }
+    },
+  })
+  return {
+    ...work,
+    device,
+    lay: (n: number) => work.do({ do: 'add-coat', coat: coat(n), row: work.body.value.stack.length }),
+    async wait() {
+      for (const run of timers.splice(0)) run()
+      for (let i = 0; i < 5; i++) await new Promise(resolve => setImmediate(resolve))
+    },
+  }
+}
+
+let server: Server
+beforeEach(() => {
+  server = new Server()
+})
+
+describe('one painter', () => {
+  it('sees an edit at once, and it is saved by itself', async () => {
+    const ann = painter(server)
+    expect(ann.lay(2)).toBeNull()
+    expect(rows(ann.body.value)).toEqual([1, 2])
+    await ann.wait()
+    expect(rows(server.draft)).toEqual([1, 2])
+    expect(ann.saveState.value).toEqual({ is: 'saved', at: 'v2' })
+  })
+
+  it('is told why an edit cannot be done, and nothing is saved for it', async () => {
+    const ann = painter(server)
+    expect(ann.do({ do: 'carry-coat', coatId: id('coat', 1), way: 'down' })).toBe('It lies on the ground already: nothing is below it.')
+    await ann.wait()
+    expect(server.version).toBe(1)
+  })
+
+  it('undoes and redoes, in words, and both are saved', async () => {
+    const ann = painter(server)
+    ann.lay(2)
+    expect([ann.undoWords.value, ann.canRedo.value]).toEqual(['Lay a coat', false])
+    ann.undo()
+    await ann.wait()
+    expect(rows(server.draft)).toEqual([1])
+    ann.redo()
+    await ann.wait()
+    expect(rows(server.draft)).toEqual([1, 2])
+  })
+
+  it('publishes what is on the page, saved or not', async () => {
+    const ann = painter(server)
+    ann.lay(2)
+    await ann.publish('done')
+    expect(server.published.map(each => [each.note, rows(each.draft)])).toEqual([['done', [1, 2]]])
+  })
+
+  it('cannot publish an older draft than the page shows when the line is down', async () => {
+    const ann = painter(server)
+    ann.lay(2)
+    server.online = false
+    await expect(ann.publish('done')).rejects.toThrow('Failed to fetch')
+    server.online = true
+    expect(server.published).toEqual([])
+  })
+
+  it('gets an older revision back, one undo away from the present', async () => {
+    const ann = painter(server)
+    await ann.restore(1)
+    expect(rows(server.draft)).toEqual([7])
+    ann.undo()
+    await ann.wait()
+    expect(rows(server.draft)).toEqual([1])
+  })
+
+  it('who may only read changes nothing', async () => {
+    const bench = painter(server, undefined, false)
+    expect(bench.lay(2)).toMatch(/^Your role/)
+    expect(rows(bench.body.value)).toEqual([1])
+    await expect(bench.restore(1)).rejects.toMatchObject({ data: { code: 'auth/not-allowed' } })
+  })
+
+  it('draws another blank with that blank\'s materials', async () => {
+    const ann = painter(server)
+    ann.do({ do: 'choose-blank', blankId: id('blank', 2) })
+    await ann.refreshMaterials()
+    expect(ann.materials.value.blank.id).toBe(id('blank', 2))
+  })
+})
+
+describe('after a sudden end', () => {
+  it('the work goes on where it was, and is saved', async () => {
+    const before = painter(server)
+    server.online = false
+    before.lay(2)
+    await before.wait()
+    server.online = true
+    const after = painter(server, before.device)
+    expect(rows(after.body.value)).toEqual([1, 2])
+    expect(after.undoWords.value).toBe('Take up unsaved work')
+    await after.wait()
+    expect(rows(server.draft)).toEqual([1, 2])
+    expect(after.device.kept).toBeNull()
+  })
+
+  it('work made from an older version waits for a choice, and neither is lost', async () => {
+    const before = painter(server)
+    server.online = false
+    before.lay(2)
+    await before.wait()
+    server.online = true
+    await server.save(body(1, 3), 1)
+    const after = painter(server, before.device)
+    expect(rows(after.body.value)).toEqual([1, 3])
+    expect(rows(after.conflict.value!.mine)).toEqual([1, 2])
+    await after.wait()
+    expect(rows(server.draft)).toEqual([1, 3])
+    after.settle('mine')
+    await after.wait()
+    expect(rows(server.draft)).toEqual([1, 2])
+  })
+})
+
+describe('two painters on one draft', () => {
+  async function bothSaved() {
+    const ann = painter(server)
+    const ben = painter(server)
+    ann.lay(2)
+    ben.lay(3)
+    await ann.wait()
+    await ben.wait()
+    return { ann, ben }
+  }
+
+  it('the second sees both versions and overwrites nothing', async () => {
+    const { ben } = await bothSaved()
+    expect(rows(server.draft)).toEqual([1, 2])
+    expect([ben.conflict.value!.mine, ben.conflict.value!.theirs.draft].map(rows)).toEqual([[1, 3], [1, 2]])
+    expect(ben.lay(4)).toMatch(/^Somebody else saved/)
+    expect(ben.device.kept?.body && rows(ben.device.kept.body)).toEqual([1, 3])
+  })
+
+  it('may keep theirs, and have the own one back by undo', async () => {
+    const { ben } = await bothSaved()
+    ben.settle('theirs')
+    await ben.wait()
+    expect([rows(ben.body.value), rows(server.draft), server.version]).toEqual([[1, 2], [1, 2], 2])
+    ben.undo()
+    await ben.wait()
+    expect(rows(server.draft)).toEqual([1, 3])
+  })
+
+  it('may keep the own one, and have theirs back by undo', async () => {
+    const { ben } = await bothSaved()
+    ben.settle('mine')
+    await ben.wait()
+    expect(rows(server.draft)).toEqual([1, 3])
+    ben.undo()
+    await ben.wait()
+    expect(rows(server.draft)).toEqual([1, 2])
+  })
+
+  it('are not asked when both did the same, or when only the name was changed', async () => {
+    const ann = painter(server)
+    server.version = 2
+    ann.lay(2)
+    await ann.wait()
+    expect(ann.conflict.value).toBeNull()
+    await ann.wait()
+    expect([rows(server.draft), server.version]).toEqual([[1, 2], 3])
+  })
+
+  it('are not asked about one\'s own save whose answer got lost', async () => {
+    const ann = painter(server)
+    ann.lay(2)
+    server.losesAnswers = true
+    await ann.wait()
+    expect(ann.saveState.value.is).toBe('on this device')
+    server.losesAnswers = false
+    ann.lay(3)
+    for (let i = 0; i < 3; i++) await ann.wait()
+    expect(ann.conflict.value).toBeNull()
+    expect(rows(server.draft)).toEqual([1, 2, 3])
+  })
+
+  it('a conflict met while the line breaks is read when it is back', async () => {
+    const { ann } = { ann: painter(server) }
+    await server.save(body(1, 9), 1)
+    const read = server.read.bind(server)
+    server.read = async () => {
+      throw new TypeError('Failed to fetch')
+    }
+    ann.lay(2)
+    await ann.wait()
+    expect([ann.saveState.value.is, ann.conflict.value]).toEqual(['conflict', null])
+    server.read = read
+    await ann.saveNow()
+    expect(rows(ann.conflict.value!.theirs.draft)).toEqual([1, 9])
+  })
+})
