@@ -7,8 +7,8 @@ import { hashShare } from './noise'
 /** How many maps of marks are kept for a view; masks are few and all kept. */
 const MARK_MAPS_MAX = 40
 
-/** Noise on the surface, in a few independent fields that every coat mixes in its own way. */
-export interface SurfaceNoise { hand: Float32Array[], edge: Float32Array[], droplets: Float32Array[] }
+/** Noise on the surface: of each kind three independent values a sample, side by side, that every coat mixes in its own way. */
+export interface SurfaceNoise { hand: Float32Array, edge: Float32Array, droplets: Float32Array }
 
 /** Stray drops of a view: which samples a drop touches, how much it lays there, and the draw that decides whether it fell. */
 export interface Specks { sample: Uint32Array, weight: Float32Array, draw: Float32Array }

@@ -6,8 +6,8 @@ import type { DepositKeep } from './keep'
 import { layMarks } from './mark-map'
 import { maskMap } from './mask-map'
 import { seedOf, SWING } from './noise'
-import { fieldMix, strayDrops, surfaceNoise } from './surface-noise'
-import { edgeFade, layZoneShare } from './zone-share'
+import { fieldMix, mixed, strayDrops, surfaceNoise } from './surface-noise'
+import { edgeFade, hasEdge, layZoneShare } from './zone-share'
 
 /** How far a hand strays from an even coat, from a straight edge, and from an even one when it goes all over. */
 const HAND = { uneven: 0.07, edge: 0.16, allOver: 0.05, allOverMean: 0.97 }
@@ -27,10 +27,7 @@ export function layCoat(keep: DepositKeep, { coat, masks }: Pick<LaidCoat, 'coat
   out.fill(0)
   if (coat.where.body) {
     layOnBody(keep, coat, masks.some(mask => mask.form.kind !== 'mesh'))
-    for (const mask of masks) {
-      const map = maskMap(keep, mask)
-      for (const i of keep.onBody) out[i] = (out[i] ?? 0) * (map[i] ?? 1)
-    }
+    for (const mask of masks) multiply(out, maskMap(keep, mask), keep.onBody)
   }
   if (coat.where.fins.length > 0) layOnFins(keep, coat)
   if (coat.tool.kind === 'airbrush') {
@@ -47,25 +44,37 @@ function layOnBody(keep: DepositKeep, coat: Coat, isThroughStencil: boolean): vo
   const aim = isSprayed ? aimOf(coat.gun, fattestRadius(keep)) : null
   const isFreehand = coat.marks.length > 0
   const mist = !isSprayed || isFreehand ? 0 : isThroughStencil ? MIST.throughStencil : MIST.share
-  const noise = surfaceNoise(keep)
-  const [h0, h1, h2] = fieldMix(coat.id, 1)
-  const [hand0, hand1, hand2] = noise.hand
+  const { hand } = surfaceNoise(keep)
+  const mix = fieldMix(coat.id, 1)
   layZoneShare(keep, coat.where, 1, edgeWander(keep, coat, wideZone), zone)
   if (mist > 0) layZoneShare(keep, coat.where, MIST.wider, null, wideZone)
-  for (const i of onBody) {
-    const hand = SWING * (h0 * (hand0?.[i] ?? 0) + h1 * (hand1?.[i] ?? 0) + h2 * (hand2?.[i] ?? 0))
+  for (let k = 0; k < onBody.length; k++) {
+    const i = onBody[k] ?? 0
+    const inZone = zone[i] ?? 0
+    const drift = mist > 0 ? mist * (MIST.everywhere + (1 - MIST.everywhere) * (wideZone[i] ?? 0)) : 0
+    if (inZone <= 0 && drift <= 0) continue
     const ny = bodyNormal[3 * i + 1] ?? 0
     const nz = bodyNormal[3 * i + 2] ?? 0
-    const hit = aim
-      ? caught(aim, ny, nz, section[2 * i] ?? 0, section[2 * i + 1] ?? 0) * (1 + HAND.uneven * hand)
-      : HAND.allOverMean + HAND.allOver * hand
-    let x = hit * (zone[i] ?? 0)
-    if (mist > 0) x += mist * wrap(aim, ny, nz) * (MIST.everywhere + (1 - MIST.everywhere) * (wideZone[i] ?? 0))
-    deposit[i] = x > 0 ? x : 0
+    let x = 0
+    if (inZone > 0) {
+      const uneven = SWING * mixed(hand, i, mix)
+      x = inZone * (aim
+        ? caught(aim, ny, nz, section[2 * i] ?? 0, section[2 * i + 1] ?? 0) * (1 + HAND.uneven * uneven)
+        : HAND.allOverMean + HAND.allOver * uneven)
+    }
+    if (drift > 0) x += drift * wrap(aim, ny, nz)
+    deposit[i] = x
   }
   if (isFreehand) {
     layMarks(keep, coat.marks, seedOf(coat.id, 3), zone)
-    for (const i of onBody) deposit[i] = (deposit[i] ?? 0) * (zone[i] ?? 0)
+    multiply(deposit, zone, onBody)
+  }
+}
+
+function multiply(into: Float32Array, by: Float32Array, where: Uint32Array): void {
+  for (let k = 0; k < where.length; k++) {
+    const i = where[k] ?? 0
+    into[i] = (into[i] ?? 0) * (by[i] ?? 0)
   }
 }
 
@@ -80,35 +89,36 @@ function fattestRadius(keep: DepositKeep): number {
   return keep.blank.table.halfGirthByU.reduce((a, b) => Math.max(a, b), 0) / Math.PI
 }
 
-/** How far a hand moves the edge of this coat at each sample, mm. Uses `room`. */
-function edgeWander(keep: DepositKeep, coat: Coat, room: Float32Array): Float32Array {
-  const [e0, e1, e2] = fieldMix(coat.id, 2)
-  const [edge0, edge1, edge2] = surfaceNoise(keep).edge
+/** How far a hand moves the edge of this coat at each sample, mm, in `room`; null when the coat has no edge. */
+function edgeWander(keep: DepositKeep, coat: Coat, room: Float32Array): Float32Array | null {
+  if (!hasEdge(coat.where.zones)) return null
+  const mix = fieldMix(coat.id, 2)
+  const { edge } = surfaceNoise(keep)
   const size = HAND.edge * SWING * edgeFade(coat.where, keep.blank.shape.length)
-  for (const i of keep.onBody) room[i] = size * (e0 * (edge0?.[i] ?? 0) + e1 * (edge1?.[i] ?? 0) + e2 * (edge2?.[i] ?? 0))
+  for (let k = 0; k < keep.onBody.length; k++) {
+    const i = keep.onBody[k] ?? 0
+    room[i] = size * mixed(edge, i, mix)
+  }
   return room
 }
 
 function layOnFins(keep: DepositKeep, coat: Coat): void {
   const { deposit, onFins } = keep
   layFinShare(keep, coat.where.fins, deposit)
-  const [h0, h1, h2] = fieldMix(coat.id, 1)
-  const [hand0, hand1, hand2] = surfaceNoise(keep).hand
-  for (const i of onFins) {
-    const hand = SWING * (h0 * (hand0?.[i] ?? 0) + h1 * (hand1?.[i] ?? 0) + h2 * (hand2?.[i] ?? 0))
-    deposit[i] = (deposit[i] ?? 0) * (1 + HAND.uneven * hand)
-  }
+  const mix = fieldMix(coat.id, 1)
+  const { hand } = surfaceNoise(keep)
+  for (const i of onFins) deposit[i] = (deposit[i] ?? 0) * (1 + HAND.uneven * SWING * mixed(hand, i, mix))
 }
 
 function layDroplets(keep: DepositKeep, coat: Coat): void {
   const { deposit } = keep
-  const [d0, d1, d2] = fieldMix(coat.id, 4)
-  const [drop0, drop1, drop2] = surfaceNoise(keep).droplets
+  const mix = fieldMix(coat.id, 4)
+  const { droplets } = surfaceNoise(keep)
   for (let i = 0; i < deposit.length; i++) {
     const x = deposit[i] ?? 0
     if (x <= 0) continue
-    const n = d0 * (drop0?.[i] ?? 0) + d1 * (drop1?.[i] ?? 0) + d2 * (drop2?.[i] ?? 0)
-    deposit[i] = Math.max(0, x + DROPLETS * Math.sqrt(x) * n)
+    const drops = x + DROPLETS * Math.sqrt(x) * mixed(droplets, i, mix)
+    deposit[i] = drops > 0 ? drops : 0
   }
 }
 

@@ -55,14 +55,44 @@ export function noise2(x: number, y: number, seed: number): number {
   return ((top + (c + (d - c) * sx - top) * sy) * TO_SWING - 1) * UNIT_2D
 }
 
-/** Smooth noise in space, mean 0, variance 1: goes round a body without a seam. */
-export function noise3(x: number, y: number, z: number, seed: number): number {
+const TEN_BITS = 1023
+const TEN_TO_SWING = 2 / TEN_BITS
+
+/**
+ * Adds `weight` times three independent noises at once to `out`: one draw a corner of the lattice serves all three. Mean 0, and
+ * variance 1 before the weight, in the plane.
+ */
+export function addThreeNoises(x: number, y: number, seed: number, weight: number, out: Float64Array): void {
+  const ix = Math.floor(x)
+  const iy = Math.floor(y)
+  const fx = x - ix
+  const fy = y - iy
+  const sx = fx * fx * fx * (fx * (fx * 6 - 15) + 10)
+  const sy = fy * fy * fy * (fy * (fy * 6 - 15) + 10)
+  const a = hash2(ix, iy, seed)
+  const b = hash2(ix + 1, iy, seed)
+  const c = hash2(ix, iy + 1, seed)
+  const d = hash2(ix + 1, iy + 1, seed)
+  const wd = sx * sy
+  const wb = sx - wd
+  const wc = sy - wd
+  const wa = 1 - sx - wc
+  const gain = weight * UNIT_2D
+  for (let k = 0; k < 3; k++) {
+    const at = 10 * k
+    const mixed = wa * (a >>> at & TEN_BITS) + wb * (b >>> at & TEN_BITS) + wc * (c >>> at & TEN_BITS) + wd * (d >>> at & TEN_BITS)
+    out[k] = (out[k] ?? 0) + gain * (mixed * TEN_TO_SWING - 1)
+  }
+}
+
+/** The same in space: three noises that go round a body without a seam. */
+export function addThreeSpaceNoises(x: number, y: number, z: number, seed: number, weight: number, out: Float64Array): void {
   const iz = Math.floor(z)
   const fz = z - iz
   const sz = fz * fz * fz * (fz * (fz * 6 - 15) + 10)
-  const near = noise2(x, y, hash2(iz, 0x51ed27, seed))
-  const far = noise2(x, y, hash2(iz + 1, 0x51ed27, seed))
-  return (near + (far - near) * sz) * (UNIT_3D / UNIT_2D)
+  const gain = weight * UNIT_3D / UNIT_2D
+  addThreeNoises(x, y, hash2(iz, 0x51ed27, seed), gain * (1 - sz), out)
+  addThreeNoises(x, y, hash2(iz + 1, 0x51ed27, seed), gain * sz, out)
 }
 
 // 1/√(4·∫(1-s)²t²dt·∫(1-s)²dt): unit variance of gradient noise with unit gradients and the quintic.

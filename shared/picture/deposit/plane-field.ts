@@ -19,7 +19,8 @@ export function fieldMap(keep: DepositKeep, left: PlaneField, right: PlaneField)
   const out = new Float32Array(keep.samples.count)
   for (const i of keep.onBody) {
     const isLeft = (side[i] ?? 1) > 0
-    const [own, other] = isLeft ? [left, right] : [right, left]
+    const own = isLeft ? left : right
+    const other = isLeft ? right : left
     const at = U[i] ?? 0
     const height = V[i] ?? 0
     let value = own.at(at, height)

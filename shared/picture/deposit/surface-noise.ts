@@ -1,15 +1,23 @@
 import type { DepositKeep, Specks, SurfaceNoise } from './keep'
-import { hash2, hashShare, noise2, noise3, seedOf } from './noise'
+import { addThreeNoises, addThreeSpaceNoises, hash2, hashShare, seedOf } from './noise'
 
 /** Independent fields of each kind of noise. A coat mixes them by a direction of its own, so its noise keeps unit variance. */
 const FIELDS = 3
 /** Sizes of a hand's unevenness and of an edge's wander, shares of the length: along the body and round it. */
 const HAND = { along: 0.13, round: 0.10, fineAlong: 0.045, fineRound: 0.05 }
+/** Bodies are thinner than high: their depth counts more, so that the flanks are unlike. */
+const DEPTH = 1.3
 const EDGE = { along: 0.16, round: 0.20 }
 /** Droplets of two sizes, mm, and the share of the larger. */
 const DROPLET = { small: 0.10, large: 0.27, share: 0.55 }
 /** Cells that may hold one stray drop, mm, and the radius of a drop. */
 const SPECK = { cell: 0.55, radiusFrom: 0.04, radiusTo: 0.11, amountFrom: 0.25, amountTo: 0.375 }
+
+/** What a coat mixes of the three values that lie side by side for sample i. */
+export function mixed(fields: Float32Array, i: number, mix: readonly [number, number, number]): number {
+  const at = FIELDS * i
+  return mix[0] * (fields[at] ?? 0) + mix[1] * (fields[at + 1] ?? 0) + mix[2] * (fields[at + 2] ?? 0)
+}
 
 /** The noise of a view, made at the first call and kept. */
 export function surfaceNoise(keep: DepositKeep): SurfaceNoise {
@@ -30,47 +38,31 @@ export function fieldMix(name: string, use: number): [number, number, number] {
 function makeNoise(keep: DepositKeep): SurfaceNoise {
   const { samples: { count, U, V, section, part, side, view }, blank } = keep
   const L = blank.shape.length
-  const fields = () => Array.from({ length: FIELDS }, () => new Float32Array(count))
-  const noise: SurfaceNoise = { hand: fields(), edge: fields(), droplets: fields() }
+  const noise: SurfaceNoise = {
+    hand: new Float32Array(FIELDS * count), edge: new Float32Array(FIELDS * count), droplets: new Float32Array(FIELDS * count),
+  }
   // Small pixels show every droplet, large ones their mean.
   const seen = Math.min(1, 0.11 * view.scale) / Math.hypot(1, DROPLET.share)
   const handUnit = 1 / Math.hypot(1, 0.5)
-  const layBodyNoise = (i: number) => {
-    // In space rather than on the skin: no seam along the back or belly, and two sides that differ.
-    const x = (U[i] ?? 0) / L
-    const y = (section[2 * i] ?? 0) / L
-    const z = 1.3 * (section[2 * i + 1] ?? 0) / L
-    for (let f = 0; f < FIELDS; f++) layHand(i, f, x, y, z)
+  const three = new Float64Array(FIELDS)
+  const write = (fields: Float32Array, i: number) => {
+    for (let f = 0; f < FIELDS; f++) fields[FIELDS * i + f] = three[f] ?? 0
+    three.fill(0)
   }
-  const layHand = (i: number, f: number, x: number, y: number, z: number) => {
-    const hand = noise.hand[f]
-    const edge = noise.edge[f]
-    if (!hand || !edge) return
-    hand[i] = handUnit * (
-      noise3(x / HAND.along, y / HAND.round, z / HAND.round, 101 + f)
-      + 0.5 * noise3(x / HAND.fineAlong, y / HAND.fineRound, z / HAND.fineRound, 211 + f)
-    )
-    edge[i] = noise3(x / EDGE.along, y / EDGE.round, z / EDGE.round, 307 + f)
-  }
-  const layDroplets = (i: number) => {
+  const layAt = (i: number, x: number, y: number, z: number) => {
+    addThreeSpaceNoises(x / HAND.along, y / HAND.round, z / HAND.round, 101, handUnit, three)
+    addThreeSpaceNoises(x / HAND.fineAlong, y / HAND.fineRound, z / HAND.fineRound, 211, 0.5 * handUnit, three)
+    write(noise.hand, i)
+    addThreeSpaceNoises(x / EDGE.along, y / EDGE.round, z / EDGE.round, 307, 1, three)
+    write(noise.edge, i)
     const seed = hash2(part[i] ?? 0, side[i] ?? 1, 401)
-    for (let f = 0; f < FIELDS; f++) {
-      const droplets = noise.droplets[f]
-      if (!droplets) continue
-      droplets[i] = seen * (
-        noise2((U[i] ?? 0) / DROPLET.small, (V[i] ?? 0) / DROPLET.small, seed + f)
-        + DROPLET.share * noise2((U[i] ?? 0) / DROPLET.large, (V[i] ?? 0) / DROPLET.large, seed + 17 + f)
-      )
-    }
+    addThreeNoises((U[i] ?? 0) / DROPLET.small, (V[i] ?? 0) / DROPLET.small, seed, seen, three)
+    addThreeNoises((U[i] ?? 0) / DROPLET.large, (V[i] ?? 0) / DROPLET.large, seed + 17, DROPLET.share * seen, three)
+    write(noise.droplets, i)
   }
-  for (const i of keep.onBody) {
-    layBodyNoise(i)
-    layDroplets(i)
-  }
-  for (const i of keep.onFins) {
-    for (let f = 0; f < FIELDS; f++) layHand(i, f, (U[i] ?? 0) / L, (V[i] ?? 0) / L, part[i] ?? 0)
-    layDroplets(i)
-  }
+  // In space rather than on the skin: no seam along back or belly, and two sides that differ.
+  for (const i of keep.onBody) layAt(i, (U[i] ?? 0) / L, (section[2 * i] ?? 0) / L, DEPTH * (section[2 * i + 1] ?? 0) / L)
+  for (const i of keep.onFins) layAt(i, (U[i] ?? 0) / L, (V[i] ?? 0) / L, part[i] ?? 0)
   return noise
 }
 

@@ -30,38 +30,54 @@ export function girthRanges(zones: readonly ZoneName[]): [from: number, to: numb
   return ranges
 }
 
+/** False when the chosen zones leave the whole body to a coat. */
+export function hasEdge(zones: readonly ZoneName[]): boolean {
+  return girthRanges(zones).some(([from, to]) => from > -Infinity || to < Infinity) || alongShare(zones) !== null
+}
+
 /**
  * How much of a coat its zones let through at each sample of the body, 0 to 1, into `out`: zones round the girth times zones
  * along the body times the limits along the body. `times` widens the fades; `wander` (mm per sample) moves the edges.
  */
 export function layZoneShare(keep: DepositKeep, where: Where, times: number, wander: Float32Array | null, out: Float32Array): void {
+  const softness = edgeFade(where, keep.blank.shape.length) * times / 2
+  const { onBody } = keep
+  if (hasEdge(where.zones)) {
+    const ranges = Float64Array.from(girthRanges(where.zones).flat())
+    const along = alongShare(where.zones)
+    for (let k = 0; k < onBody.length; k++) {
+      const i = onBody[k] ?? 0
+      const grow = where.reach + (wander ? wander[i] ?? 0 : 0)
+      let share = girthShare(ranges, keep.samples.v[i] ?? 0, keep.girth[i] ?? 0, grow, softness)
+      if (share > 0 && along) share *= along(keep, i, grow, softness)
+      out[i] = share
+    }
+  }
+  else for (let k = 0; k < onBody.length; k++) out[onBody[k] ?? 0] = 1
+  if (where.along) limitAlong(keep, where.along, times, out)
+}
+
+function girthShare(ranges: Float64Array, v: number, girth: number, grow: number, softness: number): number {
+  if (ranges.length === 0) return 1
+  let share = 0
+  for (let r = 0; r < ranges.length; r += 2) {
+    const within = normalShare((((ranges[r + 1] ?? 0) - v) * girth + grow) / softness)
+      - normalShare((((ranges[r] ?? 0) - v) * girth - grow) / softness)
+    if (within > 0) share += within
+  }
+  return share < 1 ? share : 1
+}
+
+function limitAlong(keep: DepositKeep, limits: NonNullable<Where['along']>, times: number, out: Float32Array): void {
   const { length } = keep.blank.shape
-  const softness = edgeFade(where, length) * times / 2
-  const ranges = girthRanges(where.zones)
-  const along = alongShare(where.zones)
-  const limits = where.along
-  const fadeOf = (fade: number) => Math.max(HARD_FADE, fade) * times / 2
-  const [fromSoft, toSoft] = [fadeOf(limits?.fadeFrom ?? 0), fadeOf(limits?.fadeTo ?? 0)]
-  const { u, v } = keep.samples
+  const softness = (fade: number) => Math.max(HARD_FADE, fade) * times / 2
+  const [fromSoft, toSoft] = [softness(limits.fadeFrom), softness(limits.fadeTo)]
   for (const i of keep.onBody) {
-    const grow = where.reach + (wander ? wander[i] ?? 0 : 0)
-    let share = 1
-    if (ranges.length > 0) {
-      share = 0
-      const place = v[i] ?? 0
-      const girth = keep.girth[i] ?? 0
-      for (const [from, to] of ranges) {
-        const within = normalShare(((to - place) * girth + grow) / softness) - normalShare(((from - place) * girth - grow) / softness)
-        if (within > 0) share += within
-      }
-    }
-    if (share > 0 && along) share = Math.min(1, share) * along(keep, i, grow, softness)
-    if (share > 0 && limits) {
-      const at = u[i] ?? 0
-      if (limits.from > 0) share *= normalShare((at - limits.from) * length / fromSoft)
-      if (limits.to < 1) share *= normalShare((limits.to - at) * length / toSoft)
-    }
-    out[i] = Math.min(1, share)
+    const u = keep.samples.u[i] ?? 0
+    // A limit at nose or tail is none.
+    const from = limits.from > 0 ? normalShare((u - limits.from) * length / fromSoft) : 1
+    const to = limits.to < 1 ? normalShare((limits.to - u) * length / toSoft) : 1
+    out[i] = (out[i] ?? 0) * from * to
   }
 }
 

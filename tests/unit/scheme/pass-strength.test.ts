@@ -4,7 +4,7 @@ import { effectivePasses, passStrength } from '#shared/scheme/pass-strength'
 
 const paint = (id: string, reducerPer100: number): PaintSnapshot => ({
   id, reducerPer100, name: id, kind: 'opaque', base: 'water', filmPerPass: 4, volumeSolids: 25, density: 1.05, hazards: [], opticsId: id,
-  optics: { engineVersion: '1', bands: 36, kind: 'film', K: Array<number>(36).fill(0.1), S: Array<number>(36).fill(0.1), how: '', clipped: false },
+  optics: { engineVersion: '1', bands: 36, kind: 'film', K: Array<number>(36).fill(0.1), S: Array<number>(36).fill(0.1), how: 'masstone-hide', clipped: false },
 })
 const materials = { paints: [paint('white', 20), paint('black', 50)] }
 const cup = (reducer: number, ...parts: [string, number][]) => ({ mix: { reducer, parts: parts.map(([paintId, drops]) => ({ paintId, drops })) } })

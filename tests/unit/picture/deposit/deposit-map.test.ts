@@ -90,7 +90,7 @@ describe('deposit of a coat', () => {
   })
 
   it('mist drifts a little beyond a coat; a brush leaves none', () => {
-    const belly = samplesAt(minnow, [[0.5, 0.75]])
+    const belly = samplesAt(minnow, [[0.5, 0.75]], 1e-6)
     const sprayed = coatOf({ gun: { aim: 'from', angle: 22, footprint: 0.75 }, where: { zones: ['back'], fade: 2 } })
     expect(lay(belly, minnow, sprayed)[0]).toBeGreaterThan(0)
     expect(lay(belly, minnow, sprayed)[0]).toBeLessThan(0.02)

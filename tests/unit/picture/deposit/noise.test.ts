@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { fbm, gradientNoise, newSlope, noise2, noise3, seedOf } from '#shared/picture/deposit/noise'
+import { addThreeNoises, addThreeSpaceNoises, fbm, gradientNoise, newSlope, noise2, seedOf } from '#shared/picture/deposit/noise'
 import { mean, spread } from './bench'
 
 const COUNT = 60_000
@@ -7,9 +7,21 @@ const sampled = (at: (x: number, y: number) => number) => Float64Array.from({ le
 
 describe('noise', () => {
   const work = newSlope()
+  const three = new Float64Array(3)
   it.each<[string, (x: number, y: number) => number]>([
     ['in the plane', (x, y) => noise2(x, y, 3)],
-    ['in space', (x, y) => noise3(x, y, 0.37 * x - 0.2 * y, 3)],
+    ...[0, 1, 2].flatMap((k): [string, (x: number, y: number) => number][] => [
+      [`of three in the plane, number ${k}`, (x, y) => {
+        three.fill(0)
+        addThreeNoises(x, y, 3, 1, three)
+        return three[k] ?? 0
+      }],
+      [`of three in space, number ${k}`, (x, y) => {
+        three.fill(0)
+        addThreeSpaceNoises(x, y, 0.37 * x - 0.2 * y, 3, 1, three)
+        return three[k] ?? 0
+      }],
+    ]),
     ['of slopes', (x, y) => {
       gradientNoise(x, y, 3, work)
       return work.value
@@ -29,8 +41,20 @@ describe('noise', () => {
 
   it('runs on without a jump from cell to cell', () => {
     for (const at of [-2, -1, 0, 1, 5]) {
-      expect(Math.abs(noise3(at - 1e-6, at + 1e-6, at - 1e-6, 4) - noise3(at + 1e-6, at - 1e-6, at + 1e-6, 4))).toBeLessThan(1e-3)
+      addThreeSpaceNoises(at - 1e-6, at + 1e-6, at - 1e-6, 4, 1, three.fill(0))
+      addThreeSpaceNoises(at + 1e-6, at - 1e-6, at + 1e-6, 4, -1, three)
+      three.forEach(jump => expect(Math.abs(jump)).toBeLessThan(1e-3))
       expect(Math.abs(noise2(at - 1e-6, 0.4, 4) - noise2(at + 1e-6, 0.4, 4))).toBeLessThan(1e-3)
+    }
+  })
+
+  it('the three are independent', () => {
+    const [a, b, c] = [0, 1, 2].map(k => sampled((x, y) => {
+      addThreeNoises(x, y, 3, 1, three.fill(0))
+      return three[k] ?? 0
+    }))
+    for (const [p, q] of [[a, b], [b, c], [a, c]]) {
+      expect(Math.abs(mean((p ?? []).map((value: number, i: number) => value * (q?.[i] ?? 0))))).toBeLessThan(0.03)
     }
   })
 
