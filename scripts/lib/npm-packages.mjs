@@ -5,7 +5,7 @@ import { ROOT } from './environment.mjs'
 import { runOrHalt } from './processes.mjs'
 import { step } from './say.mjs'
 
-/** @typedef {{ version?: string, integrity?: string, optional?: boolean, devOptional?: boolean, peer?: boolean }} Locked */
+/** @typedef {{ version?: string, integrity?: string, optional?: boolean, devOptional?: boolean, extraneous?: boolean }} Locked */
 
 /**
  * @param {string} path
@@ -16,18 +16,18 @@ function lockedPackages(path) {
 }
 
 /**
- * True when node_modules holds exactly what the lock file asks for, by npm's own record of what it installed. Optional
- * packages are for other machines and may be absent.
+ * True when node_modules holds exactly what the lock file asks for, by npm's own record of what it installed. Packages
+ * that are for other machines, or that nothing asks for any more, may be absent.
  */
 export function areNpmPackagesInstalled(root = ROOT) {
   const record = join(root, 'node_modules/.package-lock.json')
   if (!existsSync(record) || !existsSync(join(root, '.nuxt/tsconfig.app.json'))) return false
   const installed = lockedPackages(record)
   const asked = lockedPackages(join(root, 'package-lock.json'))
-  const isSame = Object.entries(asked).every(([path, { version, integrity, optional, devOptional }]) => {
+  const isSame = Object.entries(asked).every(([path, { version, integrity, optional, devOptional, extraneous }]) => {
     if (path === '') return true
     const present = installed[path]
-    return present ? present.version === version && present.integrity === integrity : optional === true || devOptional === true
+    return present ? present.version === version && present.integrity === integrity : Boolean(optional || devOptional || extraneous)
   })
   return isSame && Object.keys(installed).every(path => asked[path] !== undefined)
 }
