@@ -27,7 +27,7 @@ export default defineNuxtConfig({
   alias: { '#shared': here('./shared'), '#server': here('./server') },
   compatibilityDate: '2026-11-01',
   nitro: {
-    plugins: ['~~/server/boot/runtime-config.ts'],
+    plugins: ['~~/server/boot/runtime-config.ts', '~~/server/boot/security-headers.ts'],
     hooks: {
       // Pictures are painted and photos taken in on threads of their own, each of which starts from a file that stands by itself.
       compiled: async (nitro) => {

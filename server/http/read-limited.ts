@@ -6,17 +6,26 @@ import { Problem } from '#shared/errors/problem'
  * say its length, or says a wrong one, is refused like any other.
  * @throws {Problem} request/too-large
  */
-export async function readLimited(event: H3Event, maxBytes: number): Promise<Buffer> {
-  const tooLarge = () => new Problem({ code: 'request/too-large' })
-  if (Number(event.node.req.headers['content-length'] ?? 0) > maxBytes) throw tooLarge()
-
-  const chunks: Buffer[] = []
-  let bytes = 0
-  for await (const chunk of event.node.req as AsyncIterable<Uint8Array | string>) {
-    const part = Buffer.from(chunk as Uint8Array)
-    bytes += part.length
-    if (bytes > maxBytes) throw tooLarge()
-    chunks.push(part)
-  }
-  return Buffer.concat(chunks, bytes)
+export function readLimited(event: H3Event, maxBytes: number): Promise<Buffer> {
+  const request = event.node.req
+  return new Promise((resolve, reject) => {
+    const chunks: Buffer[] = []
+    let bytes = 0
+    const refuse = () => {
+      request.off('data', take)
+      // Let go of unread, the connection would be cut before its sender has read why.
+      request.resume()
+      reject(new Problem({ code: 'request/too-large' }))
+    }
+    const take = (chunk: Buffer) => {
+      bytes += chunk.length
+      if (bytes > maxBytes) return refuse()
+      chunks.push(chunk)
+    }
+    if (Number(request.headers['content-length'] ?? 0) > maxBytes) return refuse()
+    request.on('data', take)
+    request.once('end', () => resolve(Buffer.concat(chunks, bytes)))
+    request.once('error', reject)
+    request.once('aborted', () => reject(new Error('The request was cut off.')))
+  })
 }
