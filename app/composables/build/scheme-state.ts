@@ -1,0 +1,14 @@
+import type { IconName } from '~/components/ui/icons'
+import type { SchemeRowView } from '#shared/scheme/scheme-view'
+
+/** Where a scheme stands, in a few words, with the drawing that goes before them. */
+export interface SchemeState { words: string, icon?: IconName }
+
+/** What stands under a blank on the wall; null for those who see only looks. */
+export function schemeState(row: SchemeRowView, isCardShared: boolean): SchemeState | null {
+  if (row.sees === 'look') return null
+  if (row.headNumber === 0) return { words: 'draft, never published', icon: 'note' }
+  const revision = `revision ${row.headNumber}`
+  if (row.draftIsAhead) return { words: `draft on ${revision}${isCardShared ? ', card shared' : ''}`, icon: 'note' }
+  return isCardShared ? { words: `${revision}, card shared`, icon: 'card' } : { words: revision }
+}
