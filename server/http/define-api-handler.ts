@@ -23,7 +23,8 @@ export function defineApiHandler<T>(handler: (event: H3Event) => Promise<T> | T)
 function problemIn(event: H3Event, error: unknown): ProblemData {
   if (error instanceof Problem) return error.data
   if (isError(error) && error.statusCode === 404) return { code: 'request/not-found' }
-  console.error(`${event.method} ${event.path.split('?')[0]} failed:`, error)
+  // A sender who hung up in the middle, as tablets do on a bad line, is no failure and gets no answer.
+  if (!event.node.req.readableAborted) console.error(`${event.method} ${event.path.split('?')[0]} failed:`, error)
   return { code: 'server/failed' }
 }
 
