@@ -1,7 +1,7 @@
 import type { Lab, PaintBase, PaintDraft, PaintKind, PaintKnown } from '#shared/shelf/paint'
 
 /** A paint of the demo shelf; described, never branded. Colours and figures are our own inventions. */
-interface Demo extends Partial<PaintDraft> { kind: PaintKind, known: PaintKnown, pricePerMl: number, volumeLeft: number }
+export interface Demo extends Partial<PaintDraft> { kind: PaintKind, known: PaintKnown, pricePerMl: number, volumeLeft: number }
 
 const opaque = (masstone: Lab, passesToHide: number): PaintKnown => ({ how: 'masstone-hide', masstone, passesToHide })
 const clearish = (overWhite: Lab, passes: number, haze = 0.012): PaintKnown => ({ how: 'dye-over-white', overWhite, passes, haze })
@@ -20,8 +20,7 @@ const flake = (known: PaintKnown, left: number, price: number, kind: PaintKind):
 const loud = (known: PaintKnown, left: number, price: number): Demo =>
   ({ kind: 'fluorescent', known, volumeLeft: left, pricePerMl: price, reducerPer100: 20, filmPerPass: 4, volumeSolids: 24 })
 
-/** Thirty-eight bottles of the demo workshop. */
-export const DEMO_PAINTS = {
+const PAINTS = {
   'White primer': solid(opaque([95, -0.4, 1.6], 5), 210, 0.09, { kind: 'primer', filmPerPass: 8, restMinutes: 10 }),
   'Opaque white': solid(opaque([96, -0.6, 2], 6), 118, 0.11),
   'Cream': solid(opaque([90, 1.5, 14], 6), 64, 0.11),
@@ -71,14 +70,15 @@ export const DEMO_PAINTS = {
   },
 } satisfies Record<string, Demo>
 
-export type DemoPaintName = keyof typeof DEMO_PAINTS
+export type DemoPaintName = keyof typeof PAINTS
+/** Thirty-eight bottles of the demo workshop. */
+export const DEMO_PAINTS: Readonly<Record<DemoPaintName, Demo>> = PAINTS
 
 const BASE: PaintBase = 'water'
 
 /** A demo paint as somebody would have typed it. */
 export function demoPaint(name: DemoPaintName): PaintDraft {
-  const paint: Demo = DEMO_PAINTS[name]
   return {
-    name, base: BASE, reducerPer100: 0, filmPerPass: 4, volumeSolids: 25, density: 1.05, restMinutes: 5, hazards: [], note: '', ...paint,
+    name, base: BASE, reducerPer100: 0, filmPerPass: 4, volumeSolids: 25, density: 1.05, restMinutes: 5, hazards: [], note: '', ...DEMO_PAINTS[name],
   }
 }

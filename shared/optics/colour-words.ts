@@ -4,15 +4,15 @@ import { type Lab, lchFromLab } from './colorimetry'
 const DISTANCES: readonly (readonly [upTo: number, words: DistanceWords])[] = [
   [0.5, 'the same'],
   [1, 'barely seen'],
-  [3.5, 'seen side by side'],
-  [8, 'look together'],
-  [20, 'plainly different'],
+  [2, 'seen side by side'],
+  [3.5, 'look together'],
+  [8, 'plainly different'],
 ]
 
 /** How far two colours are apart, as a painter would say it. */
 export type DistanceWords = 'the same' | 'barely seen' | 'seen side by side' | 'look together' | 'plainly different' | 'another colour'
 
-/** Words for a distance in CIEDE2000. The marks are common practice, not a standard. */
+/** Words for a distance in CIEDE2000. The marks follow usual shop tolerances for solid colours (common practice, no standard): up to 2 accepted, up to 3.5 looks right together. */
 export function distanceWords(deltaE: number): DistanceWords {
   return DISTANCES.find(([upTo]) => deltaE <= upTo)?.[1] ?? 'another colour'
 }

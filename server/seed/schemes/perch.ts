@@ -29,7 +29,7 @@ export const PERCH: DemoScheme = {
     coat('Candy yellow, lower flank', 'Candy yellow', 0.8, { gun: [100, 0.55], where: { zones: ['trunk'], fade: 5 } }),
     coat('Olive back', 'Olive green', 2.4, { gun: [22, 0.75], where: { zones: ['back', 'upper flank'], reach: -1, fade: 9, fins: [{ fin: 'dorsal', root: 0.9, tip: 0.7, on: 'whole' }, { fin: 'tail', root: 0.9, tip: 0.25, on: 'whole' }] } }),
     coat('Dark ridge', DARK_OLIVE, 2.6, { gun: [12, 0.7], where: { zones: ['back'], reach: 1.5, fade: 5 } }),
-    ...under('Bars', 4102, { kind: 'stencil', does: 'opens', soft: 0.55, wobble: 0.5, outlines: BARS.map(numbers => bar(...numbers)) }, [
+    ...under('Bars', 4102, { kind: 'stencil', does: 'opens', soft: 0.55, wobble: 0.5, outlines: BARS.map(([u, top, bottom, a, b, lean]) => bar(u, top, bottom, a, b, lean)) }, [
       coat('Bars', DARK_OLIVE, 2.1, { gun: [60, 1.4], tool: THROUGH_MESH, note: 'Stop when the foot of the bar goes smoky, not black.' }),
     ]),
     coat('Bars, cores freehand', 'Smoke', 1.5, {

@@ -12,7 +12,7 @@ it.each<[string, Lab]>([
 ])('calls it %s', (words, lab) => {
   expect(colourWords(lab)).toBe(words)
 })
-it.each([[0, 'the same'], [0.8, 'barely seen'], [2, 'seen side by side'], [5, 'look together'], [12, 'plainly different'], [40, 'another colour']])('says of a distance of %d: %s', (distance, words) => {
+it.each([[0, 'the same'], [0.8, 'barely seen'], [1.6, 'seen side by side'], [3, 'look together'], [5, 'plainly different'], [12, 'another colour']])('says of a distance of %d: %s', (distance, words) => {
   expect(distanceWords(distance)).toBe(words)
 })
 it('has words for every colour', () => {
