@@ -1,6 +1,7 @@
 import type { Mark, Place } from '#shared/scheme/mark'
 import { dotField, placedDots, scatteredDots } from './dot-field'
 import { keptMarkMap, type DepositKeep } from './keep'
+import { hashShare } from './noise'
 import { cutEdge, outlineReach } from './mask-map'
 import { outlineField } from './outline-field'
 import { spongeMap, wormMap } from './pattern-map'
@@ -8,8 +9,10 @@ import { fieldMap, type PlaneField } from './plane-field'
 import { draped, planePlace, type PlanePoint } from './plane-place'
 import { strokeField, type PlaneStroke } from './stroke-field'
 
-/** Strokes of a fan run together at its root; a hand flicks them off there, so they never lay more than this. */
-const FAN_MOST = 1.6
+/** Strokes of a fan run together at its root; a hand flicks them off lightly there. 0: they add up in full; 1: no more than one. */
+const FLICK = 0.75
+/** No two strokes of a hand are as long. */
+const FAN_VARIES = 0.07
 
 /**
  * How much the marks of a coat lay at every sample of the body, as shares of the coat, into `out`. Marks of one coat come one
@@ -43,10 +46,8 @@ function drawMark(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
       return fieldMap(keep, field, field)
     }
     case 'fan': {
-      const field = strokeField(fanStrokes(planePlace(table, ...mark.root), mark, keep.blank.shape.length), 'airbrush')
-      const map = fieldMap(keep, field, field)
-      for (const i of keep.onBody) map[i] = FAN_MOST * (1 - Math.exp(-(map[i] ?? 0) / FAN_MOST))
-      return map
+      const field = fanField(planePlace(table, ...mark.root), mark, keep.blank.shape.length)
+      return fieldMap(keep, field, field)
     }
     case 'dots': return bothSides(side => dotField(placedDots(table, mark, side), mark.soft))
     case 'scatter': return bothSides(side => dotField(scatteredDots(table, mark, side), mark.soft))
@@ -62,15 +63,32 @@ function drawMark(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
   }
 }
 
+type Fan = Extract<Mark, { kind: 'fan' }>
+
+/** A fan of strokes whose paint, near the root where they lie over each other, is spread as a hand would. */
+export function fanField(root: PlanePoint, fan: Fan, length: number): PlaneField {
+  const strokes = strokeField(fanStrokes(root, fan, length), 'airbrush')
+  const gap = Math.abs(fan.angle[1] - fan.angle[0]) * Math.PI / 180 / (fan.count - 1)
+  const breadth = Math.sqrt(2 * Math.PI) * length / 100 * fan.width[0]
+  const at = (U: number, V: number) => {
+    const paint = strokes.at(U, V)
+    if (paint <= 0) return 0
+    const over = Math.min(fan.count, breadth / Math.max(1e-9, gap * Math.hypot(U - root[0], V - root[1])))
+    return over > 1 ? paint / over ** FLICK : paint
+  }
+  return { at, meets: 'add' }
+}
+
 /**
  * The strokes of a fan from its root, first to last: lengths and angles run from the first to the last stroke, widths and amounts
  * along each. It keeps its form: all of it grows with the body (mm at 100 mm).
  */
-export function fanStrokes(root: PlanePoint, fan: Extract<Mark, { kind: 'fan' }>, length: number): PlaneStroke[] {
+export function fanStrokes(root: PlanePoint, fan: Fan, length: number): PlaneStroke[] {
   const scale = length / 100
   return Array.from({ length: fan.count }, (_, k) => {
     const share = k / (fan.count - 1)
-    const reach = scale * (fan.length[0] + (fan.length[1] - fan.length[0]) * share)
+    const even = scale * (fan.length[0] + (fan.length[1] - fan.length[0]) * share)
+    const reach = even * (1 + FAN_VARIES * (2 * hashShare(k, fan.count, 811) - 1))
     const angle = (fan.angle[0] + (fan.angle[1] - fan.angle[0]) * share) * Math.PI / 180
     const tip: PlanePoint = [root[0] + reach * Math.cos(angle), root[1] - reach * Math.sin(angle)]
     return { points: [root, tip], width: [scale * fan.width[0], scale * fan.width[1]], amount: fan.amount }
