@@ -6,7 +6,7 @@ type Put = typeof layOver
 /** Bright wire against the light of a white surface, and the one highlight it carries. Chosen by eye. */
 const STEEL = { dark: 0.045, body: 0.36, shine: 0.85, narrow: 0.055 }
 /** A clear plate darkens what lies behind it; its cut edges collect light. */
-const PLATE = { behind: 0.75, haze: 0.07, edge: 0.5, sheen: 0.1 }
+const PLATE = { behind: 0.75, haze: 0.07, edge: 0.5, sheen: 0.16, round: 0.07 }
 /** Wire is drawn stouter than it is, or it would vanish beside the body. */
 const STOUT = 1.7
 
@@ -79,25 +79,30 @@ function drawLip(canvas: Canvas, { corners, edge, flatness, facing, isInFront }:
   const left = Math.min(...ring.map(p => p[0])), right = Math.max(...ring.map(p => p[0]))
   const top = Math.min(...ring.map(p => p[1])), bottom = Math.max(...ring.map(p => p[1]))
   // A plate that faces the lamp shows a breath of it.
-  const sheen = PLATE.sheen * flatness * Math.max(0, facing[1])
+  const sheen = PLATE.sheen * flatness * (0.6 + 0.4 * Math.abs(facing[1]))
+  const narrow = Math.min(...ring.map((from, i) => Math.hypot(ring[(i + 1) % 4]![0] - from[0], ring[(i + 1) % 4]![1] - from[1])))
   forBox(canvas, [left, top], [right, bottom], 1, (x, y, pixel) => {
-    const inside = insideOf(ring, x, y)
+    const inside = insideOf(ring, x, y, PLATE.round * narrow)
     const share = Math.min(1, Math.max(0, inside + 0.5))
     if (share <= 0) return
-    const rim = Math.exp(-((inside / Math.max(0.9, 0.4 * edge)) ** 2))
+    const rim = Math.exp(-((inside / Math.max(0.9, (0.4 + 0.5 * flatness) * edge)) ** 2))
     const hidden = 1 - PLATE.behind + 0.5 * rim
     const light = share * (PLATE.haze + sheen + PLATE.edge * rim)
     put(canvas, pixel, share * hidden, light, light, light)
   })
 }
 
-/** Distance to the nearest side of a convex outline, + inside. */
-function insideOf(ring: readonly PicturePoint[], x: number, y: number): number {
-  let least = Infinity
-  ring.forEach((from, i) => {
+/** Distance to the sides of a convex outline, + inside; `round` pixels soften its corners. */
+function insideOf(ring: readonly PicturePoint[], x: number, y: number, round: number): number {
+  let least = Infinity, sum = 0
+  const sides = ring.map((from, i) => {
     const to = ring[(i + 1) % ring.length]!
-    const length = Math.hypot(to[0] - from[0], to[1] - from[1])
-    if (length > 0) least = Math.min(least, ((to[0] - from[0]) * (y - from[1]) - (to[1] - from[1]) * (x - from[0])) / length)
+    const length = Math.max(1e-6, Math.hypot(to[0] - from[0], to[1] - from[1]))
+    const side = ((to[0] - from[0]) * (y - from[1]) - (to[1] - from[1]) * (x - from[0])) / length
+    least = Math.min(least, side)
+    return side
   })
-  return least
+  if (round < 0.3) return least
+  for (const side of sides) sum += Math.exp((least - side) / round)
+  return least - round * Math.log(sum)
 }

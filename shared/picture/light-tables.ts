@@ -4,7 +4,7 @@ import type { PictureLight } from './picture-options'
 import { flakeLobe, flakeSlope, mattLobe, type LobeReading } from './surface-lobes'
 
 /** Places of a table in each direction, over the two sideways parts of the normal, -1 to 1. */
-const GRID = 49
+const GRID = 37
 
 /** One value for each visible normal. */
 export type NormalTable = Float32Array

@@ -3,6 +3,9 @@ export const FILM_INDEX = 1.5
 /** Roughness of a matt film's surface, as the slope spread of its facets. Chosen by eye. */
 const MATT_SLOPE = Math.SQRT2 * Math.tan(22 * Math.PI / 180)
 
+/** Squared slope, in units of the spread, past which flakes are as good as none: e to the minus this. */
+const STEEPEST = 14
+
 /** Share of unpolarised light a smooth surface mirrors; `cosine` of the angle outside it, 0-1. @source Fresnel's equations */
 export function fresnel(cosine: number, index: number = FILM_INDEX): number {
   const inside = Math.sqrt(1 - (1 - cosine * cosine) / (index * index))
@@ -45,9 +48,14 @@ export function flakeLobe(cosLamp: number, cosEye: number, cosBetween: number, s
   const between = (cosBetween - cosLamp * cosEye) / n2 + inLamp * inEye
   const local = Math.sqrt(Math.max(0, (1 + between) / 2))
   const tilt = Math.min(1, (inLamp + inEye) / (2 * Math.max(local, 1e-6)))
+  out.local = local
+  // Hardly a flake lies that steeply.
+  if ((1 - tilt * tilt) > STEEPEST * slope * slope * tilt * tilt) {
+    out.flake = 0
+    return out
+  }
   const through = (1 - fresnel(cosLamp)) * (1 - fresnel(cosEye)) / n2
   out.flake = through * Math.PI * facetShare(tilt, slope) / (4 * inLamp * inEye)
-  out.local = local
   return out
 }
 

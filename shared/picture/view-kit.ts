@@ -96,8 +96,10 @@ export function composeKept(kit: ViewKit, groundKey: string, ground: ArrayLike<n
   if (alike > from.keys.length) {
     from = { keys: keys.slice(0, alike), state: layCoats(coats.slice(from.keys.length - 1, alike - 1), from.state) }
   }
+  // The old whole has had its day, unless it is what the new one starts from.
+  const spare = last && last !== from ? last.state : undefined
   kit.prefix = from
-  kit.whole = { keys, state: layCoats(coats.slice(from.keys.length - 1), from.state) }
+  kit.whole = { keys, state: layCoats(coats.slice(from.keys.length - 1), from.state, spare) }
   return kit.whole.state
 }
 
