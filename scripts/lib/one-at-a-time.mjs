@@ -44,6 +44,8 @@ function endOrphans(held) {
     catch {
       // It has ended meanwhile.
     }
+    // Its port is free only when it is gone.
+    for (let waits = 0; waits < 40 && isAlive(child); waits++) Atomics.wait(new Int32Array(new SharedArrayBuffer(4)), 0, 0, 50)
   }
 }
 
