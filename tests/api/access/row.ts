@@ -45,5 +45,7 @@ export interface AccessRow {
   /** The address as its file under server/ says it: '/api/paints/[paintId]'. */
   path: string
   who: Record<Who, number>
+  /** It lets whoever asks rightly into the workshop, which they may see from then on. */
+  letsIn?: boolean
   make: (ground: Ground) => Promise<AccessRequest> | AccessRequest
 }
