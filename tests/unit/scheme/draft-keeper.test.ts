@@ -118,6 +118,27 @@ describe('a draft that is worked on', () => {
     expect(world.keeper.isUnsaved()).toBe(false)
   })
 
+  it('keeps the newest change on the device while an older one is on its way, whether that one arrives or not', async () => {
+    for (const fails of ['never', 'no connection'] as const) {
+      world = new World()
+      let open = () => {}
+      world.gate = new Promise((resolve) => {
+        open = resolve
+      })
+      world.keeper.change(body(1, 2))
+      await world.pass(SAVE_AFTER_MS)
+      world.keeper.change(body(1, 2, 3))
+      const first = world.gate
+      world.gate = new Promise(() => {})
+      world.fails = fails
+      open()
+      await first
+      await settled()
+      expect(world.device).toEqual({ body: body(1, 2, 3), version: fails === 'never' ? 2 : 1 })
+      expect(world.state?.is).not.toBe('saved')
+    }
+  })
+
   it('can be sent at once', async () => {
     world.keeper.change(body(1, 2))
     await world.keeper.flush()
@@ -166,6 +187,11 @@ describe('when somebody else saved meanwhile', () => {
     expect(world.server.body).toEqual(body(9))
     expect(world.device).toEqual({ body: body(1, 2, 3), version: 1 })
     expect(world.sent).toBe(1)
+  })
+
+  it('nothing is sent by hand either before one version is chosen', async () => {
+    await world.keeper.flush()
+    expect([world.sent, world.conflicts]).toEqual([1, 1])
   })
 
   it('mine goes out once it is chosen, on top of theirs', async () => {
