@@ -1,77 +1,95 @@
-import type { RunAct, RunEvent } from './run-event'
-import type { RunStep } from './run-step'
+import type { DeviationKind, RunAct, RunEvent } from './run-event'
+import { isFor, type RunStep } from './run-step'
 
-/** What is known of a run at one moment. */
+/** What a run is made of. */
+export interface RunPlan { steps: readonly RunStep[], pieces: number }
+
+/** A wait that began for some pieces. */
+export interface Wait { eventId: string, stepId: string, pieces: readonly number[] | null, at: string, byHand: boolean }
+
+/** Something done differently from the revision. */
+export interface Deviation { eventId: string, stepId: string, what: DeviationKind, note: string, pieces: readonly number[] | null, at: string }
+
+/** What is known of a run at one moment. Pieces that are null stand for all of the run. */
 export interface RunState {
-  /** Steps done once for all pieces, with when. */
-  done: ReadonlyMap<string, { eventId: string, at: string }>
+  /** Which pieces are through with which step. */
+  done: ReadonlyMap<string, { pieces: ReadonlySet<number> | 'all', at: string }>
   /** Passes laid, by coat and piece. */
   laid: ReadonlyMap<string, ReadonlyMap<number, number>>
-  /** When a wait began, by step. */
-  waits: ReadonlyMap<string, string>
+  waits: readonly Wait[]
   /** Pieces set aside, with the reason. */
   aside: ReadonlyMap<number, string>
   inspected: ReadonlyMap<number, { passed: boolean, note: string }>
-  deviations: readonly { eventId: string, stepId: string, what: string, note: string, at: string }[]
+  deviations: readonly Deviation[]
   finishedAt: string | null
 }
 
-/** What a run is made of, as far as its acts can be checked against it. */
-export interface RunPlan { steps: readonly RunStep[], pieces: number }
-
 /** Why an act cannot belong to this run, or null when it can. Only its own words are checked, never the order of arrival. */
 export function refusalOf(plan: RunPlan, act: RunAct): string | null {
+  const knows = (id: string | undefined) => id === undefined || plan.steps.some(step => step.id === id)
   switch (act.kind) {
     case 'pass-laid':
-      if (!plan.steps.some(step => step.id === `lay:${act.coatId}`)) return 'This revision has no such coat.'
-      return pieceRefusal(plan, act.piece)
+      if (!plan.steps.some(step => step.kind === 'lay' && step.coat.id === act.coatId)) return 'This revision has no such coat.'
+      return piecesRefusal(plan, act.pieces)
     case 'step-done':
+      return knows(act.stepId) && knows(act.starts) ? piecesRefusal(plan, act.pieces) : NO_STEP
     case 'wait-started':
     case 'deviation':
-      return plan.steps.some(step => step.id === act.stepId) ? null : 'This revision has no such step.'
+      return knows(act.stepId) ? piecesRefusal(plan, act.pieces) : NO_STEP
     case 'piece-set-aside':
     case 'piece-taken-up':
+      return piecesRefusal(plan, [act.piece])
     case 'inspected':
-      return pieceRefusal(plan, act.piece)
+      return piecesRefusal(plan, act.pieces)
     case 'run-finished':
     case 'taken-back':
       return null
   }
 }
 
-function pieceRefusal(plan: RunPlan, piece: number): string | null {
-  return piece <= plan.pieces ? null : `This run has ${plan.pieces} pieces.`
+const NO_STEP = 'This revision has no such step.'
+
+function piecesRefusal(plan: RunPlan, pieces: readonly number[] = []): string | null {
+  return pieces.every(piece => piece <= plan.pieces) ? null : `This run has ${plan.pieces} pieces.`
 }
 
-/** Works out where a run stands from its acts, in the order they arrived. The same acts twice count once. */
+const earlier = (a: string | undefined, b: string) => a !== undefined && a < b ? a : b
+
+/**
+ * Works out where a run stands from its acts, in the order they arrived. The same act twice counts once, an act taken back
+ * counts as if it had never been. Passes, steps and waits come out alike in any order; only where one word replaces another
+ * (set aside and taken up, looked at again) the later arrival stands.
+ */
 export function runState(events: readonly RunEvent[]): RunState {
-  const back = new Set(events.flatMap(({ act }) => act.kind === 'taken-back' ? [act.eventId] : []))
-  const seen = new Set<string>()
-  const done = new Map<string, { eventId: string, at: string }>()
+  const standing = standingActs(events)
+  const done = new Map<string, { pieces: Set<number> | 'all', at: string }>()
   const laid = new Map<string, Map<number, number>>()
-  const waits = new Map<string, string>()
+  const waits: Wait[] = []
   const aside = new Map<number, string>()
   const inspected = new Map<number, { passed: boolean, note: string }>()
-  const deviations: { eventId: string, stepId: string, what: string, note: string, at: string }[] = []
+  const deviations: Deviation[] = []
   let finishedAt: string | null = null
 
-  for (const { id, act, doneAt } of events) {
-    if (back.has(id) || seen.has(id)) continue
-    seen.add(id)
+  for (const { id, act, doneAt } of standing) {
     switch (act.kind) {
       case 'pass-laid': {
         const pieces = laid.get(act.coatId) ?? new Map<number, number>()
-        laid.set(act.coatId, pieces.set(act.piece, (pieces.get(act.piece) ?? 0) + act.passes))
+        for (const piece of new Set(act.pieces)) pieces.set(piece, (pieces.get(piece) ?? 0) + act.passes)
+        laid.set(act.coatId, pieces)
         break
       }
-      case 'step-done':
-        done.set(act.stepId, { eventId: id, at: doneAt })
+      case 'step-done': {
+        const known = done.get(act.stepId)
+        const pieces = act.pieces === undefined || known?.pieces === 'all' ? 'all' : new Set([...known?.pieces ?? [], ...act.pieces])
+        done.set(act.stepId, { pieces, at: earlier(known?.at, doneAt) })
+        if (act.starts !== undefined) waits.push({ eventId: id, stepId: act.starts, pieces: act.pieces ?? null, at: doneAt, byHand: false })
         break
+      }
       case 'wait-started':
-        waits.set(act.stepId, doneAt)
+        waits.push({ eventId: id, stepId: act.stepId, pieces: act.pieces ?? null, at: doneAt, byHand: true })
         break
       case 'deviation':
-        deviations.push({ eventId: id, stepId: act.stepId, what: act.what, note: act.note, at: doneAt })
+        deviations.push({ eventId: id, stepId: act.stepId, what: act.what, note: act.note, pieces: act.pieces ?? null, at: doneAt })
         break
       case 'piece-set-aside':
         aside.set(act.piece, act.reason)
@@ -80,16 +98,28 @@ export function runState(events: readonly RunEvent[]): RunState {
         aside.delete(act.piece)
         break
       case 'inspected':
-        inspected.set(act.piece, { passed: act.passed, note: act.note })
+        for (const piece of act.pieces) inspected.set(piece, { passed: act.passed, note: act.note })
         break
       case 'run-finished':
-        finishedAt = doneAt
+        finishedAt = earlier(finishedAt ?? undefined, doneAt)
         break
       case 'taken-back':
         break
     }
   }
-  return { done, laid, waits, aside, inspected, deviations, finishedAt }
+  return { done, laid, waits: waits.sort(byTime), aside, inspected, deviations: deviations.sort(byTime), finishedAt }
+}
+
+const byTime = (a: { at: string, eventId: string }, b: { at: string, eventId: string }) => a.at.localeCompare(b.at) || a.eventId.localeCompare(b.eventId)
+
+/** The acts that stand: each once, without take-backs and what they took back. */
+export function standingActs<E extends RunEvent>(events: readonly E[]): E[] {
+  const gone = new Set(events.flatMap(({ act }) => act.kind === 'taken-back' ? [act.eventId] : []))
+  return events.filter(({ id, act }) => {
+    if (act.kind === 'taken-back' || gone.has(id)) return false
+    gone.add(id)
+    return true
+  })
 }
 
 /** Pieces that go on: all but those set aside. */
@@ -97,16 +127,13 @@ export function piecesGoingOn(plan: Pick<RunPlan, 'pieces'>, state: Pick<RunStat
   return Array.from({ length: plan.pieces }, (_, i) => i + 1).filter(piece => !state.aside.has(piece))
 }
 
-/** Whether a step is done: ticked, or for a coat laid with all its passes on every piece that goes on, or for inspection every piece looked at. */
-export function isStepDone(step: RunStep, plan: RunPlan, state: RunState): boolean {
-  if (state.done.has(step.id)) return true
-  const pieces = piecesGoingOn(plan, state)
-  if (step.kind === 'lay') return pieces.length > 0 && pieces.every(piece => (state.laid.get(step.coat.id)?.get(piece) ?? 0) >= step.coat.passes)
-  if (step.kind === 'inspect') return pieces.every(piece => state.inspected.has(piece))
-  return false
+/** Whether a piece is through with a step, or the step is not for it. */
+export function isThrough(step: RunStep, piece: number, state: Pick<RunState, 'done'>): boolean {
+  const pieces = state.done.get(step.id)?.pieces
+  return !isFor(step, piece) || pieces === 'all' || pieces?.has(piece) === true
 }
 
-/** The step to do now: the first that is not done; undefined when all are. */
-export function currentStep(plan: RunPlan, state: RunState): RunStep | undefined {
-  return plan.steps.find(step => !isStepDone(step, plan, state))
+/** Passes of a coat on one piece. */
+export function passesOn(coatId: string, piece: number, state: Pick<RunState, 'laid'>): number {
+  return state.laid.get(coatId)?.get(piece) ?? 0
 }

@@ -1,35 +1,60 @@
-import type { Caution } from '#shared/shelf/hazards'
 import type { Coat } from '#shared/scheme/coat'
-import type { CoatAmount } from '#shared/scheme/amounts'
 import type { Mask } from '#shared/scheme/mask'
+import type { Caution } from '#shared/shelf/hazards'
 
 interface StepBase {
   /** Lasting name of the step within the run. */
   id: string
+  /** First and last piece it is for, where the coat is laid in more than one mix; null for all of the run. */
+  only: readonly [first: number, last: number] | null
   /** The caution to show with it, if any. */
   caution: Caution | null
 }
 
-interface CoatStep extends StepBase { coat: Coat, number: number, coatName: string }
+interface CoatStep extends StepBase { coat: Coat, number: number, coatName: string, isClear: boolean }
 
 /** One thing to do at the bench, in the order of the stack. */
 export type RunStep
   /** What protects whom, before anything is opened. */
   = | StepBase & { kind: 'prepare' }
-    /** Fill the cup. */
-    | CoatStep & { kind: 'mix', amount: CoatAmount }
+    /** Fill the cup: for this coat and those after it that are laid from the same cup. */
+    | CoatStep & { kind: 'mix', coats: readonly Coat[], advice: readonly MixAdvice[], potLifeMinutes: number | null }
     | StepBase & { kind: 'fit', mask: Mask }
     /** Spray, brush or dip one coat, piece by piece. */
-    | CoatStep & { kind: 'lay', through: string[] }
+    | CoatStep & { kind: 'lay', through: readonly Mask[] }
     /** Wait; minutes from the coat. */
     | CoatStep & { kind: 'rest', minutes: number }
     | CoatStep & { kind: 'heat', seconds: number, distance: number }
     | StepBase & { kind: 'lift', mask: Mask }
-    /** Empty and rinse before the next colour. */
-    | CoatStep & { kind: 'clean', next: string }
+    /** Empty and rinse; `next` is the coat the airbrush is wanted for, null when it is done for this run. */
+    | CoatStep & { kind: 'clean', next: string | null }
     | StepBase & { kind: 'eyes' }
     /** On the turner until it no longer runs. */
     | CoatStep & { kind: 'turn', minutes: number }
     | StepBase & { kind: 'inspect' }
 
 export type RunStepKind = RunStep['kind']
+/** A step that takes time by itself. */
+export type WaitStep = Extract<RunStep, { kind: 'rest' | 'heat' | 'turn' }>
+/** A step that fills the cup. */
+export type MixStep = Extract<RunStep, { kind: 'mix' }>
+/** A step that lays a coat. */
+export type LayStep = Extract<RunStep, { kind: 'lay' }>
+
+/** What to mind while mixing: flakes sink, lumps stop a needle, two parts must be stirred whole, a small cup stays cool. */
+export type MixAdvice = 'strain' | 'stir often' | 'stir both parts' | 'shallow cup'
+
+/** How long a waiting step takes, seconds. */
+export function waitSeconds(step: WaitStep): number {
+  return step.kind === 'heat' ? step.seconds : step.minutes * 60
+}
+
+/** Whether a step takes time by itself. */
+export function isWait(step: RunStep): step is WaitStep {
+  return step.kind === 'rest' || step.kind === 'heat' || step.kind === 'turn'
+}
+
+/** Whether a step is for a piece at all. */
+export function isFor(step: RunStep, piece: number): boolean {
+  return step.only === null || (piece >= step.only[0] && piece <= step.only[1])
+}

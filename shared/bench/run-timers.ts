@@ -1,0 +1,62 @@
+import { partsOf, waitOf } from './run-parts'
+import { type MixStep, isWait, type WaitStep, waitSeconds } from './run-step'
+import { isThrough, type RunPlan, type RunState } from './run-state'
+
+/** A wait that some pieces are in. */
+export interface RunTimer {
+  /** The act that began it: lasting, so that it rings once. */
+  eventId: string
+  step: WaitStep
+  pieces: number[]
+  /** When it ends, ms. */
+  endsAt: number
+  /** How long it takes in all, ms. */
+  whole: number
+}
+
+/** The waits of the pieces that stand at a waiting step, the one that ends first first. Pieces that went on early are in none. */
+export function runTimers(plan: RunPlan, state: RunState): RunTimer[] {
+  const timers = new Map<string, RunTimer>()
+  for (const { step, pieces } of partsOf(plan, state)) {
+    if (!step || !isWait(step)) continue
+    for (const piece of pieces) {
+      const wait = waitOf(step.id, piece, state)
+      if (!wait) continue
+      const whole = waitSeconds(step) * 1000
+      const timer = timers.get(wait.eventId) ?? { eventId: wait.eventId, step, pieces: [], endsAt: Date.parse(wait.at) + whole, whole }
+      timer.pieces.push(piece)
+      timers.set(wait.eventId, timer)
+    }
+  }
+  return [...timers.values()].sort((a, b) => a.endsAt - b.endsAt)
+}
+
+/** Milliseconds a timer still runs, 0 once it has ended; a clock behind the one that started it never shows more than the whole. */
+export function timerLeft({ endsAt, whole }: Pick<RunTimer, 'endsAt' | 'whole'>, now: number): number {
+  return Math.min(whole, Math.max(0, endsAt - now))
+}
+
+/** What is in the cup now. */
+export interface CupNow {
+  step: MixStep
+  /** When it was mixed, ms. */
+  mixedAt: number
+  /** When it sets, ms; null for what does not. */
+  setsAt: number | null
+}
+
+/** The cup that was mixed last and is not cleaned out, and whose coats are not all laid; undefined when there is none. */
+export function cupNow(plan: RunPlan, state: RunState): CupNow | undefined {
+  const mixed = plan.steps.flatMap((step): CupNow[] => {
+    const done = state.done.get(step.id)
+    if (step.kind !== 'mix' || !done) return []
+    const mixedAt = Date.parse(done.at)
+    return [{ step, mixedAt, setsAt: step.potLifeMinutes === null ? null : mixedAt + step.potLifeMinutes * 60_000 }]
+  }).sort((a, b) => b.mixedAt - a.mixedAt)[0]
+  if (!mixed) return undefined
+  const isLeft = partsOf(plan, state).some(part => part.pieces.some(piece => plan.steps.some(step => step.kind === 'lay'
+    && mixed.step.coats.some(coat => coat.id === step.coat.id)
+    && (mixed.step.only === null || step.id === mixed.step.id.replace(/^mix/, 'lay'))
+    && !isThrough(step, piece, state))))
+  return isLeft ? mixed : undefined
+}
