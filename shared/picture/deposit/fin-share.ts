@@ -1,7 +1,7 @@
 import { rayAngle, type FinOutline } from '#shared/blank/fin-outline'
 import { PART_FIN } from '#shared/blank/view-sample-lists'
 import type { Where } from '#shared/scheme/coat'
-import { keptMarkMap, type DepositKeep } from './keep'
+import { keptMap, type DepositKeep } from './keep'
 import { hashShare } from './noise'
 import { normalShare } from './normal-share'
 
@@ -31,7 +31,7 @@ export function layFinShare(keep: DepositKeep, fins: Where['fins'], out: Float32
 }
 
 function finMap(keep: DepositKeep, on: Exclude<FinPaint['on'], 'whole'>, width: number): Float32Array {
-  return keptMarkMap(keep, `fins ${on} ${width}`, () => {
+  return keptMap(keep, 'marks', `fins ${on} ${width}`, () => {
     const out = new Float32Array(keep.samples.count)
     const { U, V, part, rim } = keep.samples
     const edges = keep.blank.fins.map(fin => (on === 'leading edge' ? leadingEdges(fin) : []))

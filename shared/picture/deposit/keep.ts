@@ -4,8 +4,8 @@ import { PART_FIN, PART_NONE, type ViewSamples } from '#shared/blank/view-sample
 import { gillEdge } from '#shared/blank/zones'
 import { hashShare } from './noise'
 
-/** How many maps of marks are kept for a view; masks are few and all kept. */
-const MARK_MAPS_MAX = 40
+/** How many maps of masks and of marks are kept for a view: those of one scheme, and some that are being tried. */
+const MAPS_MAX = { masks: 24, marks: 40 }
 
 /** Noise on the surface: of each kind three independent values a sample, side by side, that every coat mixes in its own way. */
 export interface SurfaceNoise { hand: Float32Array, edge: Float32Array, droplets: Float32Array }
@@ -94,15 +94,15 @@ export function evenly(table: ArrayLike<number>, share: number): number {
   return low + ((table[i + 1] ?? 0) - low) * (at - i)
 }
 
-/** A map of marks out of the keep, or made and kept; the one unused for longest makes room. */
-export function keptMarkMap(keep: DepositKeep, key: string, make: () => Float32Array): Float32Array {
-  const found = keep.markMaps.get(key)
-  const map = found ?? make()
-  keep.markMaps.delete(key)
-  keep.markMaps.set(key, map)
-  if (keep.markMaps.size > MARK_MAPS_MAX) {
-    for (const oldest of keep.markMaps.keys()) {
-      keep.markMaps.delete(oldest)
+/** A map of a mask or mark out of the keep, or made and kept; the one unused for longest makes room. */
+export function keptMap(keep: DepositKeep, of: 'masks' | 'marks', key: string, make: () => Float32Array): Float32Array {
+  const maps = of === 'masks' ? keep.maskMaps : keep.markMaps
+  const map = maps.get(key) ?? make()
+  maps.delete(key)
+  maps.set(key, map)
+  if (maps.size > MAPS_MAX[of]) {
+    for (const oldest of maps.keys()) {
+      maps.delete(oldest)
       break
     }
   }

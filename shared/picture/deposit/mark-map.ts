@@ -1,6 +1,6 @@
 import type { Mark, Place } from '#shared/scheme/mark'
 import { dotField, placedDots, scatteredDots } from './dot-field'
-import { keptMarkMap, type DepositKeep } from './keep'
+import { keptMap, type DepositKeep } from './keep'
 import { hashShare } from './noise'
 import { cutEdge, outlineReach } from './mask-map'
 import { outlineField } from './outline-field'
@@ -34,7 +34,7 @@ function meetsByAdding(mark: Mark): boolean {
 function markMap(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
   // Only freehand edges depend on the coat that draws them.
   const key = JSON.stringify(mark.kind === 'outline' ? [mark, seed] : mark)
-  return keptMarkMap(keep, key, () => drawMark(keep, mark, seed))
+  return keptMap(keep, 'marks', key, () => drawMark(keep, mark, seed))
 }
 
 function drawMark(keep: DepositKeep, mark: Mark, seed: number): Float32Array {

@@ -1,5 +1,5 @@
 import type { Mask, MaskForm } from '#shared/scheme/mask'
-import type { DepositKeep } from './keep'
+import { keptMap, type DepositKeep } from './keep'
 import { meshMap } from './mesh-map'
 import { hashShare, noise2, SWING } from './noise'
 import { normalShare } from './normal-share'
@@ -16,12 +16,8 @@ const TORN = { large: 3.1, small: 1.2 }
 
 /** What a mask lets through at every sample of the body. Made once a view: every coat of a bracket gets the same. */
 export function maskMap(keep: DepositKeep, mask: Pick<Mask, 'form' | 'seed'>): Float32Array {
-  const key = JSON.stringify([mask.form, mask.seed])
-  const found = keep.maskMaps.get(key)
-  if (found) return found
-  const map = mask.form.kind === 'mesh' ? meshMap(keep, mask.form, mask.seed) : stencilMap(keep, mask.form, mask.seed)
-  keep.maskMaps.set(key, map)
-  return map
+  const { form, seed } = mask
+  return keptMap(keep, 'masks', JSON.stringify([form, seed]), () => form.kind === 'mesh' ? meshMap(keep, form, seed) : stencilMap(keep, form, seed))
 }
 
 function stencilMap(keep: DepositKeep, form: StencilForm, seed: number): Float32Array {

@@ -7,32 +7,28 @@ export interface PlaneField {
   meets: 'add' | 'cover'
 }
 
-/** Nearer to a ridge than this, mm, the other side's drawing is looked at too. */
-const RIDGE = 6
-
 /**
  * Evaluates what is drawn on the left and on the right flank at every sample of the body. Drawings that reach over the back or
  * the belly go on on the other side, so no line is left along the ridge.
  */
 export function fieldMap(keep: DepositKeep, left: PlaneField, right: PlaneField): Float32Array {
   const { U, V, side } = keep.samples
+  const { onBody, toBack, girth } = keep
   const out = new Float32Array(keep.samples.count)
-  for (const i of keep.onBody) {
+  const adds = left.meets === 'add'
+  for (let k = 0; k < onBody.length; k++) {
+    const i = onBody[k] ?? 0
     const isLeft = (side[i] ?? 1) > 0
     const own = isLeft ? left : right
     const other = isLeft ? right : left
     const at = U[i] ?? 0
     const height = V[i] ?? 0
-    let value = own.at(at, height)
-    const toBack = keep.toBack[i] ?? 0
-    const toBelly = (keep.girth[i] ?? 0) - toBack
-    if (toBack < RIDGE) value = meet(own.meets, value, other.at(at, height + 2 * toBack))
-    if (toBelly < RIDGE) value = meet(own.meets, value, other.at(at, height - 2 * toBelly))
-    out[i] = value
+    const back = toBack[i] ?? 0
+    const here = own.at(at, height)
+    // The same place as the other flank counts it: on past the ridge of the back, or past the belly.
+    const overBack = other.at(at, height + 2 * back)
+    const underBelly = other.at(at, height - 2 * ((girth[i] ?? 0) - back))
+    out[i] = adds ? here + overBack + underBelly : Math.max(here, overBack, underBelly)
   }
   return out
-}
-
-function meet(meets: PlaneField['meets'], a: number, b: number): number {
-  return meets === 'add' ? a + b : Math.max(a, b)
 }

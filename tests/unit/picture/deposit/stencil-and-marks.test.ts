@@ -110,6 +110,17 @@ describe('marks on a body', () => {
     expect(laid({ ...scatter, seed: 4 })).not.toEqual(dots)
   })
 
+  it('a wide soft line beside the ridge runs on over the back without a step', () => {
+    const ring = [1, -1].flatMap(side => Array.from({ length: 300 }, (_, k) => [0.45, 0.001 + 0.0016 * (side > 0 ? 299 - k : k), side as 1 | -1] as const))
+    const keep = depositKeep(samplesAt(minnow, ring), minnow)
+    const out = new Float32Array(ring.length)
+    layMarks(keep, [Mark.parse({
+      kind: 'strokes', with: 'airbrush', strokes: [{ points: [[0.3, 0.12], [0.6, 0.12]], width: [4, 4], amount: [1, 1] }],
+    })], 1, out)
+    for (let k = 1; k < out.length; k++) expect(Math.abs((out[k] ?? 0) - (out[k - 1] ?? 0))).toBeLessThan(0.01)
+    expect(out[299]).toBeGreaterThan(1.2)
+  })
+
   it('a worm track is about as wide as it says, and tracks cover part of the back', () => {
     const worms = laid({ kind: 'worm tracks', seed: 2, wavelength: 3.1, width: 0.62 })
     const cover = worms.reduce((a, b) => a + b, 0) / view.count
