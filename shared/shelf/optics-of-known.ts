@@ -1,4 +1,4 @@
-import type { PaintKnown } from './paint'
+import type { Lab, PaintKnown } from './paint'
 import { paintOpticsFrom, type PaintOptics } from '#shared/optics/paint-optics'
 
 /**
@@ -23,15 +23,17 @@ export function opticsOfKnown(known: PaintKnown): PaintOptics {
   }
 }
 
-function flakeOptics({ oxide, thickness, flakesPerPass, sigma, edge, tint }: Extract<PaintKnown, { how: 'flake' }>): PaintOptics {
+function flakeOptics({ oxide, thickness, wanted, flakesPerPass, sigma, edge, tint }: Extract<PaintKnown, { how: 'flake' }>): PaintOptics {
   const bare = oxide === 'aluminium'
     ? paintOpticsFrom({ how: 'metallic', flakesPerPass, sigma, edge })
-    : paintOpticsFrom({ how: 'interference', oxide, thickness: thickness ?? required(), flakesPerPass, sigma, edge })
+    : paintOpticsFrom({ how: 'interference', oxide, ...toldBy(thickness, wanted), flakesPerPass, sigma, edge })
   if (!tint) return bare
   const dye = paintOpticsFrom({ how: 'dye-over-white', overWhite: tint.overWhite, passes: tint.passes })
-  return { ...bare, K: dye.K, S: dye.S }
+  return { ...bare, K: dye.K, S: dye.S, clipped: dye.clipped }
 }
 
-function required(): never {
-  throw new RangeError('A pearl needs the thickness of its oxide layer, in nm.')
+function toldBy(thickness: number | undefined, wanted: Lab | undefined): { thickness: number } | { wanted: Lab } {
+  if (thickness !== undefined) return { thickness }
+  if (wanted !== undefined) return { wanted }
+  throw new RangeError('A pearl needs the colour its face should have, or the thickness of its oxide layer in nm.')
 }

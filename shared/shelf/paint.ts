@@ -32,8 +32,10 @@ export const PaintKnown = z.discriminatedUnion('how', [
   z.object({
     how: z.literal('flake'),
     oxide: z.enum(['anatase', 'rutile', 'hematite', 'aluminium']),
-    /** Oxide thickness, nm; not asked of aluminium. */
+    /** Oxide thickness, nm; not asked of aluminium, nor where the wanted face is told. */
     thickness: z.number().min(20).max(250).optional(),
+    /** Colour the face should have: the engine finds the thickness of the same hue. */
+    wanted: Lab.optional(),
     /** Mean flakes over a point, per pass. */
     flakesPerPass: z.number().positive().max(3),
     /** Spread of the flakes' tilt, degrees. */

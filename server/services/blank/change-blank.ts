@@ -7,6 +7,7 @@ import { blanks } from '#server/db/tables'
 import type { BlankChange, BlankDraft, BlankView } from '#shared/blank/blank-view'
 import { Problem } from '#shared/errors/problem'
 import { blankView } from './blank-view'
+import { schemesOn } from './schemes-on'
 
 /** Adds a blank of the workshop's own. */
 export async function addBlank(ctx: Ctx, draft: BlankDraft): Promise<BlankView> {
@@ -21,14 +22,15 @@ export async function addBlank(ctx: Ctx, draft: BlankDraft): Promise<BlankView> 
 export async function changeBlank(ctx: Ctx, blankId: string, version: number, change: BlankChange): Promise<BlankView> {
   assertMay(ctx, 'blank:change')
   return inTransaction(ctx, async (tx) => {
-    const [row] = await tx.db.select().from(blanks)
-      .where(and(eq(blanks.id, blankId), eq(blanks.workshopId, tx.workshopId))).for('update')
-    if (!row) throw new Problem({ code: 'blank/not-found' })
+    const [found] = await tx.db.select({ row: blanks, schemes: schemesOn }).from(blanks)
+      .where(and(eq(blanks.id, blankId), eq(blanks.workshopId, tx.workshopId))).for('update', { of: blanks })
+    if (!found) throw new Problem({ code: 'blank/not-found' })
+    const { row, schemes } = found
     if (row.version !== version) throw new Problem({ code: 'blank/changed-meanwhile' })
     if (row.builtIn && !isDeepStrictEqual(row.shape, change.shape)) throw new Problem({ code: 'blank/built-in' })
     const [changed] = await tx.db.update(blanks)
       .set({ name: change.name, shape: change.shape, retired: change.retired ?? row.retired, version: version + 1 })
-      .where(eq(blanks.id, blankId)).returning()
-    return blankView(changed!, 0)
+      .where(and(eq(blanks.id, blankId), eq(blanks.workshopId, tx.workshopId))).returning()
+    return blankView(changed!, schemes)
   })
 }

@@ -26,7 +26,7 @@ export async function changeMask(ctx: Ctx, maskId: string, version: number, chan
     if (row.version !== version) throw new Problem({ code: 'mask/changed-meanwhile' })
     const [changed] = await tx.db.update(masks)
       .set({ name: change.name, form: change.form, retired: change.retired ?? row.retired, version: version + 1 })
-      .where(eq(masks.id, maskId)).returning()
+      .where(and(eq(masks.id, maskId), eq(masks.workshopId, tx.workshopId))).returning()
     return maskView(changed!)
   })
 }

@@ -1,4 +1,4 @@
-import { and, asc, eq, sql } from 'drizzle-orm'
+import { and, asc, eq } from 'drizzle-orm'
 import type { Ctx } from '#server/services/ctx'
 import { inTransaction } from '#server/services/in-transaction'
 import { assertMay } from '#server/services/people/assert-may'
@@ -6,8 +6,7 @@ import { blanks } from '#server/db/tables'
 import type { BlankView } from '#shared/blank/blank-view'
 import { Problem } from '#shared/errors/problem'
 import { blankView } from './blank-view'
-
-const schemesOn = sql<number>`(select count(*)::int from schemes s where s.blank_id = blanks.id and not s.retired)`
+import { schemesOn } from './schemes-on'
 
 /** Every blank of the workshop, by name, with how many schemes are painted on it. */
 export async function listBlanks(ctx: Ctx): Promise<BlankView[]> {

@@ -34,7 +34,7 @@ export async function changePaint(ctx: Ctx, paintId: string, version: number, ch
     }
     const [paint] = await tx.db.update(paints)
       .set({ ...paintValues(change), retired: change.retired ?? row.paint.retired, opticsId, version: version + 1, changedAt: new Date() })
-      .where(eq(paints.id, paintId)).returning()
+      .where(and(eq(paints.id, paintId), eq(paints.workshopId, tx.workshopId))).returning()
     return paintView(paint!, data, tx.role)
   })
 }

@@ -19,10 +19,12 @@ export async function getPaint(ctx: Ctx, paintId: string): Promise<PaintView> {
   })
 }
 
-/** The schemes whose draft lays this paint. */
+/** The schemes whose draft lays this paint, by name, or paint/not-found. */
 export async function listPaintUses(ctx: Ctx, paintId: string): Promise<PaintUse[]> {
   assertMay(ctx, 'shelf:read')
   return inTransaction(ctx, async (tx) => {
+    const [paint] = await tx.db.select({ id: paints.id }).from(paints).where(and(eq(paints.id, paintId), eq(paints.workshopId, tx.workshopId)))
+    if (!paint) throw new Problem({ code: 'paint/not-found' })
     const uses = sql`jsonb_path_exists(${schemes.draft}, '$.stack[*].coat.mix.parts[*] ? (@.paintId == $id)', jsonb_build_object('id', ${paintId}::text))`
     return tx.db.select({ schemeId: schemes.id, name: schemes.name }).from(schemes)
       .where(and(eq(schemes.workshopId, tx.workshopId), eq(schemes.retired, false), uses))

@@ -1,4 +1,4 @@
-import { and, asc, eq, sql } from 'drizzle-orm'
+import { asc, eq, sql } from 'drizzle-orm'
 import type { Ctx } from '#server/services/ctx'
 import { inTransaction } from '#server/services/in-transaction'
 import { assertMay } from '#server/services/people/assert-may'
@@ -15,7 +15,7 @@ export async function listPaints(ctx: Ctx): Promise<PaintListItem[]> {
         and jsonb_path_exists(s.draft, '$.stack[*].coat.mix.parts[*] ? (@.paintId == $id)', jsonb_build_object('id', ${paints.id})))`
     const rows = await tx.db.select({ paint: paints, optics: paintOptics.data, schemes: used })
       .from(paints).innerJoin(paintOptics, eq(paintOptics.id, paints.opticsId))
-      .where(and(eq(paints.workshopId, tx.workshopId)))
+      .where(eq(paints.workshopId, tx.workshopId))
       .orderBy(asc(paints.name), asc(paints.id))
     return rows.map(row => paintListItem(row.paint, row.optics, row.schemes, tx.role))
   })

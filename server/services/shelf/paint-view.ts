@@ -3,8 +3,8 @@ import type { Role } from '#shared/people/roles'
 import { may } from '#shared/people/may'
 import type { StoredOptics } from '#shared/scheme/materials'
 import type { PaintListItem, PaintView } from '#shared/shelf/paint-view'
-import { paintSwatches } from '#shared/shelf/paint-swatches'
 import { paintTrust } from '#shared/shelf/paint-trust'
+import { swatchesOf } from './swatch-keep'
 
 export type PaintRow = typeof paints.$inferSelect
 
@@ -28,7 +28,7 @@ export function paintView(row: PaintRow, optics: StoredOptics, role: Role): Pain
     pricePerMl: may(role, 'shelf:cost') ? row.pricePerMl ?? undefined : undefined,
     opticsId: row.opticsId,
     optics,
-    swatches: paintSwatches(optics),
+    swatches: swatchesOf(row.opticsId, optics),
     trust: paintTrust(row.known, optics),
     retired: row.retired,
     version: row.version,
