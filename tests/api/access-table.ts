@@ -1,10 +1,12 @@
 import type { AccessRow } from './access/row'
+import { BENCH_ACCESS } from './access/bench'
 import { PEOPLE_ACCESS } from './access/people'
 import { SCHEME_ACCESS } from './access/scheme'
 import { SHELF_ACCESS } from './access/shelf'
 
 /** Every route and who gets what from it. */
 export const ACCESS_TABLE: readonly AccessRow[] = [
+  ...BENCH_ACCESS,
   ...PEOPLE_ACCESS,
   ...SCHEME_ACCESS,
   ...SHELF_ACCESS,

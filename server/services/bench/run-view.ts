@@ -1,0 +1,42 @@
+import type { RunWithFinish } from './run-in-workshop'
+import { partsOf, partToDo } from '#shared/bench/run-parts'
+import { runState } from '#shared/bench/run-state'
+import { runSteps } from '#shared/bench/run-steps'
+import { stepName } from '#shared/bench/step-words'
+import type { RunEventView, RunListItem, RunView } from '#shared/bench/run-view'
+
+function runBase({ run, schemeName, revision, startedByName }: RunWithFinish) {
+  return {
+    id: run.id,
+    number: run.number,
+    scheme: { id: run.schemeId, name: schemeName },
+    revision,
+    pieces: run.pieces,
+    startedAt: run.startedAt.toISOString(),
+    startedBy: run.startedBy !== null && startedByName !== null ? { id: run.startedBy, name: startedByName } : null,
+    finishedAt: run.finishedAt?.toISOString() ?? null,
+  }
+}
+
+/** A run in a list, with where its acts have brought it. */
+export function runListItem(row: RunWithFinish, events: readonly RunEventView[], now: number): RunListItem {
+  const { body, materials, run } = row
+  const plan = { steps: runSteps({ body, materials }, run.pieces), pieces: run.pieces }
+  const state = runState(events)
+  const step = partToDo(plan, state, now)?.step
+  const looks = [...state.inspected].filter(([piece]) => !state.aside.has(piece))
+  return {
+    ...runBase(row),
+    stands: step && run.finishedAt === null ? stepName(step) : null,
+    stepsDone: partsOf(plan, state)[0]?.index ?? 0,
+    steps: plan.steps.length,
+    passed: looks.filter(([, look]) => look.passed).length,
+    failed: looks.filter(([, look]) => !look.passed).length,
+    setAside: state.aside.size,
+  }
+}
+
+/** A run as the bench follows it. */
+export function runView(row: RunWithFinish, events: RunEventView[]): RunView {
+  return { ...runBase(row), body: row.body, materials: row.materials, headNumber: row.headNumber, events }
+}

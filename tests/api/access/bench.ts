@@ -1,0 +1,29 @@
+import { act, publishedScheme, testRun } from '../bench/ground'
+import type { AccessRow, Ground, Who } from './row'
+
+/** Those at the bench; the front desk never, a stranger finds nothing. */
+const atBench = (status: number, stranger = 404): Record<Who, number> => ({ owner: status, painter: status, bench: status, desk: 403, stranger, signedOut: 401 })
+
+const runOf = async ({ owner }: Ground) => (await testRun(owner, { secret: 'planted coat' })).run
+const SECRET = ['Perch in bars', 'planted coat']
+
+/** Runs and what was done in them. */
+export const BENCH_ACCESS: AccessRow[] = [
+  {
+    method: 'GET', path: '/api/runs', who: atBench(200, 200),
+    make: async (ground) => {
+      const run = await runOf(ground)
+      return { url: '/api/runs', secret: [...SECRET, run.id] }
+    },
+  },
+  {
+    method: 'POST', path: '/api/runs', who: atBench(201),
+    make: async ({ owner }) => ({ url: '/api/runs', body: { schemeId: (await publishedScheme(owner)).schemeId, revision: 1, pieces: 6 } }),
+  },
+  { method: 'GET', path: '/api/runs/[runId]', who: atBench(200), make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}`, secret: SECRET }) },
+  { method: 'GET', path: '/api/runs/[runId]/events', who: atBench(200), make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/events?since=0`, secret: SECRET }) },
+  {
+    method: 'POST', path: '/api/runs/[runId]/events', who: atBench(200),
+    make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/events`, body: { events: [act({ v: 1, kind: 'step-done', stepId: 'prepare' })] } }),
+  },
+]
