@@ -16,7 +16,9 @@ const RIM = 0.8
 const TOWARD_NOSE = 0.06
 /** The lens throws light through the iris to its far side: darker above, brighter below. */
 const LENS = 0.42
-const STREAKS = 0.2
+const STREAKS = 0.28
+/** Foil behind a dome sees less of the tent than paint does. */
+const FOIL = 0.78
 /** An eye is polished: its highlight outshines the clear round it. */
 const SHINE = 1.25
 
@@ -78,7 +80,7 @@ function eyeLight(eye: DrawnEye, colours: EyeColours, a: number, b: number, soft
   // A fine bright ring where the foil turns in to the pupil, and a dark seat round the whole eye.
   const ring = 1 + 0.35 * Math.exp(-(((q - PUPIL - 0.05) / 0.05) ** 2))
   const seat = 1 - 0.75 * smooth(0.93, 1, q)
-  const foil = streak * ring * (1 - LENS * b) * (0.92 + 0.25 * smooth(0.5, 0.75, q))
+  const foil = FOIL * streak * ring * (1 - LENS * b) * (0.9 + 0.3 * smooth(0.5, 0.75, q))
   for (let c = 0; c < 3; c++) {
     const iris = colours.iris[c]! * foil
     const ringed = iris + (colours.rim[c]! - iris) * toRim
