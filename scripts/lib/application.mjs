@@ -42,13 +42,16 @@ function sourcesStamp() {
 
 const isBuilt = () => existsSync(SERVER) && existsSync(STAMP) && readFileSync(STAMP, 'utf8') === sourcesStamp()
 
-/** Builds the application when it is not built yet, or was built from something else. */
-export async function ensureBuild() {
+/**
+ * Builds the application when it is not built yet, or was built from something else.
+ * @param {typeof step} tell how the work is told
+ */
+export async function ensureBuild(tell = step) {
   if (isBuilt()) return
   await inTurn(LOCK, 'the application is being built', async () => {
     if (isBuilt()) return
     const stamp = sourcesStamp()
-    await step('Building the application', () => runOrHalt('The build', process.execPath, [join(ROOT, 'scripts/build.mjs')], { cwd: ROOT }))
+    await tell('Building the application', () => runOrHalt('The build', process.execPath, [join(ROOT, 'scripts/build.mjs')], { cwd: ROOT }))
     if (!existsSync(SERVER)) throw new Halt('The build ended without making a server.')
     writeFileSync(STAMP, stamp)
   })

@@ -21,7 +21,7 @@ export function say(text) {
 /** @param {number} since from `Date.now()` */
 export const secondsSince = since => `${((Date.now() - since) / 1000).toFixed(1)} s`
 
-const STILL_EVERY_MS = 15_000
+const STILL_EVERY_MS = 20_000
 
 /**
  * Says what begins, that it still goes on, and how long it took.
@@ -33,10 +33,10 @@ const STILL_EVERY_MS = 15_000
 export async function step(what, work) {
   const since = Date.now()
   say(`· ${what}`)
-  const still = setInterval(() => say(`  … still at it: ${what} (${secondsSince(since)})`), STILL_EVERY_MS)
+  const still = setInterval(() => say(`  … ${what} (${secondsSince(since)})`), STILL_EVERY_MS)
   try {
     const result = await work()
-    say(`  done in ${secondsSince(since)}`)
+    say(`  done: ${what} (${secondsSince(since)})`)
     return result
   }
   finally {

@@ -84,7 +84,7 @@ export async function openTestApplication({ dataDir, env: test }, closing) {
     NUXT_SESSION_PASSWORD: SECRET,
     AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
   }
-  await seedDemo(env)
+  await seedDemo(env, { show: false })
   const { output } = await serve({ args: BUILT_SERVER, env, host: '127.0.0.1', port, stdio: 'pipe' }, closing)
   return { output, env: { TEST_BASE_URL: baseUrl, TEST_DEMO_SIGN_INS: join(dataDir, 'demo-sign-ins.json') } }
 }

@@ -44,7 +44,7 @@ const vitest = project => async (/** @type {Ground} */ ground) => {
 /** @returns {Promise<Outcome>} */
 async function buildStep() {
   try {
-    await ensureBuild()
+    await ensureBuild((_, work) => work())
     return { counts: checkCounts(0), output: '' }
   }
   catch (error) {

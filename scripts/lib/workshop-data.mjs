@@ -42,12 +42,13 @@ export async function migrateOutsideDatabase(ownerUrl) {
 /**
  * Fills an empty database with the demo workshop.
  * @param {NodeJS.ProcessEnv} env as the server gets it
+ * @param {{ show: boolean }} options whether its progress is shown
  */
-export async function seedDemo(env) {
+export async function seedDemo(env, { show }) {
   await step('Setting up the demo workshop', async () => {
     const bundle = await bundleTypeScript('scripts/seed.ts')
     try {
-      await runOrHalt('Setting up the demo workshop', process.execPath, ['--enable-source-maps', bundle], { cwd: ROOT, env })
+      await runOrHalt('Setting up the demo workshop', process.execPath, ['--enable-source-maps', bundle], { cwd: ROOT, env, show })
     }
     finally {
       await rm(bundle, { force: true })
@@ -68,7 +69,7 @@ export async function openDemoDatabase(adminUrl, dataDir, envFor) {
   const { isEmpty, ...addresses } = await openLocalDatabase(adminUrl)
   if (isEmpty) {
     writeFileSync(unfinished, 'The demo workshop is not complete while this file is here.\n')
-    await seedDemo(envFor(addresses))
+    await seedDemo(envFor(addresses), { show: true })
   }
   rmSync(unfinished, { force: true })
   return addresses
