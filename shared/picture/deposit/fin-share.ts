@@ -8,8 +8,10 @@ import { normalShare } from './normal-share'
 type FinPaint = Where['fins'][number]
 
 /** Widths nobody gave, mm at a body of 100 mm. */
-const WIDTH = { 'rays': 0.3, 'leading edge': 0.9, 'rim': 0.9, 'spots': 0.55 }
+const WIDTH = { 'rays': 0.45, 'leading edge': 0.9, 'rim': 0.9, 'spots': 0.55 }
 const EDGE_SOFT = 0.08
+/** How much thinner a ray's line is at the tip. */
+const RAY_THINS = 0.5
 /** A rim is misted on: how soft, as a share of its width. */
 const RIM_SOFT = 0.35
 /** Spots stand in bows across the rays: rows and gaps in widths of a spot, and their length along the ray. */
@@ -33,7 +35,7 @@ export function layFinShare(keep: DepositKeep, fins: Where['fins'], out: Float32
 function finMap(keep: DepositKeep, on: Exclude<FinPaint['on'], 'whole'>, width: number): Float32Array {
   return keptMap(keep, 'marks', `fins ${on} ${width}`, () => {
     const out = new Float32Array(keep.samples.count)
-    const { U, V, part, rim } = keep.samples
+    const { U, V, part, rim, rootToTip } = keep.samples
     const edges = keep.blank.fins.map(fin => (on === 'leading edge' ? leadingEdges(fin) : []))
     for (const i of keep.onFins) {
       const index = (part[i] ?? 0) - PART_FIN
@@ -43,7 +45,7 @@ function finMap(keep: DepositKeep, on: Exclude<FinPaint['on'], 'whole'>, width: 
       const y = fin.rootY + (V[i] ?? 0)
       switch (on) {
         case 'rays':
-          out[i] = rayShare(fin, x, y, width)
+          out[i] = rayShare(fin, x, y, width * (1 - RAY_THINS * (rootToTip[i] ?? 0)))
           break
         case 'leading edge':
           out[i] = normalShare((width - distanceTo(fin, edges[index] ?? [], x, y)) / EDGE_SOFT)
