@@ -1,4 +1,5 @@
 import { type Coat, PASSES_MAX } from './coat'
+import { coatFault, groundFault, maskFault } from './field-faults'
 import type { Mask } from './mask'
 import { COATS_MAX, type Eyes, type Ground, MASKS_MAX, type SchemeBody, type StackItem } from './body'
 import { carryCoat, coatsOf, maskWord, moveItem, rowOfCoat, rowsOfMask, type StackOutcome } from './stack-order'
@@ -45,12 +46,16 @@ function changeCoat(body: SchemeBody, coatId: string, change: Partial<Omit<Coat,
   const row = rowOfCoat(body.stack, coatId)
   const item = body.stack[row]
   if (item?.act !== 'coat') return refuse(NO_COAT)
+  const fault = coatFault(change)
+  if (fault !== null) return refuse(fault)
   return { ok: true, body: { ...body, stack: body.stack.with(row, { act: 'coat', coat: { ...item.coat, ...change, id: coatId } }) } }
 }
 
 function addCoat(body: SchemeBody, coat: Coat, row: number): EditOutcome {
   if (coatsOf(body.stack).length >= COATS_MAX) return refuse(`A scheme has at most ${COATS_MAX} coats.`)
   if (rowOfCoat(body.stack, coat.id) >= 0) return refuse('That coat is in this scheme already.')
+  const fault = coatFault(coat)
+  if (fault !== null) return refuse(fault)
   if (!Number.isInteger(row) || row < 0 || row > body.stack.length) return refuse('A coat lies on the ground or on another coat.')
   return { ok: true, body: { ...body, stack: body.stack.toSpliced(row, 0, { act: 'coat', coat }) } }
 }
@@ -74,12 +79,16 @@ function spanned(stack: readonly StackItem[], maskId: string, over: Span): Stack
 function addMask(body: SchemeBody, mask: Mask, over: Span): EditOutcome {
   if (body.masks.length >= MASKS_MAX) return refuse(`A scheme has at most ${MASKS_MAX} masks.`)
   if (body.masks.some(each => each.id === mask.id)) return refuse('That mask is in this scheme already.')
+  const fault = maskFault(mask)
+  if (fault !== null) return refuse(fault)
   const stack = spanned(body.stack, mask.id, over)
   return typeof stack === 'string' ? refuse(stack) : { ok: true, body: { ...body, masks: [...body.masks, mask], stack } }
 }
 
 function changeMask(body: SchemeBody, maskId: string, change: Partial<Omit<Mask, 'id'>>): EditOutcome {
   if (!body.masks.some(mask => mask.id === maskId)) return refuse(NO_MASK)
+  const fault = maskFault(change)
+  if (fault !== null) return refuse(fault)
   return { ok: true, body: { ...body, masks: body.masks.map(mask => mask.id === maskId ? { ...mask, ...change, id: maskId } : mask) } }
 }
 
@@ -121,7 +130,10 @@ export function applyEdit(body: SchemeBody, edit: SchemeEdit): EditOutcome {
     case 'change-mask': return changeMask(body, edit.maskId, edit.change)
     case 'span-mask': return spanMask(body, edit.maskId, edit.over)
     case 'remove-mask': return removeMask(body, edit.maskId)
-    case 'change-ground': return { ok: true, body: { ...body, ground: edit.ground } }
+    case 'change-ground': {
+      const fault = groundFault(edit.ground)
+      return fault === null ? { ok: true, body: { ...body, ground: edit.ground } } : refuse(fault)
+    }
     case 'set-eyes': return { ok: true, body: { ...body, eyes: edit.eyes } }
     case 'choose-blank': return { ok: true, body: { ...body, blankId: edit.blankId } }
     case 'replace-body': return { ok: true, body: edit.body }

@@ -8,7 +8,7 @@ import { Problem } from '#shared/errors/problem'
 import { applyEdit, editField, type SchemeEdit, editWords } from '#shared/scheme/edits'
 import { type History, record, redo, startHistory, undo } from '#shared/scheme/history'
 import { sameValue } from '#shared/scheme/canonical'
-import type { SchemeBody } from '#shared/scheme/body'
+import { SchemeBody } from '#shared/scheme/body'
 import type { Materials } from '#shared/scheme/materials'
 import type { DraftSavedView, RevisionView, SchemeView } from '#shared/scheme/scheme-view'
 
@@ -61,6 +61,11 @@ export interface DraftPorts {
 /** What keeping a draft needs from the device. */
 export interface DevicePorts { shelf: DraftShelf, later: KeeperPorts['later'] }
 
+/** A body as the server keeps it: spaces round names taken off. */
+function asStored(body: SchemeBody): SchemeBody {
+  return SchemeBody.safeParse(body).data ?? body
+}
+
 function failureOf(error: unknown): SaveFailure {
   const problem = problemOf(error)
   if (problem?.code === 'scheme/changed-meanwhile') return { why: 'changed meanwhile' }
@@ -79,9 +84,9 @@ export function workOnDraft(scheme: SchemeView, draft: OpenDraft, ports: DraftPo
 
   /** Goes on from the server's version where nobody's work is at stake; null when a person has to choose. */
   function onward(theirs: SchemeView): SchemeBody | 'nothing' | null {
-    if (sameValue(theirs.draft, present())) return 'nothing'
+    if (sameValue(theirs.draft, asStored(present()))) return 'nothing'
     // Only the name or the fish changed, or what arrived is one's own save whose answer got lost.
-    const isKnown = [draft.base, ...draft.sent].some(known => sameValue(theirs.draft, known))
+    const isKnown = [draft.base, ...draft.sent].some(known => sameValue(theirs.draft, asStored(known)))
     return isKnown ? present() : null
   }
 

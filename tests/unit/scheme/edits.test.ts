@@ -86,6 +86,16 @@ describe('coats', () => {
     expect(applyEdit(body(1), { do: 'set-passes', coatId: c(1), passes })).toEqual({ ok: false, because: 'A coat has 1 to 30 whole passes.' })
   })
 
+  it('are never set to what cannot be saved, and the limit is named', () => {
+    const refused = (change: Extract<SchemeEdit, { do: 'change-coat' }>['change']) => applyEdit(body(1), { do: 'change-coat', coatId: c(1), change })
+    expect(refused({ name: 'x'.repeat(81) })).toEqual({ ok: false, because: 'Name: at most 80 characters.' })
+    expect(refused({ rest: -1 })).toEqual({ ok: false, because: 'Rest: at least 0.' })
+    expect(refused({ name: 'bars', passes: 99 })).toEqual({ ok: false, because: 'Passes: at most 30.' })
+    expect(refused({ mix: { parts: Array.from({ length: 7 }, (_, i) => ({ paintId: id('paint', i), drops: 1 })), reducer: 0 } })).toEqual({ ok: false, because: 'Mix: at most 6 of them.' })
+    expect(applyEdit(body(1), { do: 'add-coat', coat: coat(2, { passes: 0 }), row: 0 })).toEqual({ ok: false, because: 'Passes: at least 1.' })
+    expect(applyEdit(body(1), { do: 'change-ground', ground: { ...body(1).ground, name: ' ' } })).toEqual({ ok: false, because: 'Name of the ground: at least 1 character.' })
+  })
+
   it('are at most 60', () => {
     const full = body(...Array.from({ length: 60 }, (_, i) => i + 1))
     expect(applyEdit(full, { do: 'add-coat', coat: coat(99), row: 0 })).toEqual({ ok: false, because: 'A scheme has at most 60 coats.' })
