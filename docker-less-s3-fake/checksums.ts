@@ -30,7 +30,9 @@ const ALGORITHMS: Record<string, (bytes: Uint8Array) => string> = {
 const PREFIX = 'x-amz-checksum-'
 const NOT_A_SUM = new Set(['mode', 'algorithm', 'type'])
 
+/** MD5 of some bytes in hex: what S3 calls the ETag. */
 export const md5Hex = (bytes: Uint8Array) => createHash('md5').update(bytes).digest('hex')
+/** SHA-256 of some bytes in hex. */
 export const sha256Hex = (bytes: Uint8Array | string) => createHash('sha256').update(bytes).digest('hex')
 
 /**

@@ -28,10 +28,12 @@ export interface S3Answer {
 /** Longest key S3 takes, in bytes. */
 const KEY_BYTES_MAX = 1024
 
+/** The first value of a query parameter. */
 export function param(request: Pick<S3Request, 'query'>, name: string): string | undefined {
   return request.query.find(([given]) => given === name)?.[1]
 }
 
+/** An answer in XML. */
 export function xmlAnswer(root: string, content: XmlElements, status = 200, headers: Record<string, string> = {}): S3Answer {
   return { status, headers: { 'content-type': 'application/xml', ...headers }, body: xmlDocument(root, content) }
 }

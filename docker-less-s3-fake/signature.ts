@@ -4,6 +4,7 @@ import { accessDenied, signatureDoesNotMatch } from './s3-error'
 
 // AWS Signature Version 4 as its public documentation describes it ("Authenticating Requests", Amazon S3 API reference).
 
+/** The one way of signing that is known here. */
 export const ALGORITHM = 'AWS4-HMAC-SHA256'
 
 /** Who may come in, and where they must think they are. */
@@ -20,6 +21,7 @@ export interface Scope {
   text: string
 }
 
+/** HMAC-SHA-256 of a text. */
 export const hmac = (key: string | Buffer, text: string) => createHmac('sha256', key).update(text).digest()
 
 /** Percent-encodes as RFC 3986 asks: everything but letters, digits and `-_.~`. */
