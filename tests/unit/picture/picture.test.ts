@@ -8,7 +8,11 @@ import { renderLook } from '#shared/picture/render'
 import { ember } from '../../fixtures/looks/ember'
 import { perch } from '../../fixtures/looks/perch'
 
-const SIZE = { width: 240, height: 120 }
+/** Coarse pictures of 160 by 80: what is asked here does not hang on fine edges. */
+const SIZE = { width: 640, height: 320, quality: 'coarse' } as const
+const PIXELS = 160 * 80
+/** Whole pictures take their time where many tests share two cores. */
+const TIMEOUT = { timeout: 30_000 }
 const bench = pictureBench()
 
 function meanLab({ rgba }: Picture): Lab {
@@ -22,7 +26,7 @@ function meanLab({ rgba }: Picture): Lab {
   return labFromXyz(xyzFromLinearRgb(sum.map(value => value / count) as [number, number, number]))
 }
 
-describe('the surround', () => {
+describe('the surround', TIMEOUT, () => {
   const empty = bench.draw(ember, { ...SIZE, surround: null })
   it.each([0, 119, 146, 255])('is exactly the grey asked for wherever the blank does not reach: %i', (grey) => {
     const picture = bench.draw(ember, { ...SIZE, surround: grey })
@@ -32,7 +36,7 @@ describe('the surround', () => {
       bare++
       expect([...picture.rgba.subarray(i, i + 4)]).toEqual([grey, grey, grey, 255])
     }
-    expect(bare).toBeGreaterThan(0.4 * SIZE.width * SIZE.height)
+    expect(bare).toBeGreaterThan(0.4 * PIXELS)
   })
 
   it('stays neutral under a shadow', () => {
@@ -48,14 +52,13 @@ describe('the surround', () => {
   })
 })
 
-describe('a picture', () => {
+describe('a picture', TIMEOUT, () => {
   it('is the same whenever the same is asked for', () => {
-    const small = { width: 96, height: 48 }
-    expect(renderLook(ember, small).rgba).toEqual(renderLook(ember, small).rgba)
+    expect(renderLook(ember, SIZE).rgba).toEqual(renderLook(ember, SIZE).rgba)
   })
 
   it('comes coarse first, at a quarter of the size, and hardly changes colour as it is refined', () => {
-    const stages = [...bench.stages(perch, { ...SIZE, width: 400, height: 200, surround: null })]
+    const stages = [...bench.stages(perch, { width: 400, height: 200, surround: null })]
     expect(stages.map(({ width }) => width)).toEqual([100, 400, 400])
     const [coarse, , fine] = stages.map(meanLab)
     expect(deltaE2000(coarse!, fine!)).toBeLessThan(1)
@@ -73,10 +76,10 @@ describe('a picture', () => {
     if (item?.act !== 'coat') throw new Error('the perch has a seventh coat')
     for (const passes of [1, 5, 2]) {
       item.coat.passes = passes
-      kept.draw(edited, { ...SIZE, width: 120, height: 60 })
+      kept.draw(edited, SIZE)
     }
-    const afresh = renderLook(edited, { ...SIZE, width: 120, height: 60 }).rgba
-    const again = kept.draw(edited, { ...SIZE, width: 120, height: 60 }).rgba
+    const afresh = renderLook(edited, SIZE).rgba
+    const again = kept.draw(edited, SIZE).rgba
     expect(Math.max(...afresh.map((value, i) => Math.abs(value - again[i]!)))).toBeLessThanOrEqual(1)
   })
 
@@ -86,9 +89,9 @@ describe('a picture', () => {
   })
 
   it('tells what lies where somebody points', () => {
-    const options = { ...SIZE }
-    const { origin, mmPerPixel } = bench.draw(perch, options)
-    const at = (x: number, y: number) => bench.pick(perch, options, origin[0] + x / mmPerPixel, origin[1] - y / mmPerPixel)
+    const options = { width: 320, height: 160, quality: 'coarse' } as const
+    const { mmPerPixel, origin } = bench.draw(perch, options)
+    const at = (x: number, y: number) => bench.pick(perch, options, 4 * (origin[0] + x / mmPerPixel), 4 * (origin[1] - y / mmPerPixel))
     expect(at(40, 9)).toMatchObject({ along: 'trunk', side: 1 })
     expect(at(40, 11)?.zone).toBe('back')
     expect(at(40, -11)?.zone).toBe('belly')

@@ -15,7 +15,7 @@ const ALL = { upTo: 'all', clear: true, light: 'bench' } as const
 const coatIds = (look: typeof perch) => look.body.stack.flatMap(item => item.act === 'coat' ? [item.coat.id] : [])
 const of = (look: typeof perch, wish: Parameters<typeof zoneColours>[1] = ALL) => new Map(zoneColours(look, wish, bench).map(zone => [zone.zone, zone]))
 
-describe('promised colours', () => {
+describe('promised colours', { timeout: 30_000 }, () => {
   it('has one for every zone of the flank and every fin', () => {
     expect([...of(perch).keys()]).toEqual(['back', 'upper-flank', 'lower-flank', 'belly', 'head', 'gill-cover', 'tail', ...perch.materials.blank.shape.fins.map(fin => `fin:${fin.id}`)])
   })
