@@ -1,5 +1,6 @@
 import type { AccessRow } from './access/row'
 import { BENCH_ACCESS } from './access/bench'
+import { CARD_ACCESS } from './access/cards'
 import { PEOPLE_ACCESS } from './access/people'
 import { SCHEME_ACCESS } from './access/scheme'
 import { SHELF_ACCESS } from './access/shelf'
@@ -8,6 +9,7 @@ import { SHELF_ACCESS } from './access/shelf'
 export const ACCESS_TABLE: readonly AccessRow[] = [
   ...BENCH_ACCESS,
   ...PEOPLE_ACCESS,
+  ...CARD_ACCESS,
   ...SCHEME_ACCESS,
   ...SHELF_ACCESS,
 ]
