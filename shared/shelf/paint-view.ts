@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { PaintDraft } from './paint'
-import { StoredOptics } from '#shared/scheme/materials'
+import { StoredOptics } from '#shared/shelf/stored-optics'
 
 const Srgb = z.string().regex(/^#[0-9a-f]{6}$/)
 

@@ -35,7 +35,7 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
   'shared/api': ['shared/api', 'shared/errors'],
   'shared/people': ['shared/people', 'shared/errors'],
   'shared/blank': ['shared/blank', 'shared/quantities', 'shared/errors'],
-  'shared/shelf': ['shared/shelf', 'shared/optics', 'shared/scheme/materials', 'shared/quantities', 'shared/errors'],
+  'shared/shelf': ['shared/shelf', 'shared/optics', 'shared/quantities', 'shared/errors'],
   'shared/scheme': ['shared/scheme', 'shared/optics', 'shared/blank', 'shared/shelf', 'shared/api', 'shared/quantities', 'shared/errors'],
   'shared/picture': ['shared/picture', 'shared/scheme', 'shared/optics', 'shared/blank', 'shared/shelf', 'shared/quantities', 'shared/errors'],
   'shared/bench': ['shared/bench', 'shared/scheme', 'shared/picture', 'shared/blank', 'shared/shelf', 'shared/api', 'shared/quantities', 'shared/errors'],

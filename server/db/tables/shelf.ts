@@ -1,7 +1,7 @@
 import { boolean, doublePrecision, index, integer, jsonb, pgTable, text, timestamp, uuid, varchar } from 'drizzle-orm/pg-core'
 import { workshops } from './people'
 import { PAINT_BASES, PAINT_KINDS, PAINT_NAME_MAX, type PaintKnown } from '#shared/shelf/paint'
-import type { StoredOptics } from '#shared/scheme/materials'
+import type { StoredOptics } from '#shared/shelf/stored-optics'
 
 const at = (name: string) => timestamp(name, { withTimezone: true, mode: 'date' })
 

@@ -3,8 +3,9 @@ import type { Ctx } from '#server/services/ctx'
 import { blanks, paintOptics, paints } from '#server/db/tables'
 import { Problem } from '#shared/errors/problem'
 import type { SchemeBody } from '#shared/scheme/body'
-import type { Materials, PaintSnapshot, StoredOptics } from '#shared/scheme/materials'
+import type { Materials, PaintSnapshot } from '#shared/scheme/materials'
 import { usedPaintIds } from '#shared/scheme/used-materials'
+import type { StoredOptics } from '#shared/shelf/stored-optics'
 
 function paintSnapshot(row: typeof paints.$inferSelect, optics: StoredOptics): PaintSnapshot {
   return {

@@ -1,7 +1,7 @@
 import type { paints } from '#server/db/tables'
 import type { Role } from '#shared/people/roles'
 import { may } from '#shared/people/may'
-import type { StoredOptics } from '#shared/scheme/materials'
+import type { StoredOptics } from '#shared/shelf/stored-optics'
 import type { PaintListItem, PaintView } from '#shared/shelf/paint-view'
 import { paintTrust } from '#shared/shelf/paint-trust'
 import { swatchesOf } from './swatch-keep'

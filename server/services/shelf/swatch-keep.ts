@@ -1,4 +1,4 @@
-import type { StoredOptics } from '#shared/scheme/materials'
+import type { StoredOptics } from '#shared/shelf/stored-optics'
 import { paintSwatches } from '#shared/shelf/paint-swatches'
 import type { PaintSwatches } from '#shared/shelf/paint-view'
 
