@@ -15,7 +15,7 @@ import { untilStopped } from './lib/until-stopped.mjs'
 const LANES = [['build', 'api'], ['lint', 'types', 'unit', 'reference']]
 const ALONE = ['e2e']
 /** Steps that are of no use without another one. */
-const FIRST = /** @type {Record<string, string>} */ ({ e2e: 'build' })
+const FIRST = /** @type {Record<string, string>} */ ({ api: 'build', e2e: 'build' })
 
 function chosenSteps() {
   const asked = process.argv.slice(2)

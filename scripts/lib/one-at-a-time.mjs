@@ -1,12 +1,15 @@
 // One start per data folder, and one build per repository.
 import { mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
-import { dirname } from 'node:path'
+import { dirname, join } from 'node:path'
 import { setTimeout as delay } from 'node:timers/promises'
 import { processBirth } from './processes.mjs'
 import { Halt, say } from './say.mjs'
 
 /** @typedef {{ pid: number, birth?: string | undefined }} Named a process that cannot be mistaken for another */
 /** @typedef {{ holder: Named, children: Named[] }} Held */
+
+/** The file in a data folder that names who works on it. */
+export const HELD = 'running.json'
 
 /** @param {Named} named */
 function isAlive({ pid, birth }) {
@@ -82,7 +85,7 @@ export function takeLock(file) {
  * @param {string} dataDir
  */
 export function takeDataDir(dataDir) {
-  const file = `${dataDir}/running.json`
+  const file = join(dataDir, HELD)
   const lock = takeLock(file)
   if (lock) return lock
   throw new Halt(`Another start is running on ${dataDir} (process ${readHeld(file)?.holder.pid}).`, 'Stop it first, or start this one with another DATA_DIR and PORT.')

@@ -73,12 +73,15 @@ async function clusterFolder(dataDir) {
 }
 
 /**
- * Removes the cluster of a data folder that is done with; it must have been stopped.
+ * Removes the cluster of a data folder that is done with, ending its server when that was left running.
  * @param {string} dataDir
  */
-export function removeCluster(dataDir) {
+export async function removeCluster(dataDir) {
   const note = join(dataDir, NOTE)
-  rmSync(existsSync(note) ? readFileSync(note, 'utf8').trim() : join(dataDir, 'postgres'), { recursive: true, force: true })
+  const folder = existsSync(note) ? readFileSync(note, 'utf8').trim() : join(dataDir, 'postgres')
+  const data = join(folder, 'data')
+  if (leftRunning(data) !== undefined) await runAsServer([join(programsFor(data), 'pg_ctl'), '-D', data, '-w', '-s', '-m', 'immediate', 'stop'])
+  rmSync(folder, { recursive: true, force: true })
 }
 
 /** @param {string} data */

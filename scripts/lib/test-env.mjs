@@ -10,11 +10,12 @@
 //
 //   TEST_BASE_URL                the built application, with the demo workshop in it
 //   TEST_DEMO_SIGN_INS           file with the demo's sign-ins: [{ email, password, role }]
-import { chmodSync, mkdtempSync, rmSync } from 'node:fs'
+import { chmodSync, existsSync, mkdtempSync, readdirSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { BUILT_SERVER, serve } from './application.mjs'
 import { openMailSink, openPhotoStore, openPostgres, STORE } from './local-services.mjs'
+import { HELD, takeDataDir, takeLock } from './one-at-a-time.mjs'
 import { freePort } from './ports.mjs'
 import { removeCluster } from './postgres.mjs'
 import { openLocalDatabase, seedDemo } from './workshop-data.mjs'
@@ -22,18 +23,32 @@ import { openLocalDatabase, seedDemo } from './workshop-data.mjs'
 /** @typedef {import('./until-stopped.mjs').Closing} Closing */
 
 const SECRET = 'for tests only, and long enough for them'
+const FOLDER = 'countershade-test-'
 const BUCKETS = { api: 'countershade-test', browser: 'countershade-browser' }
+
+/** Removes what earlier runs left behind that were killed; a run that still goes on holds its folder. */
+async function sweepKilledRuns() {
+  for (const name of readdirSync(tmpdir()).filter(one => one.startsWith(FOLDER))) {
+    const folder = join(tmpdir(), name)
+    const held = join(folder, HELD)
+    if (!existsSync(held) || !takeLock(held)) continue
+    await removeCluster(folder)
+    rmSync(folder, { recursive: true, force: true })
+  }
+}
 
 /**
  * Starts the services and returns the environment that names them.
  * @param {Closing} closing
  */
 export async function openTestServices(closing) {
-  const dataDir = mkdtempSync(join(tmpdir(), 'countershade-test-'))
+  await sweepKilledRuns()
+  const dataDir = mkdtempSync(join(tmpdir(), FOLDER))
+  takeDataDir(dataDir)
   // PostgreSQL's own account must get through to its folder.
   chmodSync(dataDir, 0o711)
-  await closing.add('The folder of the tests', () => {
-    removeCluster(dataDir)
+  await closing.add('The folder of the tests', async () => {
+    await removeCluster(dataDir)
     rmSync(dataDir, { recursive: true, force: true })
   })
   const adminUrl = await openPostgres({ dataDir, isHasty: true }, closing)
