@@ -21,6 +21,9 @@ export interface AskOptions {
   headers?: Record<string, string>
 }
 
+/** The same object under the sealing library's own, older, name for its bytes. */
+const WEB_CRYPTO = crypto as unknown as Parameters<typeof seal>[0]
+
 const running: ChildProcess[] = []
 
 /** Starts the built server; it is built first when it is not, or when what it is made of has changed. Ends with the test file. */
@@ -61,7 +64,7 @@ export async function testServer(environment: Record<string, string> = {}): Prom
 /** The cookie a browser holds for somebody's session, sealed as the server seals it. */
 export async function cookieOf({ sessionId }: Pick<PersonCtx, 'sessionId'>): Promise<string> {
   const session = { id: crypto.randomUUID(), createdAt: Date.now(), data: { secure: { sessionId } } }
-  const sealed = await seal(crypto, session, process.env.SESSION_PASSWORD ?? '', { ...defaults, ttl: 3_600_000 })
+  const sealed = await seal(WEB_CRYPTO, session, process.env.SESSION_PASSWORD ?? '', { ...defaults, ttl: 3_600_000 })
   return `countershade=${sealed}`
 }
 
