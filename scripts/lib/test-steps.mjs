@@ -58,7 +58,7 @@ async function browserStep(ground) {
   if (!services) throw new Error('Browser tests need the services')
   const application = await openTestApplication(services, closing)
   const report = join(reports, 'e2e.json')
-  const { code, output } = await run(process.execPath, [bin('@playwright/test/cli.js'), 'test', '--reporter=list,json'], options(ground, {
+  const { code, output } = await run(process.execPath, [bin('@playwright/test/cli.js'), 'test', '--config=playwright.config.ts', '--reporter=list,json'], options(ground, {
     ...application.env,
     PLAYWRIGHT_JSON_OUTPUT_FILE: report,
   }))
