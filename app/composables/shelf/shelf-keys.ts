@@ -1,0 +1,7 @@
+/** Key of the shelf in the page's data. */
+export const SHELF_KEY = 'shelf'
+
+/** Key of one paint in the page's data. */
+export function paintKey(paintId: string): string {
+  return `paint ${paintId}`
+}
