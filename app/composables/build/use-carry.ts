@@ -1,0 +1,89 @@
+import { type Ref, ref } from 'vue'
+import { carryWords } from './carry-words'
+import type { FilmRow } from './film-rows'
+import type { Build } from './use-build'
+import { useSpoken } from '~/composables/ui/use-spoken'
+
+/** Carrying rows of the section by keyboard: picked up, carried row by row, laid or brought back. */
+export interface Carry {
+  /** Key of the row that is carried now. */
+  carried: Ref<string | null>
+  /** Where it lies, in words. */
+  said: Ref<string>
+  onKey: (event: KeyboardEvent, row: FilmRow) => void
+  /** The hand left the row: it stays where it lies. */
+  lay: () => void
+}
+
+/** One carry at a time for the rows of a build. */
+export function useCarry(build: Build): Carry {
+  const { speak } = useSpoken()
+  const carried = ref<string | null>(null)
+  const said = ref('')
+  let steps = 0
+
+  function tell(words: string) {
+    said.value = words
+    speak(words)
+  }
+  const nameOf = (row: FilmRow) => row.is === 'coat' ? `Coat ${row.number}` : `${row.mask.name}, where it is ${row.act === 'fit' ? 'fitted' : 'lifted'}`
+  const place = (key: string) => build.rows.value.find(row => row.key === key)?.row ?? -1
+  const where = (key: string) => carryWords(build.draft.body.value, place(key), build.draft.materials.value.paints)
+
+  function pickUp(row: FilmRow) {
+    if (build.whyNot.value) return tell(build.whyNot.value)
+    carried.value = row.key
+    steps = 0
+    tell(`${nameOf(row)}, picked up. ${where(row.key)}. Arrows carry it, Space lays it, Escape brings it back.`)
+  }
+
+  function carry(row: FilmRow, way: 'up' | 'down') {
+    const done = build.act(row.is === 'coat'
+      ? { do: 'carry-coat', coatId: row.coat.id, way }
+      : { do: 'move-item', from: row.row, to: row.row + (way === 'up' ? 1 : -1) })
+    if (!done) return
+    steps++
+    tell(where(row.key))
+  }
+
+  function lay() {
+    if (carried.value === null) return
+    const key = carried.value
+    carried.value = null
+    tell(`Laid. ${where(key)}`)
+    said.value = ''
+  }
+
+  function bringBack() {
+    for (; steps > 0; steps--) build.draft.undo()
+    carried.value = null
+    tell('Brought back to where it lay')
+    said.value = ''
+  }
+
+  return {
+    carried, said, lay,
+    onKey(event, row) {
+      const isCarried = carried.value === row.key
+      switch (event.key) {
+        case ' ':
+        case 'Enter':
+          event.preventDefault()
+          if (isCarried) lay()
+          else pickUp(row)
+          return
+        case 'ArrowUp':
+        case 'ArrowDown':
+          if (!isCarried) return
+          event.preventDefault()
+          carry(row, event.key === 'ArrowUp' ? 'up' : 'down')
+          return
+        case 'Escape':
+          if (!isCarried) return
+          event.preventDefault()
+          event.stopPropagation()
+          bringBack()
+      }
+    },
+  }
+}
