@@ -1,0 +1,96 @@
+import { computed, type ComputedRef, ref, type Ref } from 'vue'
+import { useIntervalFn } from '@vueuse/core'
+import { type RunActs, useRunActs } from './use-run-acts'
+import { goingOn, leavingEarly, type LeavingEarly, type Readiness, readiness } from '~/bench/going-on'
+import type { RunAct } from '#shared/bench/run-event'
+import { type Part, partsOf, partToDo, stepAfter } from '#shared/bench/run-parts'
+import type { RunStep } from '#shared/bench/run-step'
+import { runSteps } from '#shared/bench/run-steps'
+import { type RunPlan, runState, type RunState } from '#shared/bench/run-state'
+import { type CupNow, cupNow, type RunTimer, runTimers } from '#shared/bench/run-timers'
+import type { RunView } from '#shared/bench/run-view'
+import type { Look } from '#shared/picture/look'
+
+/** A run as it is followed at the bench. */
+export interface Follow {
+  acts: RunActs
+  plan: RunPlan
+  look: Look
+  state: ComputedRef<RunState>
+  /** The clock, ms. */
+  now: Ref<number>
+  parts: ComputedRef<Part[]>
+  /** The part that is looked at; undefined when every piece is through or set aside. */
+  part: ComputedRef<Part | undefined>
+  step: ComputedRef<RunStep | undefined>
+  /** What follows for this part. */
+  after: ComputedRef<RunStep | undefined>
+  ready: ComputedRef<Readiness>
+  timers: ComputedRef<RunTimer[]>
+  cup: ComputedRef<CupNow | undefined>
+  isFinished: ComputedRef<boolean>
+  /** Looks at another part of the batch. */
+  show: (part: Part) => void
+  /** What is asked before leaving this step; null when every piece is ready. */
+  asked: () => LeavingEarly | null
+  /** These pieces go on, or all of the part. */
+  goOn: (pieces?: readonly number[]) => void
+  /** Does an act, then looks at what there is to do. */
+  doAndLook: (act: RunAct) => void
+  takeBack: () => void
+}
+
+/** Follows a run: where it stands, what there is to do now, and the acts that do it. Called in the set-up of its page. */
+export function useFollow(run: RunView, onRefused: (reason: string) => void): Follow {
+  const look: Look = { body: run.body, materials: run.materials }
+  const plan: RunPlan = { steps: runSteps(look, run.pieces), pieces: run.pieces }
+  const acts = useRunActs(run, onRefused)
+  const now = useState(`follow now ${run.id}`, () => Date.now())
+  if (import.meta.client) useIntervalFn(() => {
+    now.value = Date.now()
+  }, 1000, { immediateCallback: false })
+
+  const state = computed(() => runState(acts.events.value))
+  const parts = computed(() => partsOf(plan, state.value))
+  const toDo = () => partToDo(plan, state.value, now.value)
+  /** A piece of the part that is looked at: the part goes where it goes, so that nothing jumps when others act. */
+  const anchor = ref<number | undefined>(toDo()?.pieces[0])
+  const part = computed(() => {
+    const held = parts.value.find(each => each.step !== undefined && each.pieces.includes(anchor.value ?? 0))
+    return held ?? toDo()
+  })
+  const step = computed(() => part.value?.step)
+  const ready = computed(() => part.value ? readiness(part.value, state.value, now.value) : { ready: [], open: [] })
+
+  function lookAround() {
+    now.value = Date.now()
+    anchor.value = toDo()?.pieces[0]
+  }
+
+  return {
+    acts, plan, look, state, now, parts, part, step, ready,
+    after: computed(() => part.value ? stepAfter(plan, state.value, part.value) : undefined),
+    timers: computed(() => runTimers(plan, state.value)),
+    cup: computed(() => cupNow(plan, state.value)),
+    isFinished: computed(() => state.value.finishedAt !== null),
+    show(other) {
+      anchor.value = other.pieces[0]
+    },
+    asked: () => part.value ? leavingEarly(part.value, ready.value, state.value, now.value) : null,
+    goOn(pieces) {
+      if (!part.value) return
+      acts.do(...goingOn(plan, state.value, part.value, pieces ?? part.value.pieces, now.value))
+      lookAround()
+    },
+    doAndLook(act) {
+      acts.do(act)
+      lookAround()
+    },
+    takeBack() {
+      const last = acts.last.value
+      if (!last) return
+      acts.do({ v: 1, kind: 'taken-back', eventId: last.id })
+      lookAround()
+    },
+  }
+}
