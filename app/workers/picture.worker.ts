@@ -1,6 +1,6 @@
 import { letDown } from '#shared/picture/let-down'
 import { pictureBench } from '#shared/picture/picture-bench'
-import { PICTURE_STAGES, PictureAsk, type PictureAnswer } from '#shared/picture/picture-messages'
+import { PictureAsk, type PictureAnswer } from '#shared/picture/picture-messages'
 import { zoneBench } from '#shared/picture/zone-bench'
 import { zoneColours } from '#shared/picture/zone-colours'
 
@@ -64,16 +64,22 @@ async function answer(work: Work): Promise<void> {
   }
 }
 
+/** A whole picture that takes no longer than this needs no coarse one before it, ms: going back to coarse would flicker. */
+const AT_ONCE_MS = 120
+let lastWhole = Infinity
+
 /** Between the stages of a picture, whoever asks something else is answered and a newer request takes over. */
 async function paint({ picture, request, look, options }: Extract<Work, { ask: 'paint' }>): Promise<void> {
-  let done = 0
-  for (const painted of bench.stages(look, options)) {
-    post({ answer: 'painted', picture, request, stage: PICTURE_STAGES[done++] ?? 'refined', painted }, [painted.rgba.buffer])
+  let since = performance.now()
+  for (const { stage, picture: painted } of bench.stages(look, options, lastWhole < AT_ONCE_MS ? 'full' : 'coarse')) {
+    if (stage === 'full') lastWhole = performance.now() - since
+    post({ answer: 'painted', picture, request, stage, painted }, [painted.rgba.buffer])
     await breath()
     if (wanted.has(picture)) return
     for (let quick = next(); quick && quick.ask !== 'paint'; quick = next()) {
       wanted.delete(quick.picture)
       await answer(quick)
     }
+    since = performance.now()
   }
 }

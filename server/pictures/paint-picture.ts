@@ -10,9 +10,9 @@ export interface PaintedPicture { width: number, height: number, rgba: Uint8Clam
 
 let bench: PictureBench | undefined
 
-/** Paints one picture. Each thread keeps its bench, so that the steps of one scheme share their views and deposits. */
+/** Paints one picture. Each thread keeps its bench, so that pictures of one blank, or in one light, share what they can. */
 export default function paintPicture({ look, wish }: PictureJob): PaintedPicture {
-  bench ??= pictureBench()
+  bench ??= pictureBench('orders')
   const { width, height, rgba } = bench.draw(look, wish)
   return { width, height, rgba }
 }

@@ -54,9 +54,10 @@ export function drawEye(canvas: Canvas, eye: DrawnEye, eyes: Eyes, tables: Light
         blue += rgb[2]!
       }
       if (hits === 0) continue
-      const share = hits / FINE ** 2
       // Only where the body is: an eye near the outline ends with it.
-      layOver(canvas, row * canvas.width + column, share, red / FINE ** 2, green / FINE ** 2, blue / FINE ** 2)
+      const pixel = row * canvas.width + column
+      const seen = Math.min(1, canvas.body[pixel]!) / FINE ** 2
+      layOver(canvas, pixel, seen * hits, seen * red, seen * green, seen * blue)
     }
   }
 }

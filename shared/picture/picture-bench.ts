@@ -25,29 +25,43 @@ export const COARSE = 4
 const JUMP = { screen: 0.1, print: 0.035 }
 /** Pictures up to this width take nine samples everywhere. */
 const SMALL_WIDTH = 200
-/** How many of each are kept. */
-const KEPT = { blanks: 4, views: 4, refinedViews: 2, tables: 120, lights: 8 }
+/** How many of each are kept by a bench at which one look is edited, and by one that paints a different look each time. */
+const KEPT = {
+  edits: { blanks: 4, views: 4, refinedViews: 2, tables: 120, lights: 8 },
+  orders: { blanks: 12, views: 1, refinedViews: 0, tables: 120, lights: 4 },
+}
 /** Share of the jumps of a picture that kept samples must hold to be used again: an edit of one coat moves few of them. */
 const SAME_JUMPS = 0.9
 
 /** Several samples for each of some pixels of a view. */
 interface RefinedView { pixels: Uint32Array, kit: ViewKit }
 
+/** How far a picture has come. */
+export type PictureStage = 'coarse' | 'full' | 'refined'
+
+/** A picture on its way. */
+export interface StagedPicture { stage: PictureStage, picture: Picture }
+
 /** Draws looks and keeps what a next picture can use: views, deposits, the coats below an edit, tables and lights. */
 export interface PictureBench {
   /** One picture at the quality asked for. */
   draw(look: Look, wish: PictureWish): Picture
-  /** The same picture, better and better: coarse, full, then with its edges refined. */
-  stages(look: Look, wish: PictureWish): Generator<Picture, void, undefined>
+  /** The same picture, better and better: coarse, full, then with its edges refined. `from` full leaves the coarse one out. */
+  stages(look: Look, wish: PictureWish, from?: 'coarse' | 'full'): Generator<StagedPicture, void, undefined>
   /** What lies at a place of the picture, pixels from the left and top; undefined beside the blank. */
   pick(look: Look, wish: PictureWish, x: number, y: number): PickedPlace | undefined
 }
 
-/** Puts up an empty bench. */
-export function pictureBench(): PictureBench {
-  const blanks = keepSome<PreparedBlank>(KEPT.blanks), lights = keepSome<LightTables>(KEPT.lights)
-  const views = keepSome<ViewKit>(KEPT.views), refinedViews = keepSome<RefinedView>(KEPT.refinedViews)
-  const tables = keepSome<CoatTable>(KEPT.tables)
+/**
+ * Puts up an empty bench.
+ *
+ * @param work for `edits` it keeps much, so that the next picture of the same look is quick; for `orders` little
+ */
+export function pictureBench(work: 'edits' | 'orders' = 'edits'): PictureBench {
+  const most = KEPT[work]
+  const blanks = keepSome<PreparedBlank>(most.blanks), lights = keepSome<LightTables>(most.lights)
+  const views = keepSome<ViewKit>(most.views), refinedViews = keepSome<RefinedView>(most.refinedViews)
+  const tables = keepSome<CoatTable>(most.tables)
 
   return {
     draw(look, wish) {
@@ -55,13 +69,14 @@ export function pictureBench(): PictureBench {
       if (options.quality === 'coarse') return finish(look, coarser(options), drawFull(look, coarser(options)))
       return finish(look, options, refine(look, options, drawFull(look, options)))
     },
-    * stages(look, wish) {
+    * stages(look, wish, from = 'coarse') {
       const options = pictureOptions(wish)
-      yield finish(look, coarser(options), drawFull(look, coarser(options)))
-      if (options.quality === 'coarse') return
+      const isCoarse = options.quality === 'coarse'
+      if (from === 'coarse' || isCoarse) yield { stage: 'coarse', picture: finish(look, coarser(options), drawFull(look, coarser(options))) }
+      if (isCoarse) return
       const full = drawFull(look, options)
-      yield finish(look, options, full)
-      yield finish(look, options, refine(look, options, full))
+      yield { stage: 'full', picture: finish(look, options, full) }
+      yield { stage: 'refined', picture: finish(look, options, refine(look, options, full)) }
     },
     pick(look, wish, x, y) {
       return pickPlace(kitOf(look, pictureOptions(wish)).kit.samples, look.materials.blank.shape, x, y)

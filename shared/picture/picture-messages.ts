@@ -5,6 +5,7 @@ import { SchemeBody } from '#shared/scheme/body'
 import { Materials } from '#shared/scheme/materials'
 import type { LetDownStep } from './let-down'
 import type { PickedPlace } from './pick-place'
+import type { PictureStage } from './picture-bench'
 import type { Picture } from './picture-options'
 import { PictureOptions } from './picture-options'
 import type { ZoneColour } from './zone-colours'
@@ -33,9 +34,7 @@ export const PictureAsk = z.discriminatedUnion('ask', [
 ])
 export type PictureAsk = z.output<typeof PictureAsk>
 
-/** How far a picture has come. */
-export type PictureStage = 'coarse' | 'full' | 'refined'
-export const PICTURE_STAGES: readonly PictureStage[] = ['coarse', 'full', 'refined']
+export type { PictureStage } from './picture-bench'
 
 /** What the painting thread answers. */
 export type PictureAnswer

@@ -11,5 +11,5 @@ export type { Picture, PictureLight, PictureOptions, PictureWish } from './pictu
  * One-off; whoever draws the same look again keeps a `pictureBench`.
  */
 export function renderLook(look: Look, wish: PictureWish): Picture {
-  return pictureBench().draw(look, wish)
+  return pictureBench('orders').draw(look, wish)
 }

@@ -59,8 +59,8 @@ describe('a picture', TIMEOUT, () => {
 
   it('comes coarse first, at a quarter of the size, and hardly changes colour as it is refined', () => {
     const stages = [...bench.stages(perch, { width: 400, height: 200, surround: null })]
-    expect(stages.map(({ width }) => width)).toEqual([100, 400, 400])
-    const [coarse, , fine] = stages.map(meanLab)
+    expect(stages.map(({ stage, picture }) => [stage, picture.width])).toEqual([['coarse', 100], ['full', 400], ['refined', 400]])
+    const [coarse, , fine] = stages.map(({ picture }) => meanLab(picture))
     expect(deltaE2000(coarse!, fine!)).toBeLessThan(1)
   })
 
