@@ -1,8 +1,10 @@
 -- The second wall between workshops. The server works as a role that owns nothing; every row it sees or writes
 -- must belong to what the transaction declared: app.workshop_id, app.person_id, app.session_id, app.email, app.token_hash.
 do $$ begin
-  create role countershade_app nologin;
-exception when duplicate_object or unique_violation then null;
+  if not exists (select from pg_roles where rolname = 'countershade_app') then
+    create role countershade_app nologin;
+  end if;
+exception when duplicate_object or unique_violation then null; -- another database of this server was quicker
 end $$;
 --> statement-breakpoint
 do $$ begin
