@@ -31,7 +31,7 @@ it('says what is wrong with each field', () => {
 })
 
 it('says every refusal in whole sentences, without a code in them', () => {
-  const filled = { action: 'x', retryAfterSeconds: 600, fields: [], reason: 'It is so.', reasons: ['It is so.'], version: 2, maxBytes: 1e7, maxPixels: 4e7 }
+  const filled = { action: 'x', retryAfterSeconds: 600, fields: [], reason: 'It is so.', reasons: ['It is so.'], version: 2, maxBytes: 1e7, maxPixels: 4e7, max: 12 }
   for (const option of ProblemData.options) {
     const code = [...option.shape.code.values][0]!
     const said = sentence(ProblemData.parse({ ...filled, code }))
