@@ -6,6 +6,9 @@ import { zoneColours } from '#shared/picture/zone-colours'
 
 /** Paints the pictures of a page and works out its promised colours, away from the page. The latest request of a name wins. */
 
+/** A whole picture that takes no longer than this needs no coarse one before it, ms: going back to coarse would flicker. */
+const AT_ONCE_MS = 120
+
 type Work = Exclude<PictureAsk, { ask: 'forget' }>
 
 const bench = pictureBench()
@@ -13,6 +16,8 @@ const measured = zoneBench()
 /** One request per name. */
 const wanted = new Map<string, Work>()
 let isAtWork = false
+/** How long the last whole picture took, ms. */
+let lastWhole = Infinity
 
 function post(answer: PictureAnswer, transfer: Transferable[] = []): void {
   self.postMessage(answer, { transfer })
@@ -41,16 +46,20 @@ async function workAll(): Promise<void> {
   if (isAtWork) return
   isAtWork = true
   for (let work = next(); work; work = next()) {
-    wanted.delete(work.picture)
-    try {
-      await answer(work)
-    }
-    catch (error) {
-      post({ answer: 'failed', picture: work.picture, request: work.request, reason: error instanceof Error ? error.message : String(error) })
-    }
+    await attempt(work)
     await breath()
   }
   isAtWork = false
+}
+
+async function attempt(work: Work): Promise<void> {
+  wanted.delete(work.picture)
+  try {
+    await answer(work)
+  }
+  catch (error) {
+    post({ answer: 'failed', picture: work.picture, request: work.request, reason: error instanceof Error ? error.message : String(error) })
+  }
 }
 
 async function answer(work: Work): Promise<void> {
@@ -64,22 +73,14 @@ async function answer(work: Work): Promise<void> {
   }
 }
 
-/** A whole picture that takes no longer than this needs no coarse one before it, ms: going back to coarse would flicker. */
-const AT_ONCE_MS = 120
-let lastWhole = Infinity
-
 /** Between the stages of a picture, whoever asks something else is answered and a newer request takes over. */
 async function paint({ picture, request, look, options }: Extract<Work, { ask: 'paint' }>): Promise<void> {
-  let since = performance.now()
+  const since = performance.now()
   for (const { stage, picture: painted } of bench.stages(look, options, lastWhole < AT_ONCE_MS ? 'full' : 'coarse')) {
     if (stage === 'full') lastWhole = performance.now() - since
     post({ answer: 'painted', picture, request, stage, painted }, [painted.rgba.buffer])
     await breath()
     if (wanted.has(picture)) return
-    for (let quick = next(); quick && quick.ask !== 'paint'; quick = next()) {
-      wanted.delete(quick.picture)
-      await answer(quick)
-    }
-    since = performance.now()
+    for (let quick = next(); quick && quick.ask !== 'paint'; quick = next()) await attempt(quick)
   }
 }
