@@ -52,8 +52,8 @@ export function coatTitle(coat: Coat, paints: readonly { id: string, name: strin
 /** What a mask is, beside its name: "2 mm", "cut", "tape". */
 export function maskFigure({ form }: Mask): string {
   switch (form.kind) {
-    case 'mesh': return `${form.weave}, ${form.pitch} mm`
-    case 'stencil': return form.does === 'opens' ? 'cut stencil' : 'shield'
+    case 'mesh': return `${form.pitch} mm`
+    case 'stencil': return form.does === 'opens' ? 'cut' : 'shield'
     case 'tape': return 'tape'
   }
 }
