@@ -16,6 +16,9 @@ export interface ProcessedPhoto {
 
 export type PhotoRefusal = 'photo/not-an-image' | 'photo/too-large' | 'photo/unreadable'
 
+/** What lies behind a photo with clear parts and beside a long one. @source Munsell N6, as tokens.css */
+const SURROUND = '#929292'
+
 /** Why a file cannot be taken in. */
 export class PhotoRefused extends Error {
   override name = 'PhotoRefused'
@@ -53,7 +56,7 @@ async function drawCopies(bytes: Uint8Array, format: PhotoFormat): Promise<Proce
   const widest = Math.max(...RENDITION_WIDTHS)
   const { data, info } = await file.autoOrient()
     .resize({ width: widest, height: widest, fit: 'inside', withoutEnlargement: true })
-    .flatten({ background: '#929292' }).toColourspace('srgb').raw().toBuffer({ resolveWithObject: true })
+    .flatten({ background: SURROUND }).toColourspace('srgb').raw().toBuffer({ resolveWithObject: true })
   const upright = sharp(data, { raw: { width: info.width, height: info.height, channels: info.channels } })
 
   const renditions = await Promise.all(RENDITION_WIDTHS.map(async (width): Promise<Rendition[]> => {
@@ -63,7 +66,9 @@ async function drawCopies(bytes: Uint8Array, format: PhotoFormat): Promise<Proce
       { file: `${width}.jpg`, contentType: 'image/jpeg', bytes: await whole(sized().jpeg({ quality: 82, mozjpeg: true })) },
     ]
   }))
-  const preview = await whole(upright.clone().resize({ ...PREVIEW_SIZE, fit: 'cover' }).jpeg({ quality: 82, mozjpeg: true }))
+  // A photo longer than the preview keeps its whole length, nose to tail, on the grey it is judged on; a taller one is filled.
+  const isLong = info.width * PREVIEW_SIZE.height > info.height * PREVIEW_SIZE.width
+  const preview = await whole(upright.clone().resize({ ...PREVIEW_SIZE, fit: isLong ? 'contain' : 'cover', background: SURROUND }).jpeg({ quality: 82, mozjpeg: true }))
   const turned = (head.orientation ?? 1) >= 5
   return {
     format,

@@ -1,7 +1,8 @@
 import type { PublishedDemo } from './finishes'
 import type { Ctx } from '#server/services/ctx'
 import { addCard } from '#server/services/cards/add-card'
-import { changeCard, shareCard } from '#server/services/cards/change-card'
+import { changeCard } from '#server/services/cards/change-card'
+import { shareCard } from '#server/services/cards/share-card'
 import type { CardDraft, CardView } from '#shared/cards/card'
 
 /** What the front desk wrote on the demo's two cards. */

@@ -35,28 +35,35 @@ export type CardDraft = z.output<typeof CardDraft>
 
 /** What a card keeps: its words, and copies of the few facts of the scheme that a customer may see. */
 export const CardContent = CardDraft.extend({
-  workshop: z.string(),
   blank: z.string(),
   chips: z.array(CardChip).max(CARD_CHIPS_MAX),
 })
 export type CardContent = z.output<typeof CardContent>
 
+/** Whether a customer can see a card, or could once. */
+export const CardState = z.enum(['not shared', 'shared', 'revoked'])
+export type CardState = z.output<typeof CardState>
+
 /** A card as the workshop sees it. */
 export const CardView = CardContent.extend({
   id: z.uuid(),
+  /** The workshop's name as it is today. */
+  workshop: z.string(),
   schemeId: z.uuid(),
   schemeName: z.string(),
   version: z.number().int(),
-  state: z.enum(['not shared', 'shared', 'revoked']),
+  state: CardState,
   /** The public address while it is shared. */
   link: z.string().nullable(),
   sharedAt: z.iso.datetime().nullable(),
+  revokedAt: z.iso.datetime().nullable(),
   createdAt: z.iso.datetime(),
 })
 export type CardView = z.output<typeof CardView>
 
 /** A photo on a public card: an address below the card's own, its size and its words. */
 export const PublicPhoto = z.strictObject({ id: z.uuid(), width: z.number().int(), height: z.number().int(), alt: z.string() })
+export type PublicPhoto = z.output<typeof PublicPhoto>
 
 /** Everything a public card may ever say; the one allow-list. Strict, so that nothing else can ride along. */
 export const PublicCard = z.strictObject({
@@ -72,3 +79,7 @@ export const PublicCard = z.strictObject({
   photos: z.array(PublicPhoto),
 })
 export type PublicCard = z.output<typeof PublicCard>
+
+/** What a link opens: the card, and where it stands, for the previews other people's programs draw of it. */
+export const CardByLink = z.strictObject({ address: z.url(), card: PublicCard })
+export type CardByLink = z.output<typeof CardByLink>

@@ -15,7 +15,8 @@ export const PhotoOrder = z.object({ photoIds: z.array(z.uuid()).max(PHOTOS_PER_
 export const PhotoView = z.object({
   id: z.uuid(),
   schemeId: z.uuid(),
-  runId: z.uuid().nullable(),
+  /** The run it was taken of, when it was taken at the bench. */
+  run: z.object({ id: z.uuid(), number: z.number().int() }).nullable(),
   width: z.number().int(),
   height: z.number().int(),
   alt: z.string(),

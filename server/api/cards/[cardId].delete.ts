@@ -1,7 +1,7 @@
 import { requireContext } from '#server/http/context'
 import { defineApiHandler } from '#server/http/define-api-handler'
 import { parseParams } from '#server/http/parse'
-import { removeCard } from '#server/services/cards/change-card'
+import { removeCard } from '#server/services/cards/remove-card'
 import { CardParams } from '#shared/cards/card'
 
 export default defineApiHandler(async (event) => {

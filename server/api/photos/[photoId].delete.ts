@@ -2,7 +2,7 @@ import { requireContext } from '#server/http/context'
 import { defineApiHandler } from '#server/http/define-api-handler'
 import { parseParams } from '#server/http/parse'
 import { objectStore } from '#server/photos/object-store'
-import { removePhoto } from '#server/services/photos/change-photo'
+import { removePhoto } from '#server/services/photos/remove-photo'
 import { PhotoParams } from '#shared/photos/photo-view'
 
 export default defineApiHandler(async (event) => {

@@ -20,7 +20,7 @@ export async function addCard(ctx: Ctx, schemeId: string): Promise<CardView> {
       .where(and(eq(revisions.schemeId, schemeId), eq(revisions.workshopId, tx.workshopId))).orderBy(desc(revisions.number)).limit(1)
     if (!head) throw new Problem({ code: 'scheme/never-published' })
     const shown = await tx.db.select({ id: photos.id }).from(photos)
-      .where(and(eq(photos.schemeId, schemeId), eq(photos.workshopId, tx.workshopId))).orderBy(asc(photos.position)).limit(CARD_PHOTOS_MAX)
+      .where(and(eq(photos.schemeId, schemeId), eq(photos.workshopId, tx.workshopId))).orderBy(asc(photos.position), asc(photos.createdAt), asc(photos.id)).limit(CARD_PHOTOS_MAX)
 
     const content: CardContent = {
       title: found.scheme.name,
@@ -31,11 +31,10 @@ export async function addCard(ctx: Ctx, schemeId: string): Promise<CardView> {
       leadTime: '',
       photoIds: shown.map(photo => photo.id),
       showsChips: true,
-      workshop: found.workshop,
       blank: found.blank,
       chips: cardChips(head),
     }
     const [card] = await tx.db.insert(cards).values({ workshopId: tx.workshopId, schemeId, content, createdBy: tx.personId }).returning()
-    return cardView(card!, found.scheme.name)
+    return cardView({ card: card!, schemeName: found.scheme.name, workshop: found.workshop })
   })
 }

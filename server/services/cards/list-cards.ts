@@ -2,27 +2,23 @@ import { and, desc, eq } from 'drizzle-orm'
 import type { Ctx } from '#server/services/ctx'
 import { inTransaction } from '#server/services/in-transaction'
 import { assertMay } from '#server/services/people/assert-may'
-import { cards, schemes } from '#server/db/tables'
+import { cards } from '#server/db/tables'
 import type { CardView } from '#shared/cards/card'
-import { cardInWorkshop, cardView } from './card-view'
+import { cardInWorkshop, cardsWithNames, cardView } from './card-view'
 
 /** The workshop's cards, newest first; of one scheme when it is named. */
 export async function listCards(ctx: Ctx, schemeId?: string): Promise<CardView[]> {
   assertMay(ctx, 'card:read')
   return inTransaction(ctx, async (tx) => {
-    const rows = await tx.db.select({ card: cards, schemeName: schemes.name })
-      .from(cards).innerJoin(schemes, eq(schemes.id, cards.schemeId))
+    const rows = await cardsWithNames(tx)
       .where(and(eq(cards.workshopId, tx.workshopId), schemeId ? eq(cards.schemeId, schemeId) : undefined))
       .orderBy(desc(cards.createdAt), desc(cards.id))
-    return rows.map(row => cardView(row.card, row.schemeName))
+    return rows.map(cardView)
   })
 }
 
 /** One card of the workshop, or card/not-found. */
 export async function getCard(ctx: Ctx, cardId: string): Promise<CardView> {
   assertMay(ctx, 'card:read')
-  return inTransaction(ctx, async (tx) => {
-    const { card, schemeName } = await cardInWorkshop(tx, cardId)
-    return cardView(card, schemeName)
-  })
+  return inTransaction(ctx, async tx => cardView(await cardInWorkshop(tx, cardId)))
 }

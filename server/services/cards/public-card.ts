@@ -1,14 +1,16 @@
 import { and, eq, inArray, isNull } from 'drizzle-orm'
 import type { Database } from '#server/db/client'
 import { declare, inTransactionAs } from '#server/services/in-transaction'
-import { cards, photos } from '#server/db/tables'
+import { cards, photos, workshops } from '#server/db/tables'
 import type { ObjectStore, StoredObject } from '#server/photos/object-store'
 import { photoKeys } from '#server/photos/photo-keys'
-import { CardContent, type PublicCard } from '#shared/cards/card'
+import { settings } from '#server/settings'
+import { CardContent, type CardByLink, type PublicCard, type PublicPhoto } from '#shared/cards/card'
+import { shownCard } from '#shared/cards/shown-card'
 import { Problem } from '#shared/errors/problem'
 import { tokenHash } from './card-link'
 
-interface SharedCard { workshopId: string, content: CardContent, photos: { id: string, width: number, height: number, alt: string }[] }
+interface SharedCard { workshopId: string, workshop: string, content: CardContent, photos: PublicPhoto[] }
 
 /** The card behind a link; unknown and revoked links look the same. The photos are read as the card's workshop, and only those the card names. */
 async function sharedCard(db: Database, token: string): Promise<SharedCard> {
@@ -18,30 +20,25 @@ async function sharedCard(db: Database, token: string): Promise<SharedCard> {
     if (!card) throw new Problem({ code: 'card/not-found' })
     const content = CardContent.parse(card.content)
     await declare(tx, { workshopId: card.workshopId })
+    const [workshop] = await tx.select({ name: workshops.name }).from(workshops).where(eq(workshops.id, card.workshopId))
     const found = content.photoIds.length === 0
       ? []
       : await tx.select({ id: photos.id, width: photos.width, height: photos.height, alt: photos.alt }).from(photos)
           .where(and(eq(photos.workshopId, card.workshopId), inArray(photos.id, content.photoIds)))
     const inOrder = content.photoIds.flatMap(id => found.filter(photo => photo.id === id))
-    return { workshopId: card.workshopId, content, photos: inOrder }
+    return { workshopId: card.workshopId, workshop: workshop!.name, content, photos: inOrder }
   })
 }
 
-/** What a customer sees by a link: built field by field, so that nothing can follow that is not named here. */
+/** What a customer sees by a link. */
 export async function publicCard(db: Database, token: string): Promise<PublicCard> {
-  const { content, photos } = await sharedCard(db, token)
-  return {
-    workshop: content.workshop,
-    title: content.title,
-    words: content.words,
-    fish: content.fish,
-    blank: content.blank,
-    sizes: content.sizes,
-    price: content.price,
-    leadTime: content.leadTime,
-    chips: content.showsChips ? content.chips.map(chip => ({ where: chip.where, colour: chip.colour, words: chip.words })) : [],
-    photos: photos.map(photo => ({ id: photo.id, width: photo.width, height: photo.height, alt: photo.alt })),
-  }
+  const { workshop, content, photos } = await sharedCard(db, token)
+  return shownCard(content, workshop, photos)
+}
+
+/** The same, with the address it stands at. */
+export async function cardByLink(db: Database, token: string): Promise<CardByLink> {
+  return { card: await publicCard(db, token), address: `${settings().publicUrl}/c/${token}` }
 }
 
 /** A copy of a photo that a shared card shows. */

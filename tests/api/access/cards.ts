@@ -1,7 +1,7 @@
 import { objectStore } from '#server/photos/object-store'
 import { takeInPhoto } from '#server/photos/photo-pool'
 import { addCard } from '#server/services/cards/add-card'
-import { shareCard } from '#server/services/cards/change-card'
+import { shareCard } from '#server/services/cards/share-card'
 import { addPhoto } from '#server/services/photos/add-photo'
 import { publishScheme } from '#server/services/scheme/publish-scheme'
 import { testScheme } from '../scheme/ground'

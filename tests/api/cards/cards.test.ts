@@ -1,17 +1,22 @@
+import sharp from 'sharp'
 import { describe, expect, it } from 'vitest'
 import type { Ctx } from '#server/services/ctx'
 import { objectStore } from '#server/photos/object-store'
-import { photoKeys } from '#server/photos/photo-keys'
+import { photoKeys, photoOfKey } from '#server/photos/photo-keys'
 import { takeInPhoto } from '#server/photos/photo-pool'
 import { addCard } from '#server/services/cards/add-card'
-import { changeCard, revokeCard, shareCard } from '#server/services/cards/change-card'
+import { changeCard } from '#server/services/cards/change-card'
 import { getCard, listCards } from '#server/services/cards/list-cards'
 import { publicCard, publicPhoto, publicPreview } from '#server/services/cards/public-card'
+import { revokeCard, shareCard } from '#server/services/cards/share-card'
 import { addPhoto } from '#server/services/photos/add-photo'
-import { orderPhotos, removePhoto } from '#server/services/photos/change-photo'
 import { listPhotos } from '#server/services/photos/list-photos'
+import { orderPhotos } from '#server/services/photos/order-photos'
+import { removePhoto } from '#server/services/photos/remove-photo'
 import { publishScheme } from '#server/services/scheme/publish-scheme'
+import { sweepPhotoFiles } from '#server/services/photos/sweep-photo-files'
 import type { CardView } from '#shared/cards/card'
+import { draftOf } from '#shared/cards/merge-drafts'
 import { cameraPhoto, PLANTED } from '../../fixtures/camera-photo'
 import { asOwner, testDatabase } from '../database'
 import { testPerson, testWorkshop } from '../factories'
@@ -19,8 +24,8 @@ import { testScheme } from '../scheme/ground'
 
 const tools = { store: objectStore(), process: takeInPhoto }
 const tokenOf = (card: CardView) => card.link!.split('/c/')[1]!
-const draftOf = ({ title, words, fish, sizes, price, leadTime, photoIds, showsChips }: CardView) =>
-  ({ title, words, fish, sizes, price, leadTime, photoIds, showsChips })
+/** A small photo without metadata, another for each width. */
+const plainPhoto = (width: number) => sharp({ create: { width, height: 40, channels: 3, background: 'grey' } }).jpeg().toBuffer()
 
 async function publishedScheme(ctx: Ctx, secret = 'base'): Promise<string> {
   const { scheme } = await testScheme(ctx, { secret })
@@ -28,9 +33,9 @@ async function publishedScheme(ctx: Ctx, secret = 'base'): Promise<string> {
   return scheme.id
 }
 
-async function sharedCard(ctx: Ctx, secret = 'base') {
+async function sharedCard(ctx: Ctx, secret = 'base', file?: Buffer) {
   const schemeId = await publishedScheme(ctx, secret)
-  const photo = await addPhoto(ctx, schemeId, null, await cameraPhoto({ width: 400, height: 300 }), tools)
+  const photo = await addPhoto(ctx, schemeId, null, file ?? await plainPhoto(60), tools)
   const card = await addCard(ctx, schemeId)
   return { schemeId, photo, card: await shareCard(ctx, card.id) }
 }
@@ -39,12 +44,56 @@ describe('photos of a scheme', () => {
   it('stand in the order they were given, and the same file again is the same photo', async () => {
     const { ctx } = await testWorkshop({ role: 'painter' })
     const schemeId = await publishedScheme(ctx)
-    const file = await cameraPhoto({ width: 300, height: 200 })
+    const file = await plainPhoto(60)
     const one = await addPhoto(ctx, schemeId, null, file, tools)
-    const two = await addPhoto(ctx, schemeId, null, await cameraPhoto({ width: 320, height: 200 }), tools)
+    const two = await addPhoto(ctx, schemeId, null, await plainPhoto(64), tools)
     expect((await addPhoto(ctx, schemeId, null, file, tools)).id).toBe(one.id)
     await orderPhotos(ctx, schemeId, [two.id, one.id])
     expect((await listPhotos(ctx, schemeId)).map(photo => photo.id)).toEqual([two.id, one.id])
+  })
+
+  it('are one photo when the same file is sent twice at the same time, and leave no copies behind', async () => {
+    const { ctx } = await testWorkshop({ role: 'painter' })
+    const schemeId = await publishedScheme(ctx)
+    const file = await plainPhoto(60)
+    const sent = await Promise.all([1, 2, 3].map(() => addPhoto(ctx, schemeId, null, file, tools)))
+    expect(new Set(sent.map(photo => photo.id)).size).toBe(1)
+    expect(await listPhotos(ctx, schemeId)).toHaveLength(1)
+    const folders = new Set<string | undefined>()
+    for await (const { key } of objectStore().list(`workshops/${ctx.workshopId}/photos/`)) folders.add(photoOfKey(key)?.photoId)
+    expect([...folders]).toEqual([sent[0]!.id])
+  })
+
+  it('keep every photo in its place when one is added while others are put in order', async () => {
+    const { ctx } = await testWorkshop({ role: 'painter' })
+    const schemeId = await publishedScheme(ctx)
+    const [a, b] = [await addPhoto(ctx, schemeId, null, await plainPhoto(61), tools), await addPhoto(ctx, schemeId, null, await plainPhoto(62), tools)]
+    const added = await Promise.all([
+      addPhoto(ctx, schemeId, null, await plainPhoto(63), tools), orderPhotos(ctx, schemeId, [b.id, a.id]), addPhoto(ctx, schemeId, null, await plainPhoto(64), tools),
+    ])
+    const late = new Set([added[0].id, added[2].id])
+    const standing = (await listPhotos(ctx, schemeId)).map(photo => photo.id)
+    expect(standing.slice(0, 2)).toEqual([b.id, a.id])
+    expect(new Set(standing.slice(2))).toEqual(late)
+    const places = await asOwner<{ position: number }>('select position from photos where scheme_id = $1 order by position', [schemeId])
+    expect(places.map(row => row.position)).toEqual([0, 1, 2, 3])
+  })
+
+  it('leave no file behind when they cannot be taken in, and what is left of them all the same is swept a day later', async () => {
+    const { ctx } = await testWorkshop({ role: 'painter' })
+    const schemeId = await publishedScheme(ctx)
+    const photo = await addPhoto(ctx, schemeId, null, await plainPhoto(61), tools)
+    const orphan = photoKeys.original(ctx.workshopId, crypto.randomUUID())
+    await objectStore().put(orphan, new Uint8Array([1]), 'application/octet-stream')
+    const picture = `workshops/${ctx.workshopId}/pictures/kept.webp`
+    await objectStore().put(picture, new Uint8Array([1]), 'image/webp')
+    const db = await testDatabase()
+    await sweepPhotoFiles(db, objectStore(), new Date())
+    expect(await objectStore().has(orphan)).toBe(true)
+    await sweepPhotoFiles(db, objectStore(), new Date(Date.now() + 25 * 3600 * 1000))
+    expect(await objectStore().has(orphan)).toBe(false)
+    expect(await objectStore().has(picture)).toBe(true)
+    expect(await objectStore().has(photoKeys.original(ctx.workshopId, photo.id))).toBe(true)
   })
 
   it('take all their files with them when they go, the original too', async () => {
@@ -64,7 +113,7 @@ describe('photos of a scheme', () => {
     const { schemeId, photo } = await sharedCard(ctx)
     await expect(listPhotos(stranger, schemeId)).rejects.toMatchObject({ data: { code: 'scheme/not-found' } })
     await expect(removePhoto(stranger, photo.id, objectStore())).rejects.toMatchObject({ data: { code: 'photo/not-found' } })
-    await expect(addPhoto(stranger, schemeId, null, await cameraPhoto(), tools)).rejects.toMatchObject({ data: { code: 'scheme/not-found' } })
+    await expect(addPhoto(stranger, schemeId, null, await plainPhoto(60), tools)).rejects.toMatchObject({ data: { code: 'scheme/not-found' } })
   })
 })
 
@@ -81,7 +130,7 @@ describe('a card', () => {
 
   it('gives nothing of the recipe away, whatever the recipe says', async () => {
     const { ctx } = await testWorkshop({ role: 'owner' })
-    const { card, photo, schemeId } = await sharedCard(ctx, 'planted secret')
+    const { card, photo, schemeId } = await sharedCard(ctx, 'planted secret', await cameraPhoto({ width: 400, height: 300 }))
     const db = await testDatabase()
     const said = JSON.stringify(await publicCard(db, tokenOf(card)))
     const recipe = ['planted secret', 'net planted', 'scales', 'Opaque white', schemeId, ctx.workshopId, ctx.personId, card.id]
@@ -121,8 +170,40 @@ describe('a card', () => {
   it('shows no photo that is not on it, though the scheme has more', async () => {
     const { ctx } = await testWorkshop({ role: 'owner' })
     const { card, schemeId } = await sharedCard(ctx)
-    const other = await addPhoto(ctx, schemeId, null, await cameraPhoto({ width: 310, height: 210 }), tools)
+    const other = await addPhoto(ctx, schemeId, null, await plainPhoto(65), tools)
     await expect(publicPhoto(await testDatabase(), tokenOf(card), other.id, '320.webp', objectStore())).rejects.toMatchObject({ data: { code: 'photo/not-found' } })
+  })
+
+  it('says what the workshop is called today, and nobody reads its old name', async () => {
+    const { ctx } = await testWorkshop({ role: 'owner', name: 'Old name' })
+    const { card } = await sharedCard(ctx)
+    await asOwner('update workshops set name = $2 where id = $1', [ctx.workshopId, 'New name'])
+    expect((await publicCard(await testDatabase(), tokenOf(card))).workshop).toBe('New name')
+    expect((await getCard(ctx, card.id)).workshop).toBe('New name')
+  })
+
+  it('has one link that works however many people share it at once', async () => {
+    const { ctx } = await testWorkshop({ role: 'owner' })
+    const { card } = await sharedCard(ctx)
+    const shared = await Promise.all([1, 2, 3].map(() => shareCard(ctx, card.id)))
+    const db = await testDatabase()
+    const opened = await Promise.allSettled(shared.map(one => publicCard(db, tokenOf(one))))
+    expect(opened.filter(one => one.status === 'fulfilled')).toHaveLength(1)
+    expect(new Set(shared.map(one => one.version)).size).toBe(3)
+    expect((await publicCard(db, tokenOf(await getCard(ctx, card.id)))).title).toBe('Perch in bars')
+  })
+
+  it('keeps a photo while it is shared, and shows each only once', async () => {
+    const { ctx } = await testWorkshop({ role: 'owner' })
+    const { card, photo } = await sharedCard(ctx)
+    await expect(changeCard(ctx, card.id, card.version, { ...draftOf(card), photoIds: [] })).rejects.toMatchObject({ data: { code: 'card/no-photo' } })
+    expect((await changeCard(ctx, card.id, card.version, { ...draftOf(card), photoIds: [photo.id, photo.id] })).photoIds).toEqual([photo.id])
+  })
+
+  it('is not revoked before it was shared', async () => {
+    const { ctx } = await testWorkshop({ role: 'owner' })
+    const card = await addCard(ctx, await publishedScheme(ctx))
+    expect(await revokeCard(ctx, card.id)).toMatchObject({ state: 'not shared', version: card.version })
   })
 
   it('is not overwritten by somebody who saw an older version', async () => {

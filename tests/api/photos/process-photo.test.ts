@@ -18,8 +18,8 @@ describe('taking a photo in', () => {
   it.each([
     [1, 0.1, 0.1], [3, 0.8, 0.8], [6, 0.8, 0.1], [8, 0.1, 0.8],
   ])('turns orientation %i upright', async (orientation, x, y) => {
-    const photo = await processPhoto(await cameraPhoto({ orientation }))
-    const upright = orientation < 5 ? [1200, 800] : [800, 1200]
+    const photo = await processPhoto(await cameraPhoto({ width: 600, height: 400, orientation }))
+    const upright = orientation < 5 ? [600, 400] : [400, 600]
     expect([photo.width, photo.height]).toEqual(upright)
     const [red, green] = await colourAt(copy(photo, '640.jpg'), x, y)
     expect(red).toBeGreaterThan(180)
@@ -27,7 +27,7 @@ describe('taking a photo in', () => {
   })
 
   it('brings a wide-gamut colour to sRGB instead of dropping its profile', async () => {
-    const photo = await processPhoto(await cameraPhoto({ orientation: 1, corner: { r: 200, g: 60, b: 60 } }))
+    const photo = await processPhoto(await cameraPhoto({ width: 600, height: 400, orientation: 1, corner: { r: 200, g: 60, b: 60 } }))
     // In the file this red stands as about 186, 73, 68 of Display P3: without its profile it would come out that dull.
     const [red, green, blue] = await colourAt(copy(photo, '1280.jpg'), 0.1, 0.1)
     expect(Math.abs(red! - 200)).toBeLessThan(4)
@@ -45,6 +45,16 @@ describe('taking a photo in', () => {
     for (const { file, bytes } of photo.renditions) {
       const text = Buffer.from(bytes).toString('latin1')
       expect(PLANTED.filter(word => text.includes(word)), file).toEqual([])
+    }
+  })
+
+  it('keeps the whole length of a long photo in its preview, nose to tail', async () => {
+    const ends = await sharp({ create: { width: 1200, height: 300, channels: 3, background: 'green' } })
+      .composite([0, 1140].map(left => ({ input: { create: { width: 60, height: 300, channels: 3 as const, background: 'red' } }, left, top: 0 }))).png().toBuffer()
+    const preview = copy(await processPhoto(ends), 'preview.jpg')
+    for (const x of [0, 0.95]) {
+      const { channels } = await sharp(await sharp(preview).extract({ left: Math.round(x * 1200), top: 310, width: 50, height: 10 }).toBuffer()).stats()
+      expect(channels[0]!.mean).toBeGreaterThan(200)
     }
   })
 

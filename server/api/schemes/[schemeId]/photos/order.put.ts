@@ -1,7 +1,7 @@
 import { requireContext } from '#server/http/context'
 import { defineApiHandler } from '#server/http/define-api-handler'
 import { parseBody, parseParams } from '#server/http/parse'
-import { orderPhotos } from '#server/services/photos/change-photo'
+import { orderPhotos } from '#server/services/photos/order-photos'
 import { listPhotos } from '#server/services/photos/list-photos'
 import { PhotoOrder } from '#shared/photos/photo-view'
 import { SchemeParams } from '#shared/scheme/scheme-input'

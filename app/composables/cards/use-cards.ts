@@ -1,0 +1,45 @@
+import { computed, type ComputedRef, type Ref } from 'vue'
+import type { CardView } from '#shared/cards/card'
+
+const key = (schemeId?: string) => schemeId ? `cards of ${schemeId}` : 'cards'
+
+/** Cards of the workshop, newest first; of one scheme when it is named. */
+export async function useCards(schemeId?: string): Promise<{ cards: ComputedRef<readonly CardView[]>, error: Ref<unknown>, refresh: () => Promise<void> }> {
+  const request = useRequestFetch()
+  const { data, error, refresh } = await useAsyncData(key(schemeId), (): Promise<CardView[]> => request('/api/cards', { query: { schemeId } }), { deep: false })
+  return { cards: computed(() => data.value ?? []), error, refresh: () => refresh() }
+}
+
+/** One card of the workshop. */
+export async function useCard(cardId: string): Promise<{ card: Ref<CardView | null>, error: Ref<unknown>, refresh: () => Promise<void> }> {
+  const request = useRequestFetch()
+  const { data, error, refresh } = await useAsyncData(`card ${cardId}`, (): Promise<CardView> => request(`/api/cards/${cardId}`), { deep: false })
+  return {
+    card: computed({
+      get: () => data.value ?? null,
+      set: (card) => {
+        data.value = card ?? undefined
+      },
+    }),
+    error,
+    refresh: () => refresh(),
+  }
+}
+
+/** What can be done with cards; each throws when it is refused. */
+export function useCardActions() {
+  return {
+    /** Starts a card of a published scheme. */
+    async start(schemeId: string): Promise<CardView> {
+      // The key lets a request that is sent again on a bad line start one card, not two.
+      const card = await $fetch('/api/cards', { method: 'POST', body: { schemeId }, headers: { 'idempotency-key': crypto.randomUUID() } })
+      await refreshNuxtData([key(), key(schemeId)])
+      return card
+    },
+    share: (cardId: string): Promise<CardView> => $fetch(`/api/cards/${cardId}/share`, { method: 'POST', body: {} }),
+    revoke: (cardId: string): Promise<CardView> => $fetch(`/api/cards/${cardId}/revoke`, { method: 'POST', body: {} }),
+    async remove(cardId: string): Promise<void> {
+      await $fetch(`/api/cards/${cardId}`, { method: 'DELETE' })
+    },
+  }
+}

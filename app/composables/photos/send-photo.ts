@@ -1,0 +1,27 @@
+import { Problem, ProblemData } from '#shared/errors/problem'
+import { PhotoView } from '#shared/photos/photo-view'
+
+/** Sends one camera file as it is, telling how many bytes have gone; throws a Problem when refused, a TypeError when nobody answers. */
+export function sendPhoto(schemeId: string, file: Blob, onSent: (bytes: number) => void): Promise<PhotoView> {
+  return new Promise((resolve, reject) => {
+    // fetch cannot tell how much of a body has gone.
+    const request = new XMLHttpRequest()
+    request.open('POST', `/api/schemes/${schemeId}/photos`)
+    request.setRequestHeader('content-type', 'application/octet-stream')
+    request.responseType = 'json'
+    request.upload.onprogress = event => onSent(event.loaded)
+    request.upload.onload = () => onSent(file.size)
+    request.onload = () => {
+      const photo = PhotoView.safeParse(request.response)
+      if (request.status === 201 && photo.success) return resolve(photo.data)
+      reject(refusalIn(request.response))
+    }
+    request.onerror = () => reject(new TypeError('No answer'))
+    request.send(file)
+  })
+}
+
+function refusalIn(answer: unknown): Problem {
+  const problem = ProblemData.safeParse(answer)
+  return new Problem(problem.success ? problem.data : { code: 'server/failed' })
+}
