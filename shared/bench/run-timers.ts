@@ -1,5 +1,5 @@
 import { partsOf, waitOf } from './run-parts'
-import { type MixStep, isWait, type WaitStep, waitSeconds } from './run-step'
+import { isWait, type LayStep, type MixStep, type WaitStep, waitSeconds } from './run-step'
 import { isThrough, type RunPlan, type RunState } from './run-state'
 
 /** A wait that some pieces are in. */
@@ -45,18 +45,20 @@ export interface CupNow {
   setsAt: number | null
 }
 
-/** The cup that was mixed last and is not cleaned out, and whose coats are not all laid; undefined when there is none. */
+/** The cup that was mixed last among those whose coats are not yet on every piece; undefined when there is none. */
 export function cupNow(plan: RunPlan, state: RunState): CupNow | undefined {
-  const mixed = plan.steps.flatMap((step): CupNow[] => {
+  const parts = partsOf(plan, state)
+  const isWanted = (mix: MixStep) => plan.steps.some(step => step.kind === 'lay' && isFrom(mix, step)
+    && parts.some(part => part.pieces.some(piece => !isThrough(step, piece, state))))
+  return plan.steps.flatMap((step): CupNow[] => {
     const done = state.done.get(step.id)
-    if (step.kind !== 'mix' || !done) return []
+    if (step.kind !== 'mix' || !done || !isWanted(step)) return []
     const mixedAt = Date.parse(done.at)
     return [{ step, mixedAt, setsAt: step.potLifeMinutes === null ? null : mixedAt + step.potLifeMinutes * 60_000 }]
   }).sort((a, b) => b.mixedAt - a.mixedAt)[0]
-  if (!mixed) return undefined
-  const isLeft = partsOf(plan, state).some(part => part.pieces.some(piece => plan.steps.some(step => step.kind === 'lay'
-    && mixed.step.coats.some(coat => coat.id === step.coat.id)
-    && (mixed.step.only === null || step.id === mixed.step.id.replace(/^mix/, 'lay'))
-    && !isThrough(step, piece, state))))
-  return isLeft ? mixed : undefined
+}
+
+/** Whether a coat is laid from this very mix: of the same coats, and for the same pieces where it sets. */
+function isFrom(mix: MixStep, lay: LayStep): boolean {
+  return mix.coats.some(coat => coat.id === lay.coat.id) && mix.only?.[0] === lay.only?.[0]
 }

@@ -1,0 +1,16 @@
+import { computed, type ComputedRef, type Ref } from 'vue'
+import type { RevisionView } from '#shared/scheme/scheme-view'
+
+/** One revision of a finish, as it was frozen. */
+export async function useRevision(schemeId: string, number: number): Promise<{ revision: ComputedRef<RevisionView | null>, error: Ref<unknown> }> {
+  const request = useRequestFetch()
+  const { data, error } = await useAsyncData(`revision ${schemeId} ${number}`, () => request(`/api/schemes/${schemeId}/revisions/${number}`), { deep: false })
+  return { revision: computed(() => data.value ?? null), error }
+}
+
+/** The newest revision's number of a finish; 0 when it was never published. */
+export async function newestRevision(schemeId: string): Promise<number> {
+  const request = useRequestFetch()
+  const { data } = await useAsyncData(`newest revision ${schemeId}`, () => request(`/api/schemes/${schemeId}/revisions`), { deep: false })
+  return Math.max(0, ...data.value?.items.map(revision => revision.number) ?? [])
+}
