@@ -24,7 +24,12 @@ export default defineNuxtConfig({
   ],
   // The sealed cookie's password comes from the settings at start; without a value here the module would write one into .env.
   runtimeConfig: { session: { password: 'set from SESSION_PASSWORD when the server starts' } },
-  alias: { '#shared': here('./shared'), '#server': here('./server') },
+  alias: {
+    '#shared': here('./shared'),
+    '#server': here('./server'),
+    // The sealed cookie's own functions, named so that the page's types find them too: the module gives them to the server by auto-import only.
+    '#sealed-session': here('./node_modules/nuxt-auth-utils/dist/runtime/server/utils/session'),
+  },
   compatibilityDate: '2026-11-01',
   nitro: {
     plugins: ['~~/server/boot/runtime-config.ts', '~~/server/boot/security-headers.ts'],
@@ -43,12 +48,19 @@ export default defineNuxtConfig({
       },
     },
   },
+  // A card is read by people we do not know on whatever they have in hand: words and photos, and no script at all.
+  routeRules: {
+    '/c/**': {
+      noScripts: true,
+      security: { headers: { referrerPolicy: 'no-referrer', contentSecurityPolicy: { 'script-src': ['\'none\''], 'connect-src': ['\'none\''], 'worker-src': ['\'none\''], 'media-src': ['\'none\''] } } },
+    },
+  },
   typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
   telemetry: false,
   hooks: {
     // The session is answered by our own route; the module's routes would be a second door.
     'nitro:config': (nitro) => {
-      nitro.handlers = nitro.handlers?.filter(handler => handler.route !== '/api/_auth/session')
+      nitro.handlers = nitro.handlers?.filter(handler => handler?.route !== '/api/_auth/session')
     },
   },
   auth: { loadStrategy: 'none' },

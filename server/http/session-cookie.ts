@@ -1,5 +1,5 @@
 import { type H3Event, getCookie } from 'h3'
-import { clearUserSession, getUserSession, replaceUserSession } from '#imports'
+import { clearUserSession, getUserSession, replaceUserSession } from '#sealed-session'
 import { settings } from '#server/settings'
 
 /** The cookie's name; over https one that a browser refuses from any other host or path. */
