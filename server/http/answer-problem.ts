@@ -25,8 +25,6 @@ export async function answerProblem(event: H3Event, problem: ProblemData): Promi
   setResponseHeader(event, 'cache-control', 'no-store')
   removeResponseHeader(event, 'etag')
   if (problem.code === 'auth/too-many-tries') setResponseHeader(event, 'retry-after', problem.retryAfterSeconds)
-  // Whatever of the request was not read yet is not worth waiting for.
-  if (problem.code === 'request/too-large') setResponseHeader(event, 'connection', 'close')
   const body = { type: `urn:countershade:problem:${problem.code.replace('/', ':')}`, title, status, ...problem }
   await send(event, JSON.stringify(body), 'application/problem+json')
 }

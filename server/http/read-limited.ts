@@ -13,7 +13,7 @@ export function readLimited(event: H3Event, maxBytes: number): Promise<Buffer> {
     let bytes = 0
     const refuse = () => {
       request.off('data', take)
-      // Let go of unread, the connection would be cut before its sender has read why.
+      // What still comes is thrown away: with the line cut, its sender would never read why. Node ends a request that goes on for minutes.
       request.resume()
       reject(new Problem({ code: 'request/too-large' }))
     }

@@ -1,0 +1,106 @@
+import { readFileSync } from 'node:fs'
+import AxeBuilder from '@axe-core/playwright'
+import { type Page, expect, test } from '@playwright/test'
+import { letterTo, tokenTo } from '../api/mailbox'
+
+interface DemoSignIn { email: string, password: string, role: string }
+
+const PASSWORD = 'a roach on a wet stone'
+const freshAddress = (who: string) => `${who}-${crypto.randomUUID().slice(0, 8)}@shore.example`
+
+function demo(role: string): DemoSignIn {
+  const all = JSON.parse(readFileSync(process.env.TEST_DEMO_SIGN_INS ?? '', 'utf8')) as DemoSignIn[]
+  const found = all.find(one => one.role === role)
+  if (!found) throw new Error(`The demo lets no ${role} in.`)
+  return found
+}
+
+/** What the browser refuses to run or to load is written to its console. */
+function policyBreaches(page: Page): string[] {
+  const breaches: string[] = []
+  page.on('console', (message) => {
+    if (/content security policy|hydration/i.test(message.text())) breaches.push(message.text())
+  })
+  page.on('pageerror', error => breaches.push(error.message))
+  return breaches
+}
+
+async function signIn(page: Page, { email, password }: { email: string, password: string }, to = '/workshop') {
+  await page.goto(to)
+  await page.getByLabel('E-mail').fill(email)
+  await page.getByLabel('Password').fill(password)
+  await page.getByRole('button', { name: 'Sign in' }).click()
+  await page.waitForURL(`**${to}`)
+}
+
+async function openWorkshop(page: Page, email: string, name: string) {
+  await page.goto('/sign-up')
+  await page.getByLabel('Your e-mail').fill(email)
+  await page.getByRole('button', { name: 'Send the letter' }).click()
+  await expect(page.getByText(`Sent to ${email}`)).toBeVisible()
+  await page.goto(`/sign-up/${await tokenTo(email)}`)
+  await page.getByLabel('Name of the workshop').fill(name)
+  await page.getByLabel('Your name').fill('Runa')
+  await page.getByLabel('Choose a password').fill(PASSWORD)
+  await page.getByRole('button', { name: 'Open the workshop' }).click()
+  await page.waitForURL('**/schemes')
+}
+
+test('whoever is signed out is asked who they are, and comes to the page they wanted', async ({ page }) => {
+  const breaches = policyBreaches(page)
+  const owner = demo('owner')
+  await page.goto('/workshop')
+  await expect(page).toHaveURL(/\/sign-in\?back=/)
+  await page.getByLabel('E-mail').fill(owner.email)
+  await page.getByLabel('Password').fill('not this one')
+  await page.getByRole('button', { name: 'Sign in' }).click()
+  await expect(page.getByRole('alert')).toContainText('do not fit together')
+  await page.getByLabel('Password').fill(owner.password)
+  await page.getByRole('button', { name: 'Sign in' }).click()
+  await page.waitForURL('**/workshop')
+  await expect(page.getByRole('heading', { name: 'People' })).toBeVisible()
+  expect(breaches).toEqual([])
+})
+
+test('a workshop is opened by letter, somebody is asked in, and is out at once when taken out', async ({ page, browser }) => {
+  const breaches = policyBreaches(page)
+  const guest = freshAddress('guest')
+  await openWorkshop(page, freshAddress('owner'), 'Runa on the shore')
+  await page.goto('/workshop')
+  await page.getByLabel('E-mail').fill(guest)
+  await page.getByRole('button', { name: 'Invite' }).click()
+  await expect(page.getByRole('cell', { name: guest, exact: true })).toBeVisible()
+  expect((await letterTo(guest)).subject).toBe('Runa on the shore asks you in')
+
+  const elsewhere = await browser.newContext({ baseURL: process.env.TEST_BASE_URL })
+  const guestPage = await elsewhere.newPage()
+  await guestPage.goto(`/invite/${await tokenTo(guest)}`)
+  await guestPage.getByLabel('Your name').fill('Stellan')
+  await guestPage.getByLabel('Choose a password').fill(PASSWORD)
+  await guestPage.getByRole('button', { name: 'Come in' }).click()
+  await guestPage.waitForURL('**/schemes')
+  await guestPage.goto('/workshop')
+  await expect(guestPage.getByRole('button', { name: 'Invite' })).toHaveCount(0)
+
+  await page.reload()
+  await page.getByRole('button', { name: 'Take out Stellan' }).click()
+  await page.getByRole('dialog').getByRole('button', { name: 'Take out' }).click()
+  await expect(page.getByRole('cell', { name: 'Stellan' })).toHaveCount(0)
+  await guestPage.goto('/workshop')
+  await expect(guestPage).toHaveURL(/\/sign-in/)
+  await elsewhere.close()
+  expect(breaches).toEqual([])
+})
+
+test('the door and the pages of people have no fault that axe can find, light and dark', async ({ page }) => {
+  await signIn(page, demo('owner'))
+  for (const colorScheme of ['light', 'dark'] as const) {
+    await page.emulateMedia({ colorScheme })
+    for (const path of ['/workshop', '/me', '/sign-in', '/sign-up', '/forgot']) {
+      await page.goto(path)
+      await expect(page.getByRole('heading', { level: 1 })).toBeVisible()
+      const { violations } = await new AxeBuilder({ page }).analyze()
+      expect(violations.map(one => `${path} ${colorScheme}: ${one.id} ${one.nodes.map(node => node.target.join(' ')).join(', ')}`)).toEqual([])
+    }
+  }
+})
