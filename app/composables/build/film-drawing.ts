@@ -92,7 +92,7 @@ export function filmDrawing(look: Look, blank: CutBlank, height: number): FilmDr
     })
     const isMasked = one.masks.length > 0
     // A hair at A′ at least, so that every coat has an end to lead from.
-    const level = isMasked ? raised : evened(raised, one.isClear ? 5 : 3).map((high, i) => Math.max(high, (base[i] ?? 0) + 0.45 * ((raised[i] ?? 0) - (base[i] ?? 0))))
+    const level = isMasked ? raised : evened(raised, one.isClear ? 14 : 5).map((high, i) => Math.max(high, (base[i] ?? 0) + 0.45 * ((raised[i] ?? 0) - (base[i] ?? 0))))
     below = level
     return { coatId: one.coat.id, texture: textureOf(one.coat, look.materials), film: one.film, base, top: level, isShortened, isMasked }
   })

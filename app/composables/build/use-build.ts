@@ -11,6 +11,7 @@ import type { Look } from '#shared/picture/look'
 import type { ZoneColour } from '#shared/picture/zone-colours'
 import type { Coat } from '#shared/scheme/coat'
 import type { SchemeEdit } from '#shared/scheme/edits'
+import type { BlankView } from '#shared/blank/blank-view'
 import type { MaskView } from '#shared/scheme/mask-view'
 import type { SchemeView } from '#shared/scheme/scheme-view'
 import { coatsOf } from '#shared/scheme/stack-order'
@@ -32,6 +33,7 @@ export interface Build {
   whyNot: ComputedRef<string | undefined>
   paints: ComputedRef<readonly PaintListItem[]>
   masks: ComputedRef<readonly MaskView[]>
+  blanks: ComputedRef<readonly BlankView[]>
   look: ComputedRef<Look>
   blank: ComputedRef<PreparedBlank>
   rows: ComputedRef<FilmRow[]>
@@ -64,7 +66,7 @@ export function useBuild(): Build {
 }
 
 /** Lays a scheme on the work surface, for everything below this component. */
-export function provideBuild(given: Pick<Build, 'scheme' | 'draft' | 'whyNot' | 'paints' | 'masks'>): Build {
+export function provideBuild(given: Pick<Build, 'scheme' | 'draft' | 'whyNot' | 'paints' | 'masks' | 'blanks'>): Build {
   const { draft, paints } = given
   const { say } = useToast()
   const { speak } = useSpoken()

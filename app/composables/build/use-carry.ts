@@ -1,4 +1,4 @@
-import { type Ref, ref } from 'vue'
+import { nextTick, type Ref, ref } from 'vue'
 import { carryWords } from './carry-words'
 import type { FilmRow } from './film-rows'
 import type { Build } from './use-build'
@@ -21,6 +21,8 @@ export function useCarry(build: Build): Carry {
   const carried = ref<string | null>(null)
   const said = ref('')
   let steps = 0
+  /** A row that moves in the page loses the focus for a moment; that is not the hand letting go. */
+  let isMoving = false
 
   function tell(words: string) {
     said.value = words
@@ -37,24 +39,34 @@ export function useCarry(build: Build): Carry {
     tell(`${nameOf(row)}, picked up. ${where(row.key)}. Arrows carry it, Space lays it, Escape brings it back.`)
   }
 
+  async function holdOn(key: string) {
+    await nextTick()
+    document.querySelector<HTMLElement>(`[data-carry="${key}"]`)?.focus()
+    isMoving = false
+  }
+
   function carry(row: FilmRow, way: 'up' | 'down') {
+    isMoving = true
     const done = build.act(row.is === 'coat'
       ? { do: 'carry-coat', coatId: row.coat.id, way }
       : { do: 'move-item', from: row.row, to: row.row + (way === 'up' ? 1 : -1) })
+    void holdOn(row.key)
     if (!done) return
     steps++
     tell(where(row.key))
   }
 
   function lay() {
-    if (carried.value === null) return
+    if (carried.value === null || isMoving) return
     const key = carried.value
     carried.value = null
     tell(`Laid. ${where(key)}`)
     said.value = ''
   }
 
-  function bringBack() {
+  function bringBack(row: FilmRow) {
+    isMoving = true
+    void holdOn(row.key)
     for (; steps > 0; steps--) build.draft.undo()
     carried.value = null
     tell('Brought back to where it lay')
@@ -82,7 +94,7 @@ export function useCarry(build: Build): Carry {
           if (!isCarried) return
           event.preventDefault()
           event.stopPropagation()
-          bringBack()
+          bringBack(row)
       }
     },
   }
