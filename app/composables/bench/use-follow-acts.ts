@@ -22,6 +22,8 @@ export interface FollowActs {
   isMoving: Ref<boolean>
   next: () => void
   press: (piece: number) => void
+  /** One pass on each of these, or each of these passes inspection. */
+  all: (pieces: number[]) => void
 }
 
 /** Turns presses into acts; `speak` says what a press without an act means. */
@@ -72,5 +74,11 @@ export function useFollowActs(follow: Follow, speak: (words: string) => void): F
     else speak(`Piece ${piece} has ${countWords(laid, 'pass', 'passes')}. One more is noted under Done differently.`)
   }
 
-  return { leaving, setting, differing, asidePiece, seenPiece, isMoving, next, press }
+  function all(pieces: number[]) {
+    const now = step.value
+    if (now?.kind === 'lay') acts.do({ v: 1, kind: 'pass-laid', coatId: now.coat.id, pieces, passes: 1 })
+    if (now?.kind === 'inspect') acts.do({ v: 1, kind: 'inspected', pieces, passed: true, note: '' })
+  }
+
+  return { leaving, setting, differing, asidePiece, seenPiece, isMoving, next, press, all }
 }
