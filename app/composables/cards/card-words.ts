@@ -28,6 +28,6 @@ export function letterTo(card: Pick<CardView, 'title' | 'workshop'>, link: strin
 
 /** A leading figure and what follows it, as in "90 mm"; null for words alone. */
 export function figureIn(text: string): { figure: string, rest: string } | null {
-  const [, figure, rest] = /^(\d[\d.,]*)(?!\d)(.*)$/s.exec(text) ?? []
+  const [, figure, rest] = /^(\d+(?:[.,]\d+)*)(.*)$/s.exec(text) ?? []
   return figure === undefined ? null : { figure, rest: rest ?? '' }
 }
