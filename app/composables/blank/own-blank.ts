@@ -40,6 +40,6 @@ export function blankFromWish(wish: OwnBlank): { shape: BlankShape, trouble?: un
 
 /** Lower-case letters, digits and dashes of a label; "blank" where nothing is left. */
 export function lastingName(label: string): string {
-  const plain = label.normalize('NFKD').toLowerCase().replace(/[^a-z0-9]+/g, '-').replace(/^-+|-+$/g, '').slice(0, 60)
+  const plain = label.normalize('NFKD').replace(/\p{M}/gu, '').toLowerCase().replace(/[^a-z0-9]+/g, '-').replace(/^-+|-+$/g, '').slice(0, 60)
   return plain || 'blank'
 }
