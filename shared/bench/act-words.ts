@@ -14,7 +14,7 @@ const named = (steps: readonly RunStep[], stepId: string) => steps.find(step => 
 /** What a take-back would undo, in little room: "pass on 8", "rest 6 min". */
 export function takeBackWords(act: RunAct, steps: readonly RunStep[]): string {
   switch (act.kind) {
-    case 'pass-laid': return act.pieces.length === 1 ? `pass on ${act.pieces[0]}` : `pass on ${countWords(act.pieces.length, 'piece')}`
+    case 'pass-laid': return act.pieces.length === 1 ? `pass on ${act.pieces[0]}` : `${act.pieces.length} passes`
     case 'step-done': {
       const step = named(steps, act.stepId)
       return step ? `to ${nextWords(step)}` : 'last step'

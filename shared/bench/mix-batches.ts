@@ -1,7 +1,7 @@
 /** Share of the working time on the label that a mix is planned to be used within: the rest is for a warm room and a slow hand (common practice). */
 const USABLE = 2 / 3
 /** Minutes one pass of a setting clear takes on one piece, brushed or sprayed (common practice; a planning value). */
-const MINUTES_PER_PASS = 3
+const MINUTES_PER_PASS = 2
 
 /** How many pieces one mix of a paint that sets can be laid on before it gels; at least 1. Pot life in minutes at 25 °C. */
 export function piecesPerMix(potLifeMinutes: number, passes: number): number {

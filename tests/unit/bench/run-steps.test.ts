@@ -62,11 +62,11 @@ describe('the steps of a finish', () => {
 
 describe('a clear that sets in its cup', () => {
   it('is mixed as often as the pot life asks, each time for pieces that follow one another', () => {
-    // 30 minutes of pot life, two thirds of it used, 3 minutes a piece: six pieces a mix.
-    expect(piecesPerMix(30, 1)).toBe(6)
-    const clear = runSteps(PERCH, 16).filter(step => step.id.includes(id('coat', 4)))
+    // 30 minutes of pot life, two thirds of it used, 2 minutes a piece: ten pieces a mix.
+    expect(piecesPerMix(30, 1)).toBe(10)
+    const clear = runSteps(PERCH, 24).filter(step => step.id.includes(id('coat', 4)))
     expect(clear.map(step => [step.kind, step.only])).toEqual([
-      ['mix', [1, 5]], ['lay', [1, 5]], ['mix', [6, 10]], ['lay', [6, 10]], ['mix', [11, 16]], ['lay', [11, 16]], ['turn', null],
+      ['mix', [1, 8]], ['lay', [1, 8]], ['mix', [9, 16]], ['lay', [9, 16]], ['mix', [17, 24]], ['lay', [17, 24]], ['turn', null],
     ])
   })
 
