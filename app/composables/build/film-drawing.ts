@@ -38,7 +38,7 @@ const STEPS = 128
 const GROUND = 0.1
 const CLEAR = 0.11
 const HEAD_ROOM = 0.045
-const SCALE_MOST = 14
+const SCALE_MOST = 8
 /** A coat that is hardly there still shows as a hair, µm of drawing at scale 1. */
 const HAIR = 0.8
 
