@@ -31,3 +31,9 @@ export function figureIn(text: string): { figure: string, rest: string } | null 
   const [, figure, rest] = /^(\d+(?:[.,]\d+)*)(.*)$/s.exec(text) ?? []
   return figure === undefined ? null : { figure, rest: rest ?? '' }
 }
+
+/** What a photo shows, without the names that stand above it already: "Perch in bars on Shad 80, left side" is "left side". */
+export function viewWords(alt: string, title: string, blank: string): string {
+  const bare = [title, 'on', blank].reduce((rest, known) => known !== '' && rest.toLowerCase().startsWith(known.toLowerCase()) ? rest.slice(known.length).replace(/^[\s,.:]+/, '') : rest, alt.trim())
+  return bare || alt.trim()
+}

@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest'
-import { figureIn, letterTo, stateWords } from '~/composables/cards/card-words'
+import { figureIn, letterTo, stateWords, viewWords } from '~/composables/cards/card-words'
 
 it('sets a leading figure as a figure and leaves its comma to the words', () => {
   expect(figureIn('38, with its box')).toEqual({ figure: '38', rest: ', with its box' })
@@ -19,4 +19,11 @@ it('says in words whether a customer can see a card', () => {
   expect(stateWords({ state: 'not shared', sharedAt: null, revokedAt: null }).words).toBe('Not shared')
   expect(stateWords({ state: 'shared', sharedAt, revokedAt: null }).words).toBe('Shared since 4 March 2026')
   expect(stateWords({ state: 'revoked', sharedAt, revokedAt: '2026-03-05T10:00:00.000Z' }).words).toBe('Revoked on 5 March 2026')
+})
+
+it('tells which side a photo shows without saying the name again', () => {
+  expect(viewWords('Perch in bars on Shad 80, left side', 'Perch in bars', 'Shad 80')).toBe('left side')
+  expect(viewWords('close up', 'Perch in bars', 'Shad 80')).toBe('close up')
+  expect(viewWords('Perch in bars', 'Perch in bars', 'Shad 80')).toBe('Perch in bars')
+  expect(viewWords('', '', '')).toBe('')
 })
