@@ -27,6 +27,18 @@ export async function useWorkshopMasks(): Promise<ComputedRef<readonly MaskView[
   return computed(() => data.value ?? [])
 }
 
+/** Schemes on the bench now, each with the number of its newest run. What cannot be read shows nothing. */
+export async function useBenchRuns(): Promise<ComputedRef<ReadonlyMap<string, number>>> {
+  const may = useMay()
+  const request = useRequestFetch()
+  const { data } = await useAsyncData('room runs', async () => may('run:read') ? (await request('/api/runs').catch(() => null))?.items ?? [] : [], { deep: false })
+  return computed(() => {
+    const newest = new Map<string, number>()
+    for (const { scheme, number } of data.value ?? []) newest.set(scheme.id, Math.max(number, newest.get(scheme.id) ?? 0))
+    return newest
+  })
+}
+
 /** Schemes whose card is shared now. What cannot be read shows nothing, since the wall does not depend on it. */
 export async function useSharedCards(): Promise<ComputedRef<ReadonlySet<string>>> {
   const may = useMay()

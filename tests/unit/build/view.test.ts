@@ -31,10 +31,11 @@ describe('a finish on the wall', () => {
   })
 
   it('says where it stands, and nothing of its recipe to those who see only looks', () => {
-    expect(schemeState(row({ headNumber: 0 }), false)?.words).toBe('draft, never published')
-    expect(schemeState(row({ draftIsAhead: true }), false)?.words).toBe('draft on revision 2')
-    expect(schemeState(row({}), true)?.words).toBe('revision 2, card shared')
-    expect(schemeState({ sees: 'look', id: 'x', name: 'Perch', fish: '', blank: { id: 'b', name: 'Minnow 90' }, publishedAt: '2026-05-02T10:00:00Z', pictureTag: 't' }, true)).toBeNull()
+    expect(schemeState(row({ headNumber: 0 }), { isCardShared: false })?.words).toBe('draft, never published')
+    expect(schemeState(row({ draftIsAhead: true }), { isCardShared: false })?.words).toBe('draft on revision 2')
+    expect(schemeState(row({}), { isCardShared: true, run: 31 })?.words).toBe('run 31 on the bench')
+    expect(schemeState(row({}), { isCardShared: true })?.words).toBe('revision 2, card shared')
+    expect(schemeState({ sees: 'look', id: 'x', name: 'Perch', fish: '', blank: { id: 'b', name: 'Minnow 90' }, publishedAt: '2026-05-02T10:00:00Z', pictureTag: 't' }, { isCardShared: true, run: 31 })).toBeNull()
   })
 })
 
