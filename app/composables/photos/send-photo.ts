@@ -1,12 +1,15 @@
 import { Problem, ProblemData } from '#shared/errors/problem'
 import { PhotoView } from '#shared/photos/photo-view'
 
+/** What a photo is of: a scheme, and the run at the bench it was taken of, if so. */
+export interface PhotoPlace { readonly schemeId: string, readonly runId?: string }
+
 /** Sends one camera file as it is, telling how many bytes have gone; throws a Problem when refused, a TypeError when nobody answers. */
-export function sendPhoto(schemeId: string, file: Blob, onSent: (bytes: number) => void): Promise<PhotoView> {
+export function sendPhoto(place: PhotoPlace, file: Blob, onSent: (bytes: number) => void): Promise<PhotoView> {
   return new Promise((resolve, reject) => {
     // fetch cannot tell how much of a body has gone.
     const request = new XMLHttpRequest()
-    request.open('POST', `/api/schemes/${schemeId}/photos`)
+    request.open('POST', `/api/schemes/${place.schemeId}/photos${place.runId ? `?runId=${place.runId}` : ''}`)
     request.setRequestHeader('content-type', 'application/octet-stream')
     request.responseType = 'json'
     request.upload.onprogress = event => onSent(event.loaded)

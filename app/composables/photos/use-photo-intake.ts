@@ -1,6 +1,6 @@
 import { computed, type ComputedRef, type Ref, ref } from 'vue'
 import { useEventListener } from '@vueuse/core'
-import { sendPhoto } from './send-photo'
+import { type PhotoPlace, sendPhoto } from './send-photo'
 import { explain } from '~/errors/explain'
 import { sentence } from '~/errors/sentence'
 import { photoFileRefusal } from '#shared/photos/photo-file-check'
@@ -33,8 +33,8 @@ export interface PhotoIntake {
   putAway: (id: number) => void
 }
 
-/** Takes files in for a scheme; `arrived` hears of each photo as soon as it is one. */
-export function usePhotoIntake(schemeId: string, arrived: (photo: PhotoView) => void): PhotoIntake {
+/** Takes files in for a scheme, or for a run of it; `arrived` hears of each photo as soon as it is one. */
+export function usePhotoIntake(place: PhotoPlace, arrived: (photo: PhotoView) => void): PhotoIntake {
   const files = ref<IntakeFile[]>([])
   const kept = new Map<number, File>()
   const isBusy = computed(() => files.value.some(file => file.stage !== 'refused'))
@@ -51,7 +51,7 @@ export function usePhotoIntake(schemeId: string, arrived: (photo: PhotoView) => 
     file.stage = 'sending'
     file.sent = 0
     try {
-      const photo = await sendPhoto(schemeId, whole, (bytes) => {
+      const photo = await sendPhoto(place, whole, (bytes) => {
         file.sent = bytes
         if (bytes >= file.bytes) file.stage = 'opening'
       })
