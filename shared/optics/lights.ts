@@ -27,7 +27,8 @@ export interface BandWeights {
 
 interface Table { first: number, step: number, power: number[] }
 
-const POWER: Record<Light, Table> = { 'D65': d65, 'A': a, 'F11': f11, 'LED-5000': led5000, 'LED-3000': led3000 }
+/** Tables of power of the lights, as read. */
+export const POWER: Readonly<Record<Light, Table>> = { 'D65': d65, 'A': a, 'F11': f11, 'LED-5000': led5000, 'LED-3000': led3000 }
 
 /** Tells whether a word names a light the engine knows. */
 export function isLight(name: unknown): name is Light {

@@ -1,7 +1,8 @@
 import { assertBands } from './bands'
 import { ENGINE_VERSION } from './engine-version'
 import type { Flake } from './flake'
-import type { Fluorescence, PaintOptics } from './paint-optics'
+import { emissionPhotons, type Fluorescence, glowOf } from './fluorescence'
+import type { PaintOptics } from './paint-optics'
 
 /** A paint, and how many drops of it go into the cup (any unit of volume, as sprayed). */
 export interface DropPart { optics: PaintOptics, drops: number }
@@ -65,10 +66,22 @@ function mixedFlake(used: readonly DropPart[], total: number): Flake | undefined
   return { ...first, flakesPerPass: flakes / total, sigma: mean(flake => flake.sigma), edge: mean(flake => flake.edge) }
 }
 
-/** The strongest glow, weakened by its share of the cup: a rough rule, since the other parts also take its light. */
+/**
+ * One glow for the cup: what feeds it adds up by volume, and each dye lends its yield and its light by what it takes of a flat
+ * white. With one glowing paint this is exact; with two, which of them a colour of light feeds is no longer told apart.
+ */
 function mixedGlow(used: readonly DropPart[], total: number): Fluorescence | undefined {
-  const glowing = used.flatMap(({ optics, drops }) => optics.fluorescent ? [{ glow: optics.fluorescent, drops }] : [])
-  if (glowing.length === 0) return undefined
-  const main = glowing.reduce((most, part) => part.drops > most.drops ? part : most)
-  return { ...main.glow, quantumYield: main.glow.quantumYield * main.drops / total }
+  const glowing = used.flatMap(({ optics, drops }) => {
+    const glow = glowOf(optics)
+    return glow ? [{ glow, share: drops / total, takes: drops / total * glow.Kf.reduce((sum, Kf) => sum + Kf, 0) }] : []
+  })
+  const takes = glowing.reduce((sum, part) => sum + part.takes, 0)
+  if (!(takes > 0)) return undefined
+  const main = glowing.reduce((most, part) => part.takes > most.takes ? part : most).glow
+  const Kf = main.Kf.map((_, i) => glowing.reduce((sum, { glow, share }) => sum + share * glow.Kf[i]!, 0))
+  if (glowing.length === 1) return { ...main, Kf }
+  const quantumYield = glowing.reduce((sum, part) => sum + part.glow.quantumYield * part.takes, 0) / takes
+  const bells = glowing.map(({ glow, takes }) => ({ bell: emissionPhotons(glow), photons: takes * glow.quantumYield }))
+  const emission = Kf.map((_, i) => bells.reduce((sum, { bell, photons }) => sum + photons * bell[i]!, 0) / (takes * quantumYield))
+  return { peak: main.peak, width: main.width, quantumYield, Kf, emission }
 }

@@ -1,17 +1,16 @@
 import type { Lab } from './colorimetry'
 import { ENGINE_VERSION } from './engine-version'
 import type { Flake, Oxide } from './flake'
+import { type Fluorescence, glowAbsorption } from './fluorescence'
 import { flakeFromKnown } from './known-flake'
 import { filmFromDye, filmFromMasstone, filmFromTwoSwatches } from './known-film'
 import type { Finish } from './surface'
 
+export type { Fluorescence } from './fluorescence'
 export { type DropPart, mixOptics } from './mix-optics'
 
 /** How a paint came to be known; it decides how far its promises can be trusted. */
 export type KnownHow = 'two-swatches' | 'masstone-hide' | 'dye-over-white' | 'interference' | 'metallic' | 'clear'
-
-/** Light a fluorescent gives off: a bell of wavelengths, nm, and the photons out for each photon in, 0…1. */
-export interface Fluorescence { peak: number, width: number, quantumYield: number }
 
 /** What the engine needs to know of a paint, for one pass of it as sprayed. Plain data: it is stored as it is. */
 export interface PaintOptics {
@@ -41,14 +40,22 @@ export interface KnownTwoSwatches {
   passes: number
   /** Finish of the card's film when read; gloss (read off the highlight) when left out. */
   finish?: Finish
-  fluorescent?: Fluorescence
 }
 
 /** The colour of an opaque paint when thick, and the passes it takes to hide. */
-export interface KnownMasstone { how: 'masstone-hide', masstone: Lab, passesToHide: number, finish?: Finish, fluorescent?: Fluorescence }
+export interface KnownMasstone { how: 'masstone-hide', masstone: Lab, passesToHide: number, finish?: Finish }
 
 /** A true dye over white; `haze` is scattering per pass, 0 when left out. */
-export interface KnownDye { how: 'dye-over-white', overWhite: Lab, passes: number, whiteGround?: Lab, haze?: number, finish?: Finish }
+export interface KnownDye {
+  how: 'dye-over-white'
+  overWhite: Lab
+  passes: number
+  whiteGround?: Lab
+  haze?: number
+  finish?: Finish
+  /** The dye also glows; `overWhite` is then what it would show without its glow. */
+  fluorescent?: Omit<Fluorescence, 'Kf'>
+}
 
 /** A pearl: told by the thickness of its oxide, nm, or by the colour its face should have. */
 export interface KnownPearl {
@@ -80,11 +87,11 @@ export type PaintKnown = KnownTwoSwatches | KnownMasstone | KnownDye | KnownPear
 export function paintOpticsFrom(known: PaintKnown): PaintOptics {
   switch (known.how) {
     case 'two-swatches':
-      return { ...opticsOf('film', known.how, filmFromTwoSwatches(known)), ...glow(known.fluorescent) }
+      return opticsOf('film', known.how, filmFromTwoSwatches(known))
     case 'masstone-hide':
-      return { ...opticsOf('film', known.how, filmFromMasstone(known)), ...glow(known.fluorescent) }
+      return opticsOf('film', known.how, filmFromMasstone(known))
     case 'dye-over-white':
-      return opticsOf('film', known.how, filmFromDye(known))
+      return withGlow(opticsOf('film', known.how, filmFromDye(known)), known.fluorescent)
     case 'interference':
     case 'metallic': {
       const binder = known.tint
@@ -106,8 +113,8 @@ function opticsOf(kind: PaintOptics['kind'], how: KnownHow, { K, S, clipped }: {
   return { engineVersion: ENGINE_VERSION, bands: 36, kind, K: Array.from(K), S: Array.from(S), how, clipped }
 }
 
-function glow(fluorescent: Fluorescence | undefined): { fluorescent?: Fluorescence } {
-  return fluorescent ? { fluorescent } : {}
+function withGlow(dye: PaintOptics, glow: KnownDye['fluorescent']): PaintOptics {
+  return glow ? { ...dye, fluorescent: { ...glow, Kf: glowAbsorption(dye.K, glow) } } : dye
 }
 
 /** Aged binder absorbs from the violet end, falling off exponentially: a slope of 0.014 per nm is our assumption. */

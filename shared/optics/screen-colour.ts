@@ -95,6 +95,22 @@ export function softShoulder([x, y, z]: Xyz): Xyz {
   return [x * scale, y * scale, z * scale]
 }
 
+/** Where the brightest channel of a glowing colour begins to bend, and how softly. Chosen by eye. */
+const GLOW_KNEE = 0.8, GLOW_SOFTNESS = 0.28
+
+/**
+ * Screen colour of paint that gives off light: the brightest channel bends softly above 0.8 and takes the others with it, so
+ * that an orange that outshines the screen stays orange instead of turning pale.
+ */
+export function screenFromGlow(xyz: Xyz, light: Light = 'D65'): ScreenColour {
+  const linear = linearFromXyz(adaptToDaylight(xyz, light))
+  const most = Math.max(...linear)
+  const bent = most > GLOW_KNEE ? GLOW_KNEE + (1 - GLOW_KNEE) * (1 - Math.exp(-(most - GLOW_KNEE) / GLOW_SOFTNESS)) : most
+  const held = linear.map(channel => most > GLOW_KNEE ? channel * bent / most : channel) as Rgb // three of three
+  const [r, g, b] = isInside(held) ? held : intoGamut(held)
+  return { srgb: [encodeClamped(r), encodeClamped(g), encodeClamped(b)], outOfGamut: !isInside(linear) }
+}
+
 /** Screen colour of X, Y, Z seen under a light by an eye used to that light. */
 export function screenFromXyz(xyz: Xyz, light: Light = 'D65'): ScreenColour {
   const linear = linearFromXyz(adaptToDaylight(xyz, light))

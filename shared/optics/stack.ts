@@ -3,8 +3,10 @@ import { coatLayer } from './coat-layer'
 import { type Lab, labFromXyz, type Light, type Rgb, type Xyz, xyzFromReflectance } from './colorimetry'
 import { type CoatLayer, layOver } from './film'
 import { ASPECULAR, type Aspecular, radianceAtAngles } from './flake-angles'
+import { glowPhotons, hasGlow } from './glow'
+import { xyzOfPhotons } from './light-power'
 import type { PaintOptics } from './paint-optics'
-import { screenFromXyz, softShoulder } from './screen-colour'
+import { type ScreenColour, screenFromGlow, screenFromXyz, softShoulder } from './screen-colour'
 import { type Finish, measuredSpectrum } from './surface'
 
 /** One coat: a paint and the passes it was sprayed in. */
@@ -24,9 +26,14 @@ export interface StackReflectance { internal: Float64Array, measured: Float64Arr
 /** A colour three ways, and whether a screen had to draw it paler. */
 export interface Colour { xyz: Xyz, lab: Lab, srgb: Rgb, outOfGamut: boolean }
 
+/** What in a stack may outshine paper: nothing, flakes that mirror, or paint that gives off light. */
+export type Brightness = 'paper' | 'flakes' | 'glow'
+
 /** What a stack will look like under one light, seen straight on and lit from 45°; with flakes also by angle. */
 export interface Promised extends Colour {
   light: Light
+  /** What outshines paper in it, and so how a screen bends it. */
+  brightness: Brightness
   /** Only with flakes: colours by angle away from the gloss, 15…110 degrees. */
   angles?: Record<Aspecular, Colour>
   /** Only with flakes: mean of 15 and 25 degrees. */
@@ -54,23 +61,40 @@ export function coloursOnTheWayUp(stack: Stack, light: Light = 'D65'): Colour[] 
   })
 }
 
-/** The colour a finished stack is promised to have under a light. */
+/** The colour a finished stack is promised to have under a light; with what its fluorescents give off there. */
 export function promise(stack: Stack, light: Light = 'D65'): Promised {
   const layers = layersOf(stack)
-  if (!hasFlakes(stack)) return { light, ...seenAt45(stack, layers, light) }
+  const brightness = brightnessOf(stack)
+  if (!hasFlakes(stack)) return { light, brightness, ...seenAt45(stack, layers, light) }
 
   const diffuse = measuredSpectrum(layAll(stack, layers), stack.finish)
+  const glow = glowXyz(stack, layers, light)
   const radiance = radianceAtAngles(stack.coats, layers, diffuse)
-  const angles = Object.fromEntries(ASPECULAR.map(angle => [angle, colourOf(radiance[angle], light, true)])) as Record<Aspecular, Colour>
+  const seen = (reflectance: Spectrum) => colourOf(reflectance, light, brightness, glow)
+  const angles = Object.fromEntries(ASPECULAR.map(angle => [angle, seen(radiance[angle])])) as Record<Aspecular, Colour>
   const face = radiance[15].map((value, i) => (value + radiance[25][i]!) / 2)
-  return { light, ...angles[45], angles, face: colourOf(face, light, true), flop: angles[110] }
+  return { light, brightness, ...angles[45], angles, face: seen(face), flop: angles[110] }
 }
 
-/** The three forms of a reflectance's colour; `bright` bends what outshines paper so that a screen can draw it. */
-export function colourOf(reflectance: Spectrum, light: Light = 'D65', bright = false): Colour {
-  const xyz = xyzFromReflectance(reflectance, light)
-  const screen = screenFromXyz(bright ? softShoulder(xyz) : xyz, light)
-  return { xyz, lab: labFromXyz(xyz, light), ...screen }
+/** The three forms of a reflectance's colour, with light given off added; what may outshine paper is bent so that a screen can draw it. */
+export function colourOf(reflectance: Spectrum, light: Light = 'D65', brightness: Brightness = 'paper', glow: Xyz = [0, 0, 0]): Colour {
+  const [x, y, z] = xyzFromReflectance(reflectance, light)
+  const xyz: Xyz = [x + glow[0], y + glow[1], z + glow[2]]
+  return { xyz, lab: labFromXyz(xyz, light), ...screenOf(xyz, brightness, light) }
+}
+
+/** How a screen draws a colour. */
+export function screenOf(xyz: Xyz, brightness: Brightness, light: Light = 'D65'): ScreenColour {
+  switch (brightness) {
+    case 'paper': return screenFromXyz(xyz, light)
+    case 'flakes': return screenFromXyz(softShoulder(xyz), light)
+    case 'glow': return screenFromGlow(xyz, light)
+  }
+}
+
+function brightnessOf({ coats }: Stack): Brightness {
+  if (hasGlow(coats)) return 'glow'
+  return coats.some(coat => coat.optics.flake !== undefined) ? 'flakes' : 'paper'
 }
 
 function hasFlakes(stack: Stack): boolean {
@@ -79,8 +103,13 @@ function hasFlakes(stack: Stack): boolean {
 
 function seenAt45(stack: Stack, layers: readonly CoatLayer[], light: Light): Colour {
   const diffuse = measuredSpectrum(layAll(stack, layers), stack.finish)
-  if (!hasFlakes(stack)) return colourOf(diffuse, light)
-  return colourOf(radianceAtAngles(stack.coats, layers, diffuse, [45])[45], light, true)
+  const seen = hasFlakes(stack) ? radianceAtAngles(stack.coats, layers, diffuse, [45])[45] : diffuse
+  return colourOf(seen, light, brightnessOf(stack), glowXyz(stack, layers, light))
+}
+
+function glowXyz({ coats, ground }: Stack, layers: readonly CoatLayer[], light: Light): Xyz {
+  if (!hasGlow(coats)) return [0, 0, 0]
+  return xyzOfPhotons(glowPhotons(coats.map((coat, i) => ({ ...coat, layer: layers[i]! })), ground, light), light)
 }
 
 function layersOf(stack: Stack): CoatLayer[] {

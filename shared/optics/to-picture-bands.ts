@@ -17,6 +17,26 @@ export function toPictureBands(exact: Spectrum, out: Float64Array = new Float64A
   return out
 }
 
+/** How many exact bands each picture band stands for: 36 in all. A sum over exact bands is about one over picture bands with these. */
+export const PICTURE_BAND_WIDTHS: Readonly<Float64Array> = shareExactBands(new Float64Array(36).fill(1))
+
+/** Gives what lies in each of 36 bands to the picture bands beside it, by nearness, the outermost taking all beyond them; nothing is lost. */
+export function shareExactBands(exact: Spectrum): Float64Array {
+  assertBands('shareExactBands', BANDS_36.length, exact)
+  const out = new Float64Array(16)
+  BANDS_36.forEach((nm, i) => {
+    const next = BANDS_16.findIndex(node => node > nm)
+    if (next < 0) out[15]! += exact[i]!
+    else if (next === 0) out[0]! += exact[i]!
+    else {
+      const low = BANDS_16[next - 1]!, share = (nm - low) / (BANDS_16[next]! - low)
+      out[next - 1]! += (1 - share) * exact[i]!
+      out[next]! += share * exact[i]!
+    }
+  })
+  return out
+}
+
 /** X, Y and Z of each picture band under D65: 16 weights for X, then for Y, then for Z. */
 export const PICTURE_XYZ_WEIGHTS: Readonly<Float64Array> = Float64Array.from([...optimised.x, ...optimised.y, ...optimised.z])
 

@@ -1,15 +1,16 @@
 import { coefficientsIn } from '#shared/optics/coat-layer'
 import { filmInto } from '#shared/optics/film'
+import { glowOf } from '#shared/optics/fluorescence'
 import { diffuseFlake, singleFlake, type Flake, type SingleFlake } from '#shared/optics/flake'
 import { flakeCoat } from '#shared/optics/flake-coat'
 import { FLAKE_TABLE_COSINES } from '#shared/optics/flake-table'
 import type { PaintOptics } from '#shared/optics/paint-optics'
 import { SURFACE_INSIDE, SURFACE_OUTSIDE } from '#shared/optics/surface'
+import { glowLevels, type GlowLevels } from './glow-levels'
+import { BANDS, fillBetween, LEVELS } from './level-table'
 
-/** Bands of a picture. */
-export const BANDS = 16
-/** Levels of a deposit code. */
-export const LEVELS = 256
+export { BANDS, LEVELS } from './level-table'
+
 /** A coat of flakes is smooth in its thickness: it is worked out at every fourth level and read on straight lines between. */
 const FLAKE_STEP = 4
 /** Change of reflectance too small to see on any ground. */
@@ -30,6 +31,8 @@ export interface FlakeLevels {
 export interface CoatTable {
   /** Reflectance. */
   R: Float32Array
+  /** Transmittance. */
+  T: Float32Array
   /** T² - R². */
   Q: Float32Array
   /** What a ray keeps that goes down and up again through the coat. */
@@ -37,6 +40,7 @@ export interface CoatTable {
   /** Levels up to this one change nothing one could see. */
   empty: number
   flake?: FlakeLevels
+  glow?: GlowLevels
 }
 
 /**
@@ -47,11 +51,13 @@ export interface CoatTable {
 export function coatTable(paint: PaintOptics, passes: number): CoatTable {
   const { K, S } = coefficientsIn(paint, 'picture16')
   const table: CoatTable = {
-    R: new Float32Array(LEVELS * BANDS), Q: new Float32Array(LEVELS * BANDS), through: new Float32Array(LEVELS * BANDS), empty: 0,
+    R: new Float32Array(LEVELS * BANDS), T: new Float32Array(LEVELS * BANDS), Q: new Float32Array(LEVELS * BANDS), through: new Float32Array(LEVELS * BANDS), empty: 0,
   }
   if (paint.flake) fillFlakes(table, paint.flake, K, S, passes)
   else fillFilm(table, K, S, passes)
   table.empty = emptyLevel(table)
+  const glow = glowOf(paint)
+  if (glow) table.glow = glowLevels(paint, glow, level => passesAt(level, passes), table)
   return table
 }
 
@@ -59,7 +65,7 @@ function passesAt(level: number, passes: number): number {
   return passes * (level / (LEVELS - 1)) ** 2
 }
 
-function fillFilm({ R, Q, through }: CoatTable, K: Float64Array, S: Float64Array, passes: number): void {
+function fillFilm({ R, T, Q, through }: CoatTable, K: Float64Array, S: Float64Array, passes: number): void {
   const pair = new Float64Array(2)
   for (let level = 0; level < LEVELS; level++) {
     const X = passesAt(level, passes)
@@ -67,6 +73,7 @@ function fillFilm({ R, Q, through }: CoatTable, K: Float64Array, S: Float64Array
       filmInto(K[b]!, S[b]!, X, pair)
       const at = level * BANDS + b
       R[at] = pair[0]!
+      T[at] = pair[1]!
       Q[at] = pair[1]! * pair[1]! - pair[0]! * pair[0]!
       through[at] = Math.exp(-2 * (K[b]! + S[b]!) * X)
     }
@@ -74,7 +81,7 @@ function fillFilm({ R, Q, through }: CoatTable, K: Float64Array, S: Float64Array
 }
 
 function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64Array, passes: number): void {
-  const { R, Q, through } = table
+  const { R, T, Q, through } = table
   const rows = FLAKE_TABLE_COSINES.length
   const mirrored = new Float32Array(LEVELS * rows * BANDS), diffuse = new Float32Array(LEVELS * BANDS)
   const all = singleFlake(flake.oxide, flake.thickness, FLAKE_TABLE_COSINES, 'picture16')
@@ -89,8 +96,8 @@ function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64A
     fillFlakeLevel(level)
   }
   fillFlakeLevel(LEVELS - 1)
-  for (const [array, width] of [[R, BANDS], [Q, BANDS], [through, BANDS], [diffuse, BANDS], [mirrored, rows * BANDS]] as const) {
-    fillBetween(array, width)
+  for (const [array, width] of [[R, BANDS], [T, BANDS], [Q, BANDS], [through, BANDS], [diffuse, BANDS], [mirrored, rows * BANDS]] as const) {
+    fillBetween(array, width, FLAKE_STEP)
   }
   table.flake = { sigma: flake.sigma, mirrored, diffuse, sparkle: sparkleOf(flake) }
 
@@ -101,6 +108,7 @@ function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64A
       const at = level * BANDS + b
       const r = coat.R[b]!, t = coat.T[b]!
       R[at] = r
+      T[at] = t
       Q[at] = t * t - r * r
       through[at] = t * t
       diffuse[at] = (1 - flake.edge) * surface * r
@@ -109,19 +117,6 @@ function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64A
       const lit = flakeCoat(one, flake.flakesPerPass, K, S, X)
       for (let b = 0; b < BANDS; b++) mirrored[(level * rows + row) * BANDS + b] = (1 - flake.edge) * lit.R[b]!
     })
-  }
-}
-
-/** Fills the levels between worked-out ones on straight lines. */
-function fillBetween(array: Float32Array, width: number): void {
-  for (let from = 0; from < LEVELS - 1; from += FLAKE_STEP) {
-    const to = Math.min(LEVELS - 1, from + FLAKE_STEP)
-    for (let level = from + 1; level < to; level++) {
-      const share = (level - from) / (to - from)
-      for (let i = 0; i < width; i++) {
-        array[level * width + i] = array[from * width + i]! * (1 - share) + array[to * width + i]! * share
-      }
-    }
   }
 }
 

@@ -1,8 +1,8 @@
 import { labFromXyz, type Lab, type Xyz } from '#shared/optics/colorimetry'
 import { colourWords } from '#shared/optics/colour-words'
-import { hexFromSrgb, screenFromXyz, softShoulder } from '#shared/optics/screen-colour'
+import { hexFromSrgb } from '#shared/optics/screen-colour'
 import { ASPECULAR } from '#shared/optics/flake-angles'
-import type { Promised } from '#shared/optics/stack'
+import { type Promised, screenOf } from '#shared/optics/stack'
 
 /** A promised colour as an interface shows it. */
 export interface ColourShown {
@@ -29,5 +29,5 @@ export function colourAtAngle(promised: Promised, angle: number): ColourShown {
   const share = (angle - low) / (high - low)
   const [from, to] = [angles[low].xyz, angles[high].xyz]
   const xyz = from.map((value, i) => Math.max(1e-9, value) ** (1 - share) * Math.max(1e-9, to[i]!) ** share) as Xyz // three of three
-  return colourShown({ lab: labFromXyz(xyz), ...screenFromXyz(softShoulder(xyz)) })
+  return colourShown({ lab: labFromXyz(xyz), ...screenOf(xyz, promised.brightness) })
 }

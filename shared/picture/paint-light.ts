@@ -23,6 +23,8 @@ const THROUGH = (1 - SURFACE_OUTSIDE) * (1 - SURFACE_INSIDE)
 export interface LitStack {
   /** Reflectance inside the film, 16 per sample. */
   reflectance: Float32Array
+  /** Linear light its coats give off where irradiance is 1, three per sample. */
+  glow?: Float32Array | undefined
   /** All coats shown, from the ground up. */
   coats: readonly LaidTable[]
 }
@@ -55,6 +57,7 @@ export function paintLight(form: SampleForm, stack: LitStack, lighting: Lighting
   const veil = plain ? VEIL[finish] : 0
   const light = lightOnSamples(form, lighting)
   for (let i = 0; i < samples.count; i++) diffuseLight(stack.reflectance, i * BANDS, light[i]!, veil, out, 3 * i)
+  if (stack.glow) for (let i = 0; i < out.length; i++) out[i]! += stack.glow[i]! * light[Math.floor(i / 3)]!
   addFlakeLight(form, stack.coats, lighting, light, out)
   for (let i = 0; i < samples.count; i++) {
     if (matt) addEvenly(out, 3 * i, mattShare * atNormal(matt, normal[3 * i]!, normal[3 * i + 1]!) * samples.occlusion[i]!)

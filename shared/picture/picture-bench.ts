@@ -17,7 +17,7 @@ import { pictureOptions, type Picture, type PictureLight, type PictureOptions, t
 import { pickPlace, type PickedPlace } from './pick-place'
 import { FOUR_PLACES, jumpingPixels, NINE_PLACES, putRefined, shownPixels } from './refine'
 import { eyesAreFitted, finishShown, shownCoats } from './shown-coats'
-import { composeKept, keptMap, tidyMaps, viewKit, type KeyedCoat, type ViewKit } from './view-kit'
+import { composeKept, keptGlow, keptMap, tidyMaps, viewKit, type KeyedCoat, type ViewKit } from './view-kit'
 
 /** A coarse picture is this much smaller in each direction. */
 export const COARSE = 4
@@ -113,12 +113,14 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits'): PictureBench {
     tidyMaps(kit, coats.length)
     const { colour, finish } = look.body.ground
     const ground = toPictureBands(groundFromLab(colour, finish))
-    const reflectance = composeKept(kit, canonicalJson(look.body.ground), ground, coats)
+    const groundKey = canonicalJson(look.body.ground)
+    const reflectance = composeKept(kit, groundKey, ground, coats)
+    const glow = keptGlow(kit, groundKey, ground, coats)
     const lighting: Lighting = {
       tables: lightOf(options.light), finish: finishShown(look, options), plain: options.plain, aspecular: aspecularOf(options.light),
     }
     const form = eyesAreFitted(look, options.upTo) ? kit.form : kit.blindForm
-    return paintLight(form, { reflectance, coats }, lighting)
+    return paintLight(form, { reflectance, glow, coats }, lighting)
   }
 
   function drawFull(look: Look, options: PictureOptions): Canvas {

@@ -6,6 +6,7 @@ import type { CoatTable } from './coat-table'
 import { bareGround, layCoats, type LaidTable } from './compose'
 import { depositKeep, type DepositKeep } from './deposit/keep'
 import { depositMap, type DepositMap } from './deposit-map'
+import { glowLight } from './glow-light'
 import type { SampleForm } from './paint-light'
 import type { ShownCoat } from './shown-coats'
 import { sparkleNoise, wavyNormals } from './surface-grain'
@@ -13,6 +14,7 @@ import { sparkleNoise, wavyNormals } from './surface-grain'
 /** How many deposits a view keeps beyond those it shows. */
 const SPARE_MAPS = 24
 
+interface KeptGlow { keys: readonly string[], light: Float32Array | undefined }
 interface KeptState { keys: readonly string[], state: Float32Array }
 
 /** Everything that stands as long as a blank is looked at from the same side: samples, grain, deposits, coats below the edit. */
@@ -26,6 +28,7 @@ export interface ViewKit {
   maps: Map<string, DepositMap>
   prefix: KeptState | undefined
   whole: KeptState | undefined
+  glow: KeptGlow | undefined
 }
 
 /** Prepares a view for drawing. */
@@ -33,7 +36,7 @@ export function viewKit(blank: PreparedBlank, view: View, samples: ViewSamples):
   const parts = drawnParts(blank, view)
   const form: SampleForm = { samples, normal: samples.normal, glossNormal: wavyNormals(samples), sparkle: sparkleNoise(samples) }
   const blindForm = { ...form, normal: domed(samples, parts.eyes, samples.normal), glossNormal: domed(samples, parts.eyes, form.glossNormal) }
-  return { samples, parts, form, blindForm, keep: depositKeep(samples, blank), maps: new Map(), prefix: undefined, whole: undefined }
+  return { samples, parts, form, blindForm, keep: depositKeep(samples, blank), maps: new Map(), prefix: undefined, whole: undefined, glow: undefined }
 }
 
 /** Normals with the domes of the eyes standing out of the flank. */
@@ -101,6 +104,16 @@ export function composeKept(kit: ViewKit, groundKey: string, ground: ArrayLike<n
   kit.prefix = from
   kit.whole = { keys, state: layCoats(coats.slice(from.keys.length - 1), from.state, spare) }
   return kit.whole.state
+}
+
+/** Light that the stack gives off under every sample; the same as last time for as long as the coats are. */
+export function keptGlow(kit: ViewKit, groundKey: string, ground: ArrayLike<number>, coats: readonly KeyedCoat[]): Float32Array | undefined {
+  const keys = [groundKey, ...coats.map(coat => coat.key)]
+  const last = kit.glow
+  if (last && last.keys.length === keys.length && sharedStart(last.keys, keys) === keys.length) return last.light
+  const light = glowLight(coats, ground, kit.samples.count)
+  kit.glow = { keys, light }
+  return light
 }
 
 function sharedStart(a: readonly string[], b: readonly string[]): number {

@@ -16,7 +16,7 @@ export function opticsOfKnown(known: PaintKnown): PaintOptics {
       return paintOpticsFrom(known)
     case 'fluorescent': {
       const { emissionPeak: peak, emissionWidth: width, quantumYield, overWhite, passes, haze } = known
-      return { ...paintOpticsFrom({ how: 'dye-over-white', overWhite, passes, haze }), fluorescent: { peak, width, quantumYield } }
+      return paintOpticsFrom({ how: 'dye-over-white', overWhite, passes, haze, fluorescent: { peak, width, quantumYield } })
     }
     case 'flake':
       return flakeOptics(known)

@@ -1,17 +1,18 @@
 import type { PaintKnown } from './paint'
 import type { PaintTrust } from './paint-view'
+import type { StoredOptics } from './stored-optics'
 
 /**
  * How far a prediction with this paint can be trusted, and why.
  * The wording follows what each way of knowing was seen to give on measured pigments over several grounds (see docs/optics).
  */
-export function paintTrust(known: PaintKnown, optics: { clipped: boolean }): PaintTrust {
-  const trust = byHow(known)
+export function paintTrust(known: PaintKnown, optics: Pick<StoredOptics, 'clipped' | 'fluorescent'>): PaintTrust {
+  const trust = byHow(known, optics)
   if (!optics.clipped || trust.level === 1) return trust
   return { level: trust.level === 3 ? 2 : 1, words: `${trust.words} Its swatches contradict each other a little; spray them again, thinner.` }
 }
 
-function byHow(known: PaintKnown): PaintTrust {
+function byHow(known: PaintKnown, { fluorescent }: Pick<StoredOptics, 'fluorescent'>): PaintTrust {
   switch (known.how) {
     case 'two-swatches':
       return { level: 3, words: 'Known over black and over white: typically within 2, mostly within 6.' }
@@ -22,7 +23,9 @@ function byHow(known: PaintKnown): PaintTrust {
     case 'flake':
       return { level: 1, words: 'Worked out from its flake: hue is right, strength and sparkle are estimates until a face and a flop swatch are read.' }
     case 'fluorescent':
-      return { level: 1, words: 'Known over white; its glow is not yet in the picture, so it will look brighter than shown.' }
+      return fluorescent && !fluorescent.Kf
+        ? { level: 1, words: 'Known over white before its glow could be shown; save the paint again, and its glow is in the picture.' }
+        : { level: 1, words: 'Known over white; its glow is worked out from an estimate of the light it gives off. Fluorescents fade: judge a fresh swatch.' }
     case 'clear':
       return { level: 3, words: 'Clear: it deepens what is under it.' }
   }

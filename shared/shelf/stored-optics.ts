@@ -12,7 +12,12 @@ export const StoredOptics = z.object({
   flake: z.object({
     oxide: z.enum(['anatase', 'rutile', 'hematite', 'aluminium']), thickness: z.number(), flakesPerPass: z.number(), sigma: z.number(), edge: z.number(),
   }).optional(),
-  fluorescent: z.object({ peak: z.number(), width: z.number(), quantumYield: z.number() }).optional(),
+  fluorescent: z.object({
+    peak: z.number(), width: z.number(), quantumYield: z.number(),
+    /** Absorption that feeds the glow; absent from optics of engine version 1, which show none. */
+    Kf: Spectrum36.optional(),
+    emission: Spectrum36.optional(),
+  }).optional(),
   how: z.enum(['two-swatches', 'masstone-hide', 'dye-over-white', 'interference', 'metallic', 'clear']),
   clipped: z.boolean(),
 })

@@ -2,11 +2,12 @@ import { emptyViewSamples } from '#shared/blank/view-sample-lists'
 import { labFromXyz, type Lab } from '#shared/optics/colorimetry'
 import { groundFromLab } from '#shared/optics/known-film'
 import { xyzFromLinearRgb } from '#shared/optics/screen-colour'
-import type { Finish } from '#shared/optics/surface'
+import { type Finish, measuredSpectrum } from '#shared/optics/surface'
 import type { Coat } from '#shared/optics/stack'
-import { toPictureBands } from '#shared/optics/to-picture-bands'
+import { PICTURE_LINEAR_WEIGHTS, toPictureBands } from '#shared/optics/to-picture-bands'
 import { coatTable } from '#shared/picture/coat-table'
 import { bareGround, layCoats } from '#shared/picture/compose'
+import { glowLight } from '#shared/picture/glow-light'
 import type { LightTables } from '#shared/picture/light-tables'
 import { paintLight } from '#shared/picture/paint-light'
 import type { ShelfPaint } from '../../fixtures/looks/shelf'
@@ -30,7 +31,7 @@ export function patchLight(
   const direction = Float32Array.from(normal)
   const light = paintLight(
     { samples, normal: direction, glossNormal: direction, sparkle: new Float32Array(1) },
-    { reflectance, coats: laid },
+    { reflectance, glow: glowLight(laid, toPictureBands(ground), 1), coats: laid },
     { tables, finish, plain, aspecular },
   )
   return [light[0]!, light[1]!, light[2]!]
@@ -39,4 +40,20 @@ export function patchLight(
 /** The same as a colour. */
 export function patchLab(...ask: Parameters<typeof patchLight>): Lab {
   return labFromXyz(xyzFromLinearRgb(patchLight(...ask)))
+}
+
+/** The same for a glossy, evenly lit patch before a screen's limits bend it: for paint that outshines any screen. */
+export function untonedLab(stack: readonly Coat[]): Lab {
+  const laid = stack.map(({ optics, passes }) => ({ codes: Uint8Array.of(255), table: coatTable(optics, passes) }))
+  const seen = measuredSpectrum(layCoats(laid, bareGround(1, toPictureBands(GROUND))), 'gloss')
+  const light = glowOfPatch(stack)
+  seen.forEach((value, b) => light.forEach((_, c) => light[c]! += PICTURE_LINEAR_WEIGHTS[16 * c + b]! * value))
+  return labFromXyz(xyzFromLinearRgb(light))
+}
+
+/** Linear light that the coats of a patch give off. */
+export function glowOfPatch(stack: readonly Coat[]): [number, number, number] {
+  const laid = stack.map(({ optics, passes }) => ({ codes: Uint8Array.of(255), table: coatTable(optics, passes) }))
+  const light = glowLight(laid, toPictureBands(GROUND), 1)
+  return light ? [light[0]!, light[1]!, light[2]!] : [0, 0, 0]
 }
