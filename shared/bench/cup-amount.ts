@@ -12,6 +12,8 @@ export interface CupPart {
   ratio: number
   ml: number
   drops: number
+  /** g */
+  grams: number
 }
 
 /** What to put into one cup. */
@@ -21,6 +23,9 @@ export interface CupAmount {
   /** By weight, g. */
   grams: number
 }
+
+/** g/mL; reducers of water-based paints are mostly water (common practice). */
+const REDUCER_DENSITY = 1
 
 /**
  * What to put into the cup at a mix step for so many pieces: every coat laid from it, with the loss in cup and lines once.
@@ -36,14 +41,12 @@ export function cupAmount(step: MixStep, look: Look, cells: AreaCells, pieces: n
   const ml = own.reduce((sum, amount) => sum + amount.mix.value, 0) - (own.length - 1) * cupLoss
   // All coats of one cup are mixed alike, so that the whole divides as the first does.
   const scale = ml / first.mix.value
-  const part = (paintId: string | null, name: string, ratio: number, volume: number): CupPart =>
-    ({ paintId, name, ratio, ml: volume * scale, drops: Math.ceil(volume * scale * dropsPerMl) })
-  const paints = first.paints.map(({ paintId, ml: volume }) => part(
-    paintId,
-    look.materials.paints.find(paint => paint.id === paintId)?.name ?? 'a paint that is gone',
-    step.coat.mix.parts.find(each => each.paintId === paintId)?.drops ?? 0,
-    volume,
-  ))
-  const reducer = step.coat.mix.reducer > 0 ? [part(null, 'Reducer', step.coat.mix.reducer, first.reducer.value)] : []
+  const part = (paintId: string | null, name: string, ratio: number, volume: number, density: number): CupPart =>
+    ({ paintId, name, ratio, ml: volume * scale, drops: Math.ceil(volume * scale * dropsPerMl), grams: volume * scale * density })
+  const paints = first.paints.flatMap(({ paintId, ml: volume }) => {
+    const paint = look.materials.paints.find(each => each.id === paintId)
+    return paint ? [part(paintId, paint.name, step.coat.mix.parts.find(each => each.paintId === paintId)?.drops ?? 0, volume, paint.density)] : []
+  })
+  const reducer = step.coat.mix.reducer > 0 ? [part(null, 'Reducer', step.coat.mix.reducer, first.reducer.value, REDUCER_DENSITY)] : []
   return { parts: [...paints, ...reducer], ml, grams: first.mass.value * scale }
 }

@@ -45,7 +45,7 @@ export function nextWords(step: RunStep): string {
     case 'prepare': return 'make ready'
     case 'mix': return `mix coat ${step.number}`
     case 'fit': return `fit the ${MASK_WORD[step.mask.form.kind]}`
-    case 'lay': return step.isClear ? `clear, coat ${step.number}` : `lay coat ${step.number}`
+    case 'lay': return step.isClear ? `lay the clear, coat ${step.number}` : `lay coat ${step.number}`
     case 'rest': return `rest ${shortDuration(step)}`
     case 'heat': return `heat-set ${shortDuration(step)}`
     case 'lift': return `lift the ${MASK_WORD[step.mask.form.kind]}`

@@ -122,6 +122,7 @@ describe('what goes into the cup', () => {
     const [white, reducer] = six.parts
     expect(white!.ml / reducer!.ml).toBeCloseTo(20 / 5, 6)
     expect(six.parts.reduce((sum, part) => sum + part.ml, 0)).toBeCloseTo(six.ml, 6)
+    expect(six.parts.reduce((sum, part) => sum + part.grams, 0)).toBeCloseTo(six.grams, 6)
     expect(white!.drops).toBe(Math.ceil(white!.ml * 20))
   })
 
