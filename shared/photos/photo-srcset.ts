@@ -5,7 +5,7 @@ interface Sized { readonly id: string, readonly width: number, readonly height: 
 /** The copies of a photo for a browser to choose from, each with its true width; `base` is the address its copies lie under. */
 export function photoSrcset(base: string, photo: Sized, format: (typeof RENDITION_FORMATS)[number]): string {
   const long = Math.max(photo.width, photo.height)
-  const byWidth = new Map<number, number>()
+  const byWidth = new Map<number, (typeof RENDITION_WIDTHS)[number]>()
   for (const edge of RENDITION_WIDTHS) {
     const width = Math.max(1, Math.round(photo.width * Math.min(1, edge / long)))
     if (!byWidth.has(width)) byWidth.set(width, edge)

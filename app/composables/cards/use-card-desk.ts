@@ -39,6 +39,13 @@ export function useCardDesk(card: Ref<CardView | null>) {
     say('Shared. Copy its link or write an e-mail', { icon: 'link' })
   }
 
+  async function retell() {
+    const id = card.value?.id
+    if (!id) return
+    const done = await acting.attempt(async () => goOnFrom(await actions.retell(id)))
+    say(done ? 'Colours and blank are those of the newest revision' : acting.problem.value ?? 'It was not done', { icon: done ? 'saved' : 'note' })
+  }
+
   async function revoke() {
     const id = card.value?.id
     if (!id || !await acting.attempt(async () => goOnFrom(await actions.revoke(id)))) return
@@ -54,5 +61,5 @@ export function useCardDesk(card: Ref<CardView | null>) {
     say('Card taken away', { icon: 'leave' })
   }
 
-  return { draft, isDirty, clash, saving, acting, question, state, whyNotSaved, keep, shared, revoke, remove }
+  return { draft, isDirty, clash, saving, acting, question, state, whyNotSaved, keep, shared, retell, revoke, remove }
 }

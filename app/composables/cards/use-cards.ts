@@ -37,6 +37,8 @@ export function useCardActions() {
       return card
     },
     share: (cardId: string): Promise<CardView> => $fetch(`/api/cards/${cardId}/share`, { method: 'POST', body: {} }),
+    /** Takes blank and colours anew from the newest revision. */
+    retell: (cardId: string): Promise<CardView> => $fetch(`/api/cards/${cardId}/colours`, { method: 'POST', body: {} }),
     revoke: (cardId: string): Promise<CardView> => $fetch(`/api/cards/${cardId}/revoke`, { method: 'POST', body: {} }),
     async remove(cardId: string): Promise<void> {
       await $fetch(`/api/cards/${cardId}`, { method: 'DELETE' })

@@ -4,6 +4,8 @@ import type { CardByLink } from '#shared/cards/card'
 /** The card behind a link; null when the link is unknown or was taken back, which look the same. */
 export async function usePublicCard(token: string): Promise<CardByLink | null> {
   const event = useRequestEvent()
+  // A customer is given no cookie: not even the one that keeps a choice of light.
+  if (event) useNuxtApp().hook('app:rendered', () => event.node.res.removeHeader('set-cookie'))
   const { data, error } = await useAsyncData('card by link', () => readCard(token), { deep: false })
   if (error.value) throw createError({ statusCode: 500, fatal: true })
   if (event) {

@@ -70,6 +70,7 @@ export const CARD_ACCESS: AccessRow[] = [
   },
   { method: 'DELETE', path: '/api/cards/[cardId]', who: showers(204), make: async ground => ({ url: `/api/cards/${(await card(ground)).id}` }) },
   { method: 'POST', path: '/api/cards/[cardId]/share', who: showers(200), make: async ground => ({ url: `/api/cards/${(await card(ground)).id}/share`, body: {} }) },
+  { method: 'POST', path: '/api/cards/[cardId]/colours', who: showers(200), make: async ground => ({ url: `/api/cards/${(await card(ground)).id}/colours`, body: {} }) },
   { method: 'POST', path: '/api/cards/[cardId]/revoke', who: showers(200), make: async ground => ({ url: `/api/cards/${(await shared(ground)).id}/revoke`, body: {} }) },
   {
     method: 'GET', path: '/api/cards/by-link/[token]', who: anybody(200), letsIn: true,

@@ -8,6 +8,7 @@ import { addCard } from '#server/services/cards/add-card'
 import { changeCard } from '#server/services/cards/change-card'
 import { getCard, listCards } from '#server/services/cards/list-cards'
 import { publicCard, publicPhoto, publicPreview } from '#server/services/cards/public-card'
+import { retellFinish } from '#server/services/cards/retell-finish'
 import { revokeCard, shareCard } from '#server/services/cards/share-card'
 import { addPhoto } from '#server/services/photos/add-photo'
 import { listPhotos } from '#server/services/photos/list-photos'
@@ -198,6 +199,16 @@ describe('a card', () => {
     const { card, photo } = await sharedCard(ctx)
     await expect(changeCard(ctx, card.id, card.version, { ...draftOf(card), photoIds: [] })).rejects.toMatchObject({ data: { code: 'card/no-photo' } })
     expect((await changeCard(ctx, card.id, card.version, { ...draftOf(card), photoIds: [photo.id, photo.id] })).photoIds).toEqual([photo.id])
+  })
+
+  it('tells the blank and colours of what was published, takes them anew when asked, and keeps what was written', async () => {
+    const { ctx } = await testWorkshop({ role: 'owner' })
+    const { card } = await sharedCard(ctx)
+    const written = await changeCard(ctx, card.id, card.version, { ...draftOf(card), words: 'mine' })
+    await asOwner('update cards set content = content || $2 where id = $1', [card.id, JSON.stringify({ blank: 'Old', chips: [] })])
+    const told = await retellFinish(ctx, card.id)
+    expect(told).toMatchObject({ words: 'mine', blank: card.blank, chips: card.chips, link: card.link, version: written.version + 1 })
+    expect(told.chips.length).toBeGreaterThan(2)
   })
 
   it('is not revoked before it was shared', async () => {
