@@ -56,8 +56,8 @@ function crossing(outside: number, inside: number): number {
  * @param diffuse reflectance of the whole stack as measured, 36 bands
  * @returns 36 values per angle, ≥ 0; above 1 where flakes outshine paper
  */
-export function radianceAtAngles<A extends Aspecular = Aspecular>(
-  coats: readonly Coat[], layers: readonly CoatLayer[], diffuse: Float64Array, angles: readonly A[] = ASPECULAR as readonly Aspecular[] as readonly A[],
+export function radianceAtAngles<A extends number = Aspecular>(
+  coats: readonly Coat[], layers: readonly CoatLayer[], diffuse: Float64Array, angles: readonly A[] = ASPECULAR as readonly number[] as readonly A[],
 ): Record<A, Float64Array> {
   const answer = Object.fromEntries(angles.map(angle => [angle, Float64Array.from(diffuse)])) as Record<A, Float64Array>
   const reaching = new Float64Array(36).fill(1)
@@ -70,7 +70,7 @@ export function radianceAtAngles<A extends Aspecular = Aspecular>(
   return answer
 }
 
-function moveToMirrors<A extends Aspecular>(
+function moveToMirrors<A extends number>(
   coat: Coat, layer: CoatLayer, reaching: Float64Array, angles: readonly A[], answer: Record<A, Float64Array>,
 ): void {
   const { sigma, edge } = coat.optics.flake!

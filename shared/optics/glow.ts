@@ -1,14 +1,12 @@
-import type { Bands, Spectrum } from './bands'
+import { assertBands, type Bands, type Spectrum } from './bands'
 import { coefficientsIn } from './coat-layer'
 import { type CoatLayer, filmLayer } from './film'
 import { diffuseFlake } from './flake'
 import { flakeCoat } from './flake-coat'
 import { emissionPhotons, type Glow, glowOf } from './fluorescence'
 import { type ChainLayer, type Glower, solveGlow } from './glow-chain'
-import { fallingLight } from './light-power'
-import type { Light } from './lights'
 import type { PaintOptics } from './paint-optics'
-import { SURFACE_INSIDE, SURFACE_OUTSIDE } from './surface'
+import { AIR_SURFACE, type SurfaceLoss } from './surface'
 import { toPictureBands } from './to-picture-bands'
 
 /** A coat that glows is cut into this many sublayers, thin at the top where most light is taken. */
@@ -62,14 +60,15 @@ export function hasGlow(coats: readonly { optics: PaintOptics }[]): boolean {
 }
 
 /**
- * Photons that a stack gives off under a light, 36 bands, in the units of `FallingLight.photons`; the same to all sides.
+ * Photons that a stack gives off, 36 bands, in the units of those that fall on it; the same to all sides.
  *
  * Light below 380 nm is left out: it feeds a glow too, a little more in the sun than this says.
  *
- * @param coats  the first sprayed first
- * @param ground reflectance inside the ground, 36 bands
+ * @param coats   the first sprayed first
+ * @param ground  reflectance inside the ground, 36 bands
+ * @param falling photons that fall on the stack, 36 bands (`fallingLight`)
  */
-export function glowPhotons(coats: readonly CoatForGlow[], ground: Spectrum, light: Light): Float64Array {
+export function glowPhotons(coats: readonly CoatForGlow[], ground: Spectrum, falling: Spectrum, { outside, inside }: SurfaceLoss = AIR_SURFACE): Float64Array {
   const layers: ChainLayer[] = [], glowers: Glower[] = []
   for (const { optics, passes, layer } of [...coats].reverse()) {
     const glow = glowOf(optics)
@@ -82,6 +81,7 @@ export function glowPhotons(coats: readonly CoatForGlow[], ground: Spectrum, lig
     layers.push(...cut.layers)
   }
   if (glowers.length === 0) return new Float64Array(36)
-  const entering = fallingLight(light).photons.map(photons => (1 - SURFACE_OUTSIDE) * photons)
-  return solveGlow({ layers, glowers, ground, inside: SURFACE_INSIDE }, entering).out
+  assertBands('glowPhotons', 36, falling)
+  const entering = Float64Array.from(falling, photons => (1 - outside) * photons)
+  return solveGlow({ layers, glowers, ground, inside }, entering).out
 }

@@ -63,6 +63,19 @@ export function adaptToDaylight(xyz: Xyz, light: Light): Xyz {
   return times(BRADFORD_BACK, [cones[0] * to[0] / from[0], cones[1] * to[1] / from[1], cones[2] * to[2] / from[2]])
 }
 
+/**
+ * The colour in daylight that looks as this one does to an eye used to a local white as far as it can be.
+ *
+ * @param white X, Y, Z of a white in the local light, in the units of `xyz`
+ * @param most  the most that each cone channel may be raised
+ * @source Bradford transform, its three gains held at `most`
+ */
+export function adaptWithin(xyz: Xyz, white: Xyz, most: number): Xyz {
+  const from = times(BRADFORD, white), to = times(BRADFORD, weightsFor('D65').white), cones = times(BRADFORD, xyz)
+  const gain = (i: 0 | 1 | 2) => from[i] > 0 ? Math.min(most, to[i] / from[i]) : most
+  return times(BRADFORD_BACK, [cones[0] * gain(0), cones[1] * gain(1), cones[2] * gain(2)])
+}
+
 /** Linear sRGB of a colour under D65; may lie outside 0…1. */
 export function linearFromXyz(xyz: Xyz): Rgb {
   return times(LINEAR_SRGB_FROM_XYZ, xyz)

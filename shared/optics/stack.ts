@@ -4,7 +4,7 @@ import { type Lab, labFromXyz, type Light, type Rgb, type Xyz, xyzFromReflectanc
 import { type CoatLayer, layOver } from './film'
 import { ASPECULAR, type Aspecular, radianceAtAngles } from './flake-angles'
 import { glowPhotons, hasGlow } from './glow'
-import { xyzOfPhotons } from './light-power'
+import { fallingLight, xyzOfPhotons } from './light-power'
 import type { PaintOptics } from './paint-optics'
 import { type ScreenColour, screenFromGlow, screenFromXyz, softShoulder } from './screen-colour'
 import { type Finish, measuredSpectrum } from './surface'
@@ -109,7 +109,8 @@ function seenAt45(stack: Stack, layers: readonly CoatLayer[], light: Light): Col
 
 function glowXyz({ coats, ground }: Stack, layers: readonly CoatLayer[], light: Light): Xyz {
   if (!hasGlow(coats)) return [0, 0, 0]
-  return xyzOfPhotons(glowPhotons(coats.map((coat, i) => ({ ...coat, layer: layers[i]! })), ground, light), light)
+  const glowing = coats.map((coat, i) => ({ ...coat, layer: layers[i]! }))
+  return xyzOfPhotons(glowPhotons(glowing, ground, fallingLight(light).photons), light)
 }
 
 function layersOf(stack: Stack): CoatLayer[] {

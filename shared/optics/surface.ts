@@ -14,6 +14,14 @@ export const SURFACE_INSIDE = 0.60
 /** Surface light scattered into the eye, as a reflectance. Gloss is read off the highlight. Common practice. */
 export const VEIL: Readonly<Record<Finish, number>> = { matt: 0.04, satin: 0.015, gloss: 0 }
 
+/** Light lost at the outside of a surface, and at its inside. */
+export interface SurfaceLoss { outside: number, inside: number }
+
+/** A film in air. */
+export const AIR_SURFACE: Readonly<SurfaceLoss> = { outside: SURFACE_OUTSIDE, inside: SURFACE_INSIDE }
+/** A film in water, of index 1.333 against the film's 1.5. @source Fresnel's equations averaged over diffuse light, as in air */
+export const WATER_SURFACE: Readonly<SurfaceLoss> = { outside: 0.0035, inside: 0.234 }
+
 const THROUGH = (1 - SURFACE_OUTSIDE) * (1 - SURFACE_INSIDE)
 
 /**

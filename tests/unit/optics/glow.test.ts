@@ -4,7 +4,7 @@ import { type Lab, labFromReflectance } from '../../../shared/optics/colorimetry
 import { deltaE2000 } from '../../../shared/optics/delta-e'
 import { glowPhotons } from '../../../shared/optics/glow'
 import { CARD_BLACK, CARD_WHITE, groundFromLab } from '../../../shared/optics/known-film'
-import { radianceFactor } from '../../../shared/optics/light-power'
+import { fallingLight, radianceFactor } from '../../../shared/optics/light-power'
 import type { Light } from '../../../shared/optics/lights'
 import { mixOptics, type PaintOptics, paintOpticsFrom } from '../../../shared/optics/paint-optics'
 import { coloursOnTheWayUp, promise, stackReflectance } from '../../../shared/optics/stack'
@@ -16,11 +16,12 @@ const orange = loud([66, 60, 72], 2, 603, 56, 0.93)
 const cerise = loud([58, 74, 10], 2, 614, 56, 0.92)
 const lemon = loud([93, -18, 92], 2.2, 520, 70, 0.9)
 const white = groundFromLab(CARD_WHITE), black = groundFromLab(CARD_BLACK)
+const daylight = fallingLight('D65').photons
 const quiet = ({ fluorescent: _, ...dye }: PaintOptics): PaintOptics => dye
 
 function totalFactor(optics: PaintOptics, passes: number, ground: Float64Array, light: Light = 'D65'): Float64Array {
   const coats = [{ optics, passes, layer: coatLayer(optics, passes) }]
-  const given = radianceFactor(glowPhotons(coats, ground, light), light)
+  const given = radianceFactor(glowPhotons(coats, ground, fallingLight(light).photons), light)
   return stackReflectance({ ground, coats, finish: 'gloss' }).measured.map((value, i) => value + given[i]!)
 }
 const peak = (optics: PaintOptics, passes: number, ground: Float64Array) => Math.max(...totalFactor(optics, passes, ground))
@@ -62,7 +63,7 @@ describe('fluorescents', () => {
   it('feed one another: orange over lemon takes up the light of the lemon', () => {
     const coats = [lemon, orange].map(optics => ({ optics, passes: 2, layer: coatLayer(optics, 2) }))
     const sum = (values: Float64Array) => values.reduce((total, value) => total + value, 0)
-    const both = glowPhotons(coats, white, 'D65'), bare = glowPhotons([{ ...coats[0]!, optics: quiet(lemon) }, coats[1]!], white, 'D65')
+    const both = glowPhotons(coats, white, daylight), bare = glowPhotons([{ ...coats[0]!, optics: quiet(lemon) }, coats[1]!], white, daylight)
     expect(sum(both)).toBeGreaterThan(sum(bare) * 1.05)
   })
   it('come up from the ground to the promise', () => {

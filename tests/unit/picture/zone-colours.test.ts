@@ -50,7 +50,7 @@ describe('promised colours', { timeout: 30_000 }, () => {
 })
 
 /** What the fixtures promise: seen on the pictures and found right. They move only when a law of paint or of spraying does. */
-const GOLDEN: readonly (readonly [look: string, zone: string, lab: Lab])[] = [
+const GOLDEN: readonly (readonly [look: 'perch' | 'roach' | 'ember', zone: string, lab: Lab])[] = [
   ['perch', 'back', [24.4, -2.1, 30.5]],
   ['perch', 'upper-flank', [50.5, -2.1, 55.5]],
   ['perch', 'lower-flank', [73.7, -1.0, 47.0]],
@@ -62,10 +62,13 @@ const GOLDEN: readonly (readonly [look: string, zone: string, lab: Lab])[] = [
   ['roach', 'lower-flank', [83.4, -1.5, 1.2]],
   ['roach', 'belly', [90.1, -0.1, 0.7]],
   ['roach', 'fin:tail', [47.9, 60.1, 57.9]],
+  ['ember', 'upper-flank', [82.0, -73.0, 70.7]],
+  ['ember', 'lower-flank', [93.1, 29.1, 107.2]],
+  ['ember', 'belly', [92.1, 97.4, 135.6]],
 ]
 
 it.each(GOLDEN)('promises of the %s: %s', (name, zone, lab) => {
-  const promised = of(name === 'perch' ? perch : roach).get(zone as ZoneName)!.promised.lab
+  const promised = of({ perch, roach, ember }[name]).get(zone as ZoneName)!.promised.lab
   expect(deltaE2000(promised, lab)).toBeLessThan(2)
 })
 
