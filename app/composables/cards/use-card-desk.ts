@@ -17,6 +17,7 @@ export function useCardDesk(card: Ref<CardView | null>) {
   const actions = useCardActions()
   const { say } = useToast()
   const question = ref<CardQuestion | null>(null)
+  const isGone = ref(false)
 
   const state = computed(() => card.value ? stateWords(card.value) : null)
   const whyNotSaved = computed(() => {
@@ -56,10 +57,11 @@ export function useCardDesk(card: Ref<CardView | null>) {
   async function remove() {
     const id = card.value?.id
     if (!id || !await acting.attempt(() => actions.remove(id))) return
+    isGone.value = true
     question.value = null
     await navigateTo('/cards')
     say('Card taken away', { icon: 'leave' })
   }
 
-  return { draft, isDirty, clash, saving, acting, question, state, whyNotSaved, keep, shared, retell, revoke, remove }
+  return { draft, isDirty: computed(() => isDirty.value && !isGone.value), clash, saving, acting, question, state, whyNotSaved, keep, shared, retell, revoke, remove }
 }

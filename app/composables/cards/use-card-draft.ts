@@ -61,9 +61,10 @@ export function useCardDraft(card: Ref<CardView | null>): CardOnDesk {
   }
 
   function goOnFrom(changed: CardView) {
-    const base = card.value
-    if (base) draft.value = draftOf(mergeDrafts(base, draft.value, changed).draft)
+    const { draft: merged, clashes } = mergeDrafts(card.value ?? changed, draft.value, changed)
     card.value = changed
+    draft.value = draftOf(merged)
+    if (clashes.length > 0) clash.value = { saved: changed, lines: clashes }
   }
 
   return { draft, isDirty, clash, save, goOnFrom }

@@ -24,7 +24,8 @@ export function useDroppedFiles(take: (files: File[]) => void): Ref<boolean> {
   })
   useEventListener(window, 'paste', (event) => {
     const files = [...event.clipboardData?.files ?? []]
-    if (files.length === 0) return
+    // Words copied together with a picture of them are meant as words where one writes.
+    if (files.length === 0 || (isWriting(event.target) && event.clipboardData?.types.includes('text/plain'))) return
     event.preventDefault()
     take(files)
   })
@@ -33,4 +34,8 @@ export function useDroppedFiles(take: (files: File[]) => void): Ref<boolean> {
 
 function carriesFiles(carried: DataTransfer | null): boolean {
   return carried?.types.includes('Files') ?? false
+}
+
+function isWriting(place: EventTarget | null): boolean {
+  return place instanceof HTMLInputElement || place instanceof HTMLTextAreaElement
 }
