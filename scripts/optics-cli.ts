@@ -1,18 +1,17 @@
 import { labFromXyz, xyzFromReflectance } from '../shared/optics/colorimetry'
 import { deltaE2000 } from '../shared/optics/delta-e'
 import { filmInto, overGround } from '../shared/optics/film'
-import { type Light, LIGHTS, isLight } from '../shared/optics/lights'
+import type { Light } from '../shared/optics/lights'
 import { filmOptics } from '../shared/optics/paint-optics'
 import { screenFromXyz } from '../shared/optics/screen-colour'
 import { spectrumFromLab } from '../shared/optics/spectrum-from-colour'
 import { stackReflectance } from '../shared/optics/stack'
-import { type Finish, FINISHES } from '../shared/optics/surface'
 import { thinFilm } from '../shared/optics/thin-film'
 import { coefficientsFromTwoGrounds } from '../shared/optics/two-grounds'
+import { type Fields, fields, finishOf, lightOf, list, number, numbers, parse, within } from './lib/optics-question'
+import { find, fluorescent, pearl, water } from './lib/optics-paint-questions'
 
-type Fields = Record<string, unknown>
-
-const OPERATIONS = { layer, film, spectrum, colour, deltaE, twoGrounds, stack }
+const OPERATIONS = { layer, film, spectrum, colour, deltaE, twoGrounds, stack, pearl, fluorescent, water, find }
 
 /**
  * Answers one question put as JSON.
@@ -110,55 +109,4 @@ function stack({ ground, coats, finish, light }: Fields): object {
 function coloursOf(reflectance: number[], light: Light): { xyz: number[], lab: number[], srgb: number[] } {
   const xyz = xyzFromReflectance(reflectance, light)
   return { xyz, lab: labFromXyz(xyz, light), srgb: screenFromXyz(xyz, light).srgb }
-}
-
-function parse(text: string): unknown {
-  if (text.trim() === '') throw new RangeError('no question: give one JSON object on standard input')
-  try {
-    return JSON.parse(text) as unknown
-  }
-  catch {
-    throw new RangeError('the question is not JSON')
-  }
-}
-
-function fields(where: string, value: unknown): Fields {
-  if (typeof value !== 'object' || value === null || Array.isArray(value)) throw new RangeError(`${where} must be a JSON object`)
-  return { ...value }
-}
-
-function list(where: string, value: unknown): unknown[] {
-  if (!Array.isArray(value)) throw new RangeError(`"${where}" must be a list`)
-  return value
-}
-
-function number(where: string, value: unknown): number {
-  if (typeof value !== 'number' || !Number.isFinite(value)) throw new RangeError(`"${where}" must be a finite number`)
-  return value
-}
-
-function numbers(where: string, value: unknown, count: number): number[] {
-  const values = list(where, value)
-  if (values.length !== count) throw new RangeError(`"${where}" must hold ${count} numbers, got ${values.length}`)
-  return values.map((one, i) => number(`${where}[${i}]`, one))
-}
-
-function within(where: string, values: number[], low: number, high: number): void {
-  for (const value of values) {
-    if (!(value >= low && value <= high)) {
-      throw new RangeError(`${where} must be ${high === Number.MAX_VALUE ? `at least ${low}` : `from ${low} to ${high}`}, got ${value}`)
-    }
-  }
-}
-
-function lightOf(value: unknown): Light {
-  if (value === undefined) return 'D65'
-  if (!isLight(value)) throw new RangeError(`"light" must be one of ${LIGHTS.join(', ')}, got ${JSON.stringify(value)}`)
-  return value
-}
-
-function finishOf(value: unknown): Finish {
-  const finish = FINISHES.find(name => name === value)
-  if (!finish) throw new RangeError(`"finish" must be one of ${FINISHES.join(', ')}, got ${JSON.stringify(value) ?? 'nothing'}`)
-  return finish
 }
