@@ -93,6 +93,32 @@ describe('listening for what others do', () => {
   })
 })
 
+describe('listening while several tablets hand over', () => {
+  it('hears every act once and in its order, passing over none that arrived earlier', async () => {
+    const { ctx } = await testWorkshop()
+    const { run, coatIds } = await testRun(ctx)
+    let isOver = false
+    const heard: string[] = []
+    const listen = async () => {
+      let since = 0
+      for (let isLast = false; !isLast;) {
+        isLast = isOver
+        for (const event of (await getRunEvents(ctx, run.id, since)).events) {
+          heard.push(event.id)
+          since = event.seq
+        }
+      }
+    }
+    const listening = listen()
+    const events = Array.from({ length: 40 }, () => pass(coatIds[0]!, [1]))
+    await Promise.all(Array.from({ length: 8 }, (_, n) => recordActs(ctx, run.id, events.slice(5 * n, 5 * n + 5))))
+    isOver = true
+    await listening
+    expect(heard.toSorted()).toEqual(events.map(event => event.id).toSorted())
+    expect(heard).toEqual((await getRun(ctx, run.id)).events.map(event => event.id))
+  })
+})
+
 describe('finishing', () => {
   it('is noted with the time at the bench, is undone by taking it back, and late acts of another tablet are still noted', async () => {
     const { ctx } = await testWorkshop()
