@@ -17,6 +17,11 @@ it.each([[0.34, 13.54], [1, 4.61]])('at an attenuation of %d 1/m a hundredth is 
 it.each([['I', 450, 0.019], ['I', 650, 0.36], ['II', 500, 0.07], ['1C', 550, 0.12], ['5C', 500, 0.36], ['9C', 400, 2.4], ['9C', 700, 1.1]] as const)('type %s at %i nm takes %d per metre', (water, nm, k) => {
   expect(waterAttenuation(water)[at(nm)]).toBeCloseTo(k, 12)
 })
+it('is read on straight lines between the values of the table, and run on beyond them', () => {
+  expect(waterAttenuation('1C')[at(440)]).toBeCloseTo(0.294, 12)
+  expect(waterAttenuation('1C')[at(720)]).toBeCloseTo(0.762, 12)
+  expect(waterAttenuation('1C')[at(380)]).toBeCloseTo(0.63, 12)
+})
 // What the names of our fresh waters are meant to be: 450, 550, 650 nm.
 it.each([['clear', 0.25, 0.14, 0.45], ['green', 1.9, 0.67, 0.81], ['tea-stained', 6.2, 1.4, 0.74], ['muddy', 6.7, 2.8, 2.0]] as const)('fresh water, %s', (water, blue, green, red) => {
   const k = waterAttenuation(water)
