@@ -1,3 +1,4 @@
+import { z } from 'zod'
 import { letDown } from '#shared/picture/let-down'
 import { pictureBench } from '#shared/picture/picture-bench'
 import { PictureAsk, type PictureAnswer } from '#shared/picture/picture-messages'
@@ -10,6 +11,9 @@ import { zoneColours } from '#shared/picture/zone-colours'
 const AT_ONCE_MS = 120
 
 type Work = Exclude<PictureAsk, { ask: 'forget' }>
+
+// The content policy lets nothing be compiled here; without this zod would try, and be told off in the console.
+z.config({ jitless: true })
 
 const bench = pictureBench()
 const measured = zoneBench()

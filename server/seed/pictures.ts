@@ -12,15 +12,15 @@ const SIZE = { width: 1440, height: 900, shadow: true, surround: 146 }
 
 /** The sides a demo finish is shown from. */
 const VIEWS: readonly { wish: PictureWish, side: string }[] = [
-  { wish: { ...SIZE, light: 'bench' }, side: 'left side' },
-  { wish: { ...SIZE, light: 'face', roll: 35 }, side: 'from above the shoulder, into the light' },
+  { wish: { ...SIZE, light: 'bench' }, side: 'Left side' },
+  { wish: { ...SIZE, light: 'face', roll: 35 }, side: 'From above the shoulder, into the light' },
 ]
 
 /** Photos of the demo finishes, painted by our own renderer; `views` of each. */
-export async function photographDemo(desk: Ctx, { plan, schemeId, revision }: PublishedDemo, views: number): Promise<void> {
+export async function photographDemo(desk: Ctx, { schemeId, revision }: PublishedDemo, views: number): Promise<void> {
   for (const { wish, side } of VIEWS.slice(0, views)) {
     const painted = await paintOnThread({ look: { body: revision.body, materials: revision.materials }, wish })
     const photo = await addPhoto(desk, schemeId, null, await encodePicture(painted, 'jpeg'), { store: objectStore(), process: takeInPhoto })
-    await changePhoto(desk, photo.id, { alt: `${plan.name} on ${plan.blank}, ${side}` })
+    await changePhoto(desk, photo.id, { alt: side })
   }
 }
