@@ -1,4 +1,4 @@
-import { boxRound, closedLine } from '~/components/ui/blank-line'
+import { boxRound, closedLine } from '../ui/blank-line'
 
 /** A blank's outline made ready once, to be drawn on every piece of a batch. */
 export interface PieceDrawing {
