@@ -1,5 +1,5 @@
 import type { PreparedBlank } from './prepared-blank'
-import type { DrawingPoint } from './side-outline'
+import { drawingPoint, type DrawingPoint } from './side-outline'
 import { placeOnSurface } from './surface-coordinates'
 import { BACK_EDGE, BELLY_EDGE, finOfZone, GILL_COVER_LENGTH, gillEdge, TAIL_START, type BodyZone, type ZoneName } from './zones'
 
@@ -44,11 +44,11 @@ export function zoneOutline(blank: PreparedBlank, zone: ZoneName): DrawingPoint[
   const fin = finOfZone(zone)
   if (fin !== undefined) {
     const outline = blank.fins.find(one => one.id === fin)
-    return outline ? Array.from(outline.xs, (x, i): DrawingPoint => [x, -(outline.ys[i] ?? 0)]) : []
+    return outline ? Array.from(outline.xs, (x, i) => drawingPoint(x, -(outline.ys[i] ?? 0))) : []
   }
   return ways(blank, zone as BodyZone).flatMap(way => // not a fin, so a zone of the body
-    Array.from({ length: STEPS + 1 }, (_, i): DrawingPoint => {
+    Array.from({ length: STEPS + 1 }, (_, i) => {
       const { position } = placeOnSurface(blank, ...way(i / STEPS), 1)
-      return [position[0], -position[1]]
+      return drawingPoint(position[0], -position[1])
     }))
 }

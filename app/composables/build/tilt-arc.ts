@@ -1,3 +1,4 @@
+import { toHundredth } from '#shared/blank/to-hundredth'
 import { TILT_MAX, TILT_MIN } from '#shared/picture/picture-options'
 
 /** The arc in the drawing's own px: centre, radius, and half the angle it spans, radians. */
@@ -16,7 +17,7 @@ const turnOf = (tilt: number) => HALF * (2 * (tilt - TILT_MIN) / (TILT_MAX - TIL
 export function onArc(tilt: number, inward = 0): { x: number, y: number, turn: number } {
   const turn = turnOf(tilt)
   const r = RADIUS - inward
-  return { x: CENTRE.x + r * Math.sin(turn), y: CENTRE.y - r * Math.cos(turn), turn: turn * 180 / Math.PI }
+  return { x: toHundredth(CENTRE.x + r * Math.sin(turn)), y: toHundredth(CENTRE.y - r * Math.cos(turn)), turn: toHundredth(turn * 180 / Math.PI) }
 }
 
 /** The tilt nearest to a place of the drawing, whole degrees, held to the arc. */

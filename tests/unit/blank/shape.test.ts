@@ -6,6 +6,7 @@ import { BUILT_IN_BLANKS, builtInBlank } from '#shared/blank/built-in-blanks'
 import { prepareBlank } from '#shared/blank/prepared-blank'
 import { profileOf } from '#shared/blank/profile'
 import { sideOutline, svgPath } from '#shared/blank/side-outline'
+import { toHundredth } from '#shared/blank/to-hundredth'
 import { zoneOutline } from '#shared/blank/zone-outline'
 import { BODY_ZONES, finZone } from '#shared/blank/zones'
 
@@ -99,10 +100,16 @@ describe('line drawings', () => {
     const { box } = outline
     for (const [x, y] of [...outline.body, ...outline.fins.flatMap(fin => fin.points), ...(outline.lip ?? [])]) {
       expect(x).toBeGreaterThanOrEqual(box.x)
-      expect(x).toBeLessThanOrEqual(box.x + box.width)
+      expect(x).toBeLessThanOrEqual(toHundredth(box.x + box.width))
       expect(y).toBeGreaterThanOrEqual(box.y)
-      expect(y).toBeLessThanOrEqual(box.y + box.height)
+      expect(y).toBeLessThanOrEqual(toHundredth(box.y + box.height))
     }
+  })
+  it('are in hundredths, so that the server and the browser draw the same figures', () => {
+    const { box, eye, rings, body, joints, mouth, lip, fins } = outline
+    const points = [body, mouth, lip ?? [], ...joints, ...fins.map(fin => fin.points), ...BODY_ZONES.map(zone => zoneOutline(prepareBlank(shape), zone))]
+    const figures = [...Object.values(box), ...Object.values(eye), ...rings.flatMap(ring => Object.values(ring)), ...points.flat(2)]
+    expect(figures.filter(figure => figure !== toHundredth(figure))).toEqual([])
   })
   it('show the back above the belly, as SVG counts', () => {
     const back = outline.body.find(([x]) => x > 30)?.[1] ?? 0
