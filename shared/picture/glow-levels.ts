@@ -13,10 +13,18 @@ export interface GlowLevels {
   /** Photons given off on the side the light came from, and on the other, for one photon taken in all. */
   back: Float32Array
   onward: Float32Array
+  /** Bands it takes photons in, and gives them off in: from the first up to before the last. Elsewhere next to none. */
+  taking: BandSpan
+  giving: BandSpan
 }
+
+/** Picture bands from `from` up to before `to`. */
+export interface BandSpan { from: number, to: number }
 
 /** Glow is smooth in thickness: it is worked out at every eighth level and read on straight lines between. */
 const STEP = 8
+/** What is less than this share of the most is not looked at. */
+const LEAST_SHARE = 1e-3
 const BLACK = new Float64Array(36)
 
 /**
@@ -42,5 +50,14 @@ export function glowLevels(paint: PaintOptics, glow: Glow, passesAt: (level: num
     onward.set(toPictureBands(sunk.map(value => value / fed)), level * BANDS)
   }
   for (const array of [back, onward]) fillBetween(array, BANDS, STEP)
-  return { takes, back, onward }
+  return { takes, back, onward, taking: spanOf(takes), giving: spanOf(back) }
+}
+
+/** The bands that matter: where some level reaches a thousandth of the most. */
+function spanOf(levels: Float32Array): BandSpan {
+  const most = new Float64Array(BANDS)
+  levels.forEach((value, i) => most[i % BANDS] = Math.max(most[i % BANDS]!, value))
+  const least = LEAST_SHARE * Math.max(...most)
+  const from = most.findIndex(value => value > least)
+  return from < 0 ? { from: 0, to: 0 } : { from, to: most.findLastIndex(value => value > least) + 1 }
 }

@@ -20,10 +20,8 @@ interface GlowingHere {
   /** Where its level begins in its table, and the table. */
   level: number
   table: CoatTable
-  /** Reflectance of what lies under it. */
-  under: Float64Array
-  /** 1/(1 - RG): how often light goes back and forth between it and what lies under it. */
-  bounces: Float64Array
+  /** G/(1 - RG): of a photon that leaves it downwards, how many come back to it from what lies under it, going back and forth. */
+  returns: Float64Array
   /** The stack's denominator when it was laid. */
   after: Float64Array
   /** Of a photon at the top of the film, what comes to this coat; and as much of one that leaves it upwards comes to the top. */
@@ -41,8 +39,9 @@ interface GlowPlace {
   /** As many as may lie anywhere; the first `count` lie here, from the ground up. */
   coats: GlowingHere[]
   count: number
-  /** Reflectance of the whole stack. */
+  /** Reflectance of the whole stack, and one over its denominator. */
   whole: Float64Array
+  perLast: Float64Array
   /** Room to work in. */
   top: Float64Array
   bottom: Float64Array
@@ -80,9 +79,9 @@ export function glowLight(coats: readonly LaidTable[], ground: ArrayLike<number>
 function emptyPlace(most: number, table: CoatTable): GlowPlace {
   const row = () => new Float64Array(BANDS)
   const coats = Array.from({ length: most }, (): GlowingHere => ({
-    level: 0, table, under: row(), bounces: row(), after: row(), gain: row(), onwardAgain: 0, backAgain: 0, above: 0, below: 0,
+    level: 0, table, returns: row(), after: row(), gain: row(), onwardAgain: 0, backAgain: 0, above: 0, below: 0,
   }))
-  return { coats, count: 0, whole: row(), top: row(), bottom: row() }
+  return { coats, count: 0, whole: row(), perLast: row(), top: row(), bottom: row() }
 }
 
 /** What lies at a sample: from the ground up for reflectances, then from the top down for what reaches each coat that glows. */
@@ -97,23 +96,14 @@ function findPlace(coats: readonly LaidTable[], ground: ArrayLike<number>, sampl
     const code = codes[sample]!
     if (code <= table.empty) continue
     const level = code * BANDS
-    const { R, Q } = table
-    const here = table.glow ? place.coats[place.count++]! : undefined
-    for (let b = 0; b < BANDS; b++) {
-      const n = N[b]!, d = D[b]!, r = R[level + b]!
-      N[b] = r * d + Q[level + b]! * n
-      D[b] = d - r * n
-      if (!here) continue
-      here.under[b] = n / d
-      here.bounces[b] = d / D[b]!
-      here.after[b] = D[b]!
-    }
-    if (!here) continue
-    here.level = level
-    here.table = table
-    findReturns(here, table.glow!)
+    if (table.glow) keepUnder(place.coats[place.count++]!, table, level, N)
+    layInto(table, level, N, D)
+    if (table.glow) findReturns(place.coats[place.count - 1]!, table.glow, D)
   }
-  for (let b = 0; b < BANDS; b++) place.whole[b] = N[b]! / D[b]!
+  for (let b = 0; b < BANDS; b++) {
+    place.whole[b] = N[b]! / D[b]!
+    place.perLast[b] = 1 / D[b]!
+  }
   const reaching = N.fill(1)
   for (let c = coats.length - 1, left = place.count; left > 0; c--) {
     const { codes, table: { T, glow, empty } } = coats[c]!
@@ -121,19 +111,37 @@ function findPlace(coats: readonly LaidTable[], ground: ArrayLike<number>, sampl
     if (code <= empty) continue
     if (glow) {
       const { gain, after } = place.coats[--left]!
-      for (let b = 0; b < BANDS; b++) gain[b] = reaching[b]! * after[b]! / D[b]!
+      for (let b = 0; b < BANDS; b++) gain[b] = reaching[b]! * after[b]! * place.perLast[b]!
     }
     for (let b = 0; b < BANDS; b++) reaching[b]! *= T[code * BANDS + b]!
   }
 }
 
-function findReturns(here: GlowingHere, { takes, back, onward }: GlowLevels): void {
-  const { level, under, bounces } = here
+function layInto({ R, Q }: CoatTable, level: number, N: Float64Array, D: Float64Array): void {
+  for (let b = 0; b < BANDS; b++) {
+    const n = N[b]!, d = D[b]!, r = R[level + b]!
+    N[b] = r * d + Q[level + b]! * n
+    D[b] = d - r * n
+  }
+}
+
+/** Notes a coat that glows before it is laid: `returns` holds the numerator of the ground until the denominator is known. */
+function keepUnder(here: GlowingHere, table: CoatTable, level: number, N: Float64Array): void {
+  here.table = table
+  here.level = level
+  here.returns.set(N)
+}
+
+function findReturns(here: GlowingHere, { takes, back, onward }: GlowLevels, D: Float64Array): void {
+  const { level, returns, after } = here
   let onwardAgain = 0, backAgain = 0
   for (let b = 0; b < BANDS; b++) {
-    const taken = under[b]! * bounces[b]! * takes[level + b]!
-    onwardAgain += onward[level + b]! * taken
-    backAgain += back[level + b]! * taken
+    const d = D[b]!
+    const again = returns[b]! / d
+    after[b] = d
+    returns[b] = again
+    onwardAgain += onward[level + b]! * again * takes[level + b]!
+    backAgain += back[level + b]! * again * takes[level + b]!
   }
   here.onwardAgain = onwardAgain
   here.backAgain = backAgain
@@ -160,21 +168,21 @@ function sendThrough({ coats, count, top: sinking }: GlowPlace, entering: Float6
 }
 
 function takeSinking(here: GlowingHere, sinking: Float64Array): void {
-  const { level, table: { T, glow }, under, bounces, gain, onwardAgain, backAgain } = here
-  const { takes } = glow!
+  const { level, table: { T, glow }, returns, gain, onwardAgain, backAgain } = here
+  const { takes, taking } = glow!
   let above = 0, below = 0
-  for (let b = 0; b < BANDS; b++) {
+  for (let b = taking.from; b < taking.to; b++) {
     const taken = sinking[b]! * gain[b]! * takes[level + b]!
     above += taken
-    below += taken * T[level + b]! * under[b]! * bounces[b]!
+    below += taken * T[level + b]! * returns[b]!
   }
   here.above = above
   here.below = (below + above * onwardAgain) / (1 - backAgain)
 }
 
 function giveDown({ level, table: { T, glow }, gain, above, below }: GlowingHere, sinking: Float64Array): void {
-  const { back, onward } = glow!
-  for (let b = 0; b < BANDS; b++) {
+  const { back, onward, giving } = glow!
+  for (let b = giving.from; b < giving.to; b++) {
     // Counted at the top as so many that as many would be left below this coat; going back and forth is alike for both.
     const dimmed = gain[b]! * T[level + b]!
     if (dimmed > NONE) sinking[b]! += (above * onward[level + b]! + below * back[level + b]!) / dimmed
@@ -183,20 +191,20 @@ function giveDown({ level, table: { T, glow }, gain, above, below }: GlowingHere
 
 function takeRising(here: GlowingHere, risen: Float64Array): void {
   const { level, table: { T, glow }, gain, backAgain } = here
-  const { takes } = glow!
+  const { takes, taking } = glow!
   let fed = 0
-  for (let b = 0; b < BANDS; b++) {
+  for (let b = taking.from; b < taking.to; b++) {
     const dimmed = gain[b]! * T[level + b]!
     if (dimmed > NONE) fed += risen[b]! / dimmed * takes[level + b]!
   }
   here.below += fed / (1 - backAgain)
 }
 
-function giveUp({ level, table: { T, glow }, under, bounces, gain, above, below }: GlowingHere, risen: Float64Array): void {
-  const { back, onward } = glow!
-  for (let b = 0; b < BANDS; b++) {
+function giveUp({ level, table: { T, glow }, returns, gain, above, below }: GlowingHere, risen: Float64Array): void {
+  const { back, onward, giving } = glow!
+  for (let b = giving.from; b < giving.to; b++) {
     const near = back[level + b]!, far = onward[level + b]!
-    const returned = T[level + b]! * under[b]! * bounces[b]!
+    const returned = T[level + b]! * returns[b]!
     risen[b]! += (above * near + below * far + (above * far + below * near) * returned) * gain[b]!
   }
 }
