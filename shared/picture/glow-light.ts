@@ -47,6 +47,9 @@ interface GlowPlace {
   bottom: Float64Array
 }
 
+/** A glow worked out before, and every coat that has come, gone or changed since: where none of them lies, nothing has. */
+export interface LastGlow { light: Float32Array, changed: readonly LaidTable[] }
+
 /**
  * Light that coats give off in daylight of irradiance 1, linear sRGB, three per sample; undefined when none glows.
  *
@@ -55,17 +58,22 @@ interface GlowPlace {
  * its own. Through a coat light is dimmed by T/(1 - RG), which over a chain is the product of T times a ratio of denominators.
  *
  * @param ground reflectance under the lowest coat, 16
- * @accuracy within CIEDE2000 0.5 of the promise
+ * @param last   a glow of the same samples to start from
+ * @accuracy on random stacks half within CIEDE2000 0.12 of the promise, 95 in 100 within 0.35; four fluorescents in one place up to 0.8
  */
-export function glowLight(coats: readonly LaidTable[], ground: ArrayLike<number>, count: number): Float32Array | undefined {
+export function glowLight(coats: readonly LaidTable[], ground: ArrayLike<number>, count: number, last?: LastGlow): Float32Array | undefined {
   const glowing = coats.filter(({ table }) => table.glow)
   const [first] = glowing
   if (!first) return undefined
-  const out = new Float32Array(3 * count)
+  const out = last ? last.light.slice() : new Float32Array(3 * count)
   const place = emptyPlace(glowing.length, first.table)
   const entering = new Float64Array(BANDS), risen = new Float64Array(BANDS), again = new Float64Array(BANDS)
   for (let i = 0; i < count; i++) {
-    if (!glowing.some(({ codes, table }) => codes[i]! > table.empty)) continue
+    if (last && !liesAt(last.changed, i)) continue
+    if (!liesAt(glowing, i)) {
+      out.fill(0, 3 * i, 3 * i + 3)
+      continue
+    }
     findPlace(coats, ground, i, place)
     for (let b = 0; b < BANDS; b++) entering[b] = ENTERING[b]! / (1 - SURFACE_INSIDE * place.whole[b]!)
     sendThrough(place, entering, risen)
@@ -74,6 +82,10 @@ export function glowLight(coats: readonly LaidTable[], ground: ArrayLike<number>
     putRisen(risen, again, place.whole, out, 3 * i)
   }
   return out
+}
+
+function liesAt(coats: readonly LaidTable[], sample: number): boolean {
+  return coats.some(({ codes, table }) => codes[sample]! > table.empty)
 }
 
 function emptyPlace(most: number, table: CoatTable): GlowPlace {

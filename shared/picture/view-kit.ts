@@ -14,7 +14,7 @@ import { sparkleNoise, wavyNormals } from './surface-grain'
 /** How many deposits a view keeps beyond those it shows. */
 const SPARE_MAPS = 24
 
-interface KeptGlow { keys: readonly string[], light: Float32Array | undefined }
+interface KeptGlow { groundKey: string, coats: readonly KeyedCoat[], light: Float32Array | undefined }
 interface KeptState { keys: readonly string[], state: Float32Array }
 
 /** Everything that stands as long as a blank is looked at from the same side: samples, grain, deposits, coats below the edit. */
@@ -106,14 +106,22 @@ export function composeKept(kit: ViewKit, groundKey: string, ground: ArrayLike<n
   return kit.whole.state
 }
 
-/** Light that the stack gives off under every sample; the same as last time for as long as the coats are. */
+/** Light that the stack gives off under every sample; worked out anew only where a coat lies that has changed since last time. */
 export function keptGlow(kit: ViewKit, groundKey: string, ground: ArrayLike<number>, coats: readonly KeyedCoat[]): Float32Array | undefined {
-  const keys = [groundKey, ...coats.map(coat => coat.key)]
-  const last = kit.glow
-  if (last && last.keys.length === keys.length && sharedStart(last.keys, keys) === keys.length) return last.light
-  const light = glowLight(coats, ground, kit.samples.count)
-  kit.glow = { keys, light }
+  const last = kit.glow?.groundKey === groundKey ? kit.glow : undefined
+  const changed = last && changedCoats(last.coats, coats)
+  if (last && changed?.length === 0) return last.light
+  const light = glowLight(coats, ground, kit.samples.count, last?.light && changed && { light: last.light, changed })
+  kit.glow = { groundKey, coats, light }
   return light
+}
+
+/** What lies between the coats at the bottom and at the top that two stacks share, of both. */
+function changedCoats(before: readonly KeyedCoat[], now: readonly KeyedCoat[]): KeyedCoat[] {
+  const [a, b] = [before, now].map(coats => coats.map(coat => coat.key)) as [string[], string[]]
+  const low = sharedStart(a, b)
+  const high = sharedStart(a.slice(low).reverse(), b.slice(low).reverse())
+  return [...before.slice(low, a.length - high), ...now.slice(low, b.length - high)]
 }
 
 function sharedStart(a: readonly string[], b: readonly string[]): number {

@@ -83,6 +83,24 @@ describe('a picture', TIMEOUT, () => {
     expect(Math.max(...afresh.map((value, i) => Math.abs(value - again[i]!)))).toBeLessThanOrEqual(1)
   })
 
+  it('draws what glows as afresh when a coat over it comes, moves, thins and goes', () => {
+    const kept = pictureBench()
+    const edited = structuredClone(ember)
+    const ids = edited.body.stack.flatMap(item => item.act === 'coat' ? [item.coat] : [])
+    const daggers = ids.find(coat => coat.name === 'black dagger strokes')!, orange = ids.find(coat => coat.name.includes('orange'))!
+    const same = (wish: object) => {
+      const again = kept.draw(edited, { ...SIZE, ...wish }).rgba, afresh = renderLook(edited, { ...SIZE, ...wish }).rgba
+      return Math.max(...afresh.map((value, i) => Math.abs(value - again[i]!)))
+    }
+    expect(same({})).toBeLessThanOrEqual(1)
+    daggers.passes = 0.3
+    expect(same({})).toBeLessThanOrEqual(1)
+    orange.gun = { aim: 'from', angle: 90, footprint: 1 }
+    expect(same({})).toBeLessThanOrEqual(1)
+    expect(same({ upTo: orange.id })).toBeLessThanOrEqual(1)
+    expect(same({ upTo: 'all' })).toBeLessThanOrEqual(1)
+  })
+
   it('is glossy under a clear and not before', () => {
     const brightest = (clear: boolean) => Math.max(...bench.draw(perch, { ...SIZE, clear, surround: 0 }).rgba.filter((_, i) => i % 4 === 1))
     expect(brightest(true)).toBeGreaterThan(brightest(false))
