@@ -4,8 +4,10 @@ import { type Lab, labFromReflectance } from '../../../shared/optics/colorimetry
 import { deltaE2000 } from '../../../shared/optics/delta-e'
 import { glowPhotons } from '../../../shared/optics/glow'
 import { CARD_BLACK, CARD_WHITE, groundFromLab } from '../../../shared/optics/known-film'
-import { fallingLight, radianceFactor } from '../../../shared/optics/light-power'
-import type { Light } from '../../../shared/optics/lights'
+import observer from '../../../shared/optics/data/cie-1931-observer.json'
+import { emissionPhotons } from '../../../shared/optics/fluorescence'
+import { fallingLight, radianceFactor, xyzOfPhotons } from '../../../shared/optics/light-power'
+import { type Light, LIGHTS, POWER } from '../../../shared/optics/lights'
 import { mixOptics, type PaintOptics, paintOpticsFrom } from '../../../shared/optics/paint-optics'
 import { coloursOnTheWayUp, promise, stackReflectance } from '../../../shared/optics/stack'
 import { flat } from './draws'
@@ -86,6 +88,21 @@ describe('fluorescents', () => {
     const mix = mixOptics([{ optics: orange, drops: 1 }, { optics: soot, drops: 3 }])
     const glow = (optics: PaintOptics) => over(optics, white).xyz[1] - over(quiet(optics), white).xyz[1]
     expect(glow(mix)).toBeLessThan(0.1 * glow(orange))
+  })
+  it.each(LIGHTS)('weigh on the eye as their light does, lamp by lamp: %s', (light) => {
+    const photons = emissionPhotons({ peak: 560, width: 120 }).map(value => 100 * value)
+    const sum = [0, 0, 0]
+    let white = 0
+    POWER[light].power.forEach((power, i) => {
+      const nm = 380 + 5 * i, place = Math.min(i / 2, 35), below = Math.floor(place), share = place - below
+      const power5 = ((1 - share) * photons[below]! + share * (photons[below + 1] ?? 0)) / nm
+      white += power * observer.y[i]!
+      sum[0]! += power5 * observer.x[i]!
+      sum[1]! += power5 * observer.y[i]!
+      sum[2]! += power5 * observer.z[i]!
+    })
+    const exact = sum.map(value => value / white)
+    xyzOfPhotons(photons, light).forEach((value, c) => expect(Math.abs(value / exact[c]! - 1)).toBeLessThan(light === 'D65' ? 0.002 : 0.03))
   })
   it('give a plain reflectance where they only reflect', () => {
     const dye = totalFactor(quiet(orange), 2, white)
