@@ -36,8 +36,8 @@ async function signIn(page: Page, { email, password }: { email: string, password
 async function openWorkshop(page: Page, email: string, name: string) {
   await page.goto('/sign-up')
   await page.getByLabel('Your e-mail').fill(email)
-  await page.getByRole('button', { name: 'Send the letter' }).click()
-  await expect(page.getByText(`Sent to ${email}`)).toBeVisible()
+  await page.getByRole('button', { name: 'Send me the link' }).click()
+  await expect(page.getByText(`To ${email}`)).toBeVisible()
   await page.goto(`/sign-up/${await tokenTo(email)}`)
   await page.getByLabel('Name of the workshop').fill(name)
   await page.getByLabel('Your name').fill('Runa')
