@@ -6,9 +6,14 @@ import { takeInPhoto } from '#server/photos/photo-pool'
 import type { Ctx } from '#server/services/ctx'
 import { addPhoto } from '#server/services/photos/add-photo'
 import { changePhoto } from '#server/services/photos/change-photo'
+import { drawLook } from '#server/services/picture/draw-look'
+import { wishOf } from '#server/services/picture/wish-of'
+import { lookOfScheme } from '#server/services/scheme/look-of-scheme'
+import { wallPictureSize } from '#shared/picture/picture-size'
 import type { PictureWish } from '#shared/picture/picture-options'
+import { PictureQuery } from '#shared/scheme/scheme-input'
 
-const SIZE = { width: 1440, height: 900, shadow: true, surround: 146 }
+const SIZE = { width: 1280, height: 800, shadow: true, surround: 146 }
 
 /** The sides a demo finish is shown from. */
 const VIEWS: readonly { wish: PictureWish, side: string }[] = [
@@ -23,4 +28,11 @@ export async function photographDemo(desk: Ctx, { schemeId, revision }: Publishe
     const photo = await addPhoto(desk, schemeId, null, await encodePicture(painted, 'jpeg'), { store: objectStore(), process: takeInPhoto })
     await changePhoto(desk, photo.id, { alt: side })
   }
+}
+
+/** Paints the picture that hangs on the wall, so that the wall is there when it is first looked at. */
+export async function hangDemo(painter: Ctx, { schemeId, revision }: PublishedDemo): Promise<void> {
+  const query = PictureQuery.parse(wallPictureSize(revision.materials.blank.shape))
+  const { look } = await lookOfScheme(painter, schemeId, query)
+  await drawLook(painter, look, wishOf(query))
 }

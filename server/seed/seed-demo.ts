@@ -1,7 +1,7 @@
 import { CARD_WORDS, shareDemoCard } from './cards'
 import { paintDemoWall } from './finishes'
 import { openDemoWorkshop, type DemoSignIn } from './people'
-import { photographDemo } from './pictures'
+import { hangDemo, photographDemo } from './pictures'
 import { runDemo } from './runs'
 import type { Database } from '#server/db/client'
 
@@ -19,6 +19,7 @@ export async function seedDemo(db: Database, tell: (step: string) => void): Prom
   await runDemo(ctxOf.bench, wall, new Date())
   for (const [i, finish] of wall.entries()) {
     tell(`Photographing ${finish.plan.name}, ${i + 1} of ${wall.length}`)
+    await hangDemo(ctxOf.painter, finish)
     await photographDemo(ctxOf.desk, finish, finish.plan.name in CARD_WORDS ? 2 : 1)
     await shareDemoCard(ctxOf.desk, finish)
   }

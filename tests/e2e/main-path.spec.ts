@@ -63,8 +63,8 @@ test('a painter builds a finish coat by coat, sees its colours, and publishes it
 test('a bench painter follows it on two pieces to the end', async ({ browser }) => {
   const { page, breaches } = await enter(browser, 'bench', `/schemes/${schemeId}`)
   await page.getByRole('link', { name: 'Start a run' }).click()
-  await page.getByLabel('Pieces').fill(String(PIECES))
-  await page.getByLabel('Pieces').press('Tab')
+  await page.getByRole('spinbutton', { name: 'Pieces' }).fill(String(PIECES))
+  await page.getByRole('spinbutton', { name: 'Pieces' }).press('Tab')
   await page.getByRole('button', { name: 'Start the run' }).click()
   await page.waitForURL(/\/runs\/[0-9a-f-]{36}\/follow$/)
 

@@ -4,10 +4,10 @@ import { requireContext } from '#server/http/context'
 import { defineApiHandler } from '#server/http/define-api-handler'
 import { parseParams, parseQuery } from '#server/http/parse'
 import { drawLook } from '#server/services/picture/draw-look'
+import { wishOf } from '#server/services/picture/wish-of'
 import { lookOfScheme } from '#server/services/scheme/look-of-scheme'
 import { ENGINE_VERSION } from '#shared/optics/engine-version'
 import { PICTURE_VERSION } from '#shared/picture/picture-hash'
-import type { PictureWish } from '#shared/picture/picture-options'
 import { PictureQuery, SchemeParams } from '#shared/scheme/scheme-input'
 
 /** A revision's picture under an address of its own may be kept; any other is asked about each time, which costs no painting. */
@@ -34,15 +34,3 @@ export default defineApiHandler(async (event) => {
   setResponseHeader(event, 'content-length', drawn.bytes.byteLength)
   return drawn.bytes
 })
-
-function wishOf(query: PictureQuery): PictureWish {
-  return {
-    width: query.width,
-    height: query.height ?? Math.round(query.width / 2),
-    roll: query.roll,
-    light: typeof query.light === 'number' ? { tilt: query.light } : query.light,
-    upTo: query.upTo ?? 'all',
-    clear: query.clear,
-    surround: query.surround === 'none' ? null : query.surround,
-  }
-}

@@ -5,6 +5,8 @@ import { sideOutline, type SideOutline } from '#shared/blank/side-outline'
 export const WALL_SCALE = 2.95
 /** The wall's scale on a phone, as a share of that. */
 export const HAND_SHARE = 0.7
+/** Picture pixels for each px on the wall, so that fine meshes stay sharp. */
+export const WALL_SHARPNESS = 1.5
 /** Empty border of a painted picture on both sides together, as a share of its smaller side: as `fitView` leaves it. */
 const BORDER = 0.12
 
@@ -55,9 +57,8 @@ function boxOf(shape: BlankShape, { body, fins, rings }: SideOutline): Box {
   return { x, y, width: Math.max(...xs) - x, height: Math.max(...ys) - y }
 }
 
-/** Address of a scheme's picture, painted by the server. */
-export function pictureAddress(schemeId: string, { width, height }: PictureSize, more: Readonly<Record<string, string | number>> = {}): string {
-  const query = new URLSearchParams({ width: String(width), height: String(height) })
-  for (const [name, value] of Object.entries(more)) query.set(name, String(value))
-  return `/api/schemes/${schemeId}/picture?${query.toString()}`
+/** Size of the picture that hangs on the wall, pixels: asked for by the page and painted ahead for it. */
+export function wallPictureSize(shape: BlankShape, outline?: SideOutline): PictureSize {
+  const { width, height } = pictureSize(shape, WALL_SCALE, outline)
+  return { width: Math.round(width * WALL_SHARPNESS), height: Math.round(height * WALL_SHARPNESS) }
 }
