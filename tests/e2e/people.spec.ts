@@ -62,6 +62,25 @@ test('whoever is signed out is asked who they are, and comes to the page they wa
   expect(breaches).toEqual([])
 })
 
+test('whoever is signed in passes the door by, and finds their own page from the back by keyboard, on a phone too', async ({ page }) => {
+  await signIn(page, demo('painter'))
+  await expect(page.getByRole('heading', { name: 'People' })).toBeVisible()
+  await page.goto('/sign-in?back=/blanks')
+  await expect(page).toHaveURL(/\/blanks$/)
+  await page.setViewportSize({ width: 390, height: 844 })
+  await expect(async () => {
+    await page.getByRole('button', { name: 'You' }).press('Enter')
+    await expect(page.getByRole('link', { name: 'Your own page' })).toBeVisible({ timeout: 500 })
+  }).toPass()
+  await page.keyboard.press('Escape')
+  await expect(page.getByRole('button', { name: 'You' })).toBeFocused()
+  await page.keyboard.press('Enter')
+  await page.keyboard.press('Tab')
+  await page.keyboard.press('Enter')
+  await page.waitForURL('**/me')
+  await expect(page.getByRole('link', { name: 'Your own page' })).toBeHidden()
+})
+
 test('a workshop is opened by letter, somebody is asked in, and is out at once when taken out', async ({ page, browser }) => {
   const breaches = policyBreaches(page)
   const guest = freshAddress('guest')
