@@ -1,44 +1,19 @@
-import { readFileSync } from 'node:fs'
 import AxeBuilder from '@axe-core/playwright'
 import { type Page, expect, test } from '@playwright/test'
 import { letterTo, tokenTo } from '../api/mailbox'
-
-interface DemoSignIn { email: string, password: string, role: string }
+import { alive, breachesOf, demo, signIn } from './sign-in'
 
 const PASSWORD = 'a roach on a wet stone'
 const freshAddress = (who: string) => `${who}-${crypto.randomUUID().slice(0, 8)}@shore.example`
 
-function demo(role: string): DemoSignIn {
-  const all = JSON.parse(readFileSync(process.env.TEST_DEMO_SIGN_INS ?? '', 'utf8')) as DemoSignIn[]
-  const found = all.find(one => one.role === role)
-  if (!found) throw new Error(`The demo lets no ${role} in.`)
-  return found
-}
-
-/** What the browser refuses to run or to load is written to its console. */
-function policyBreaches(page: Page): string[] {
-  const breaches: string[] = []
-  page.on('console', (message) => {
-    if (/content security policy|hydration/i.test(message.text())) breaches.push(message.text())
-  })
-  page.on('pageerror', error => breaches.push(error.message))
-  return breaches
-}
-
-async function signIn(page: Page, { email, password }: { email: string, password: string }, to = '/workshop') {
-  await page.goto(to)
-  await page.getByLabel('E-mail').fill(email)
-  await page.getByLabel('Password').fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.waitForURL(`**${to}`)
-}
-
 async function openWorkshop(page: Page, email: string, name: string) {
   await page.goto('/sign-up')
+  await alive(page)
   await page.getByLabel('Your e-mail').fill(email)
   await page.getByRole('button', { name: 'Send me the link' }).click()
   await expect(page.getByText(`To ${email}`)).toBeVisible()
   await page.goto(`/sign-up/${await tokenTo(email)}`)
+  await alive(page)
   await page.getByLabel('Name of the workshop').fill(name)
   await page.getByLabel('Your name').fill('Runa')
   await page.getByLabel('Choose a password').fill(PASSWORD)
@@ -47,9 +22,10 @@ async function openWorkshop(page: Page, email: string, name: string) {
 }
 
 test('whoever is signed out is asked who they are, and comes to the page they wanted', async ({ page }) => {
-  const breaches = policyBreaches(page)
+  const breaches = breachesOf(page)
   const owner = demo('owner')
   await page.goto('/workshop')
+  await alive(page)
   await expect(page).toHaveURL(/\/sign-in\?back=/)
   await page.getByLabel('E-mail').fill(owner.email)
   await page.getByLabel('Password').fill('not this one')
@@ -66,6 +42,7 @@ test('whoever is signed in passes the door by, and finds their own page from the
   await signIn(page, demo('painter'))
   await expect(page.getByRole('heading', { name: 'People' })).toBeVisible()
   await page.goto('/sign-in?back=/blanks')
+  await alive(page)
   await expect(page).toHaveURL(/\/blanks$/)
   await page.setViewportSize({ width: 390, height: 844 })
   await expect(async () => {
@@ -82,10 +59,11 @@ test('whoever is signed in passes the door by, and finds their own page from the
 })
 
 test('a workshop is opened by letter, somebody is asked in, and is out at once when taken out', async ({ page, browser }) => {
-  const breaches = policyBreaches(page)
+  const breaches = breachesOf(page)
   const guest = freshAddress('guest')
   await openWorkshop(page, freshAddress('owner'), 'Runa on the shore')
   await page.goto('/workshop')
+  await alive(page)
   await page.getByLabel('E-mail').fill(guest)
   await page.getByRole('button', { name: 'Invite' }).click()
   await expect(page.getByRole('cell', { name: guest, exact: true })).toBeVisible()
@@ -94,6 +72,7 @@ test('a workshop is opened by letter, somebody is asked in, and is out at once w
   const elsewhere = await browser.newContext({ baseURL: process.env.TEST_BASE_URL })
   const guestPage = await elsewhere.newPage()
   await guestPage.goto(`/invite/${await tokenTo(guest)}`)
+  await alive(guestPage)
   await guestPage.getByLabel('Your name').fill('Stellan')
   await guestPage.getByLabel('Choose a password').fill(PASSWORD)
   await guestPage.getByRole('button', { name: 'Come in' }).click()
@@ -117,6 +96,7 @@ test('the door and the pages of people have no fault that axe can find, light an
     await page.emulateMedia({ colorScheme })
     for (const path of ['/workshop', '/me', '/sign-in', '/sign-up', '/forgot']) {
       await page.goto(path)
+      await alive(page)
       await expect(page.getByRole('heading', { level: 1 })).toBeVisible()
       const { violations } = await new AxeBuilder({ page }).analyze()
       expect(violations.map(one => `${path} ${colorScheme}: ${one.id} ${one.nodes.map(node => node.target.join(' ')).join(', ')}`)).toEqual([])

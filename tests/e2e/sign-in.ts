@@ -12,13 +12,23 @@ export function demo(role: string): DemoSignIn {
   return found
 }
 
+/** Waits until a page that the server drew has come alive: presses before that reach nobody. */
+export async function alive(page: Page): Promise<void> {
+  await page.waitForFunction(() => {
+    const nuxt = (window as { useNuxtApp?: () => { isHydrating?: boolean } }).useNuxtApp
+    return nuxt?.().isHydrating === false
+  })
+}
+
 /** Signs in on the way to a page. */
 export async function signIn(page: Page, { email, password }: { email: string, password: string }, to = '/workshop'): Promise<void> {
   await page.goto(to)
+  await alive(page)
   await page.getByLabel('E-mail').fill(email)
   await page.getByLabel('Password').fill(password)
   await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.waitForURL(`**${to}`)
+  await page.waitForURL(url => url.pathname === to.split('?')[0])
+  await alive(page)
 }
 
 /** What a page must never say to its console: refused by the content policy, or drawn differently by server and browser. */
