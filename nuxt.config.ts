@@ -30,6 +30,13 @@ export default defineNuxtConfig({
     // The sealed cookie's own functions, named so that the page's types find them too: the module gives them to the server by auto-import only.
     '#sealed-session': here('./node_modules/nuxt-auth-utils/dist/runtime/server/utils/session'),
   },
+  // A card is read by people we do not know on whatever they have in hand: words and photos, and no script at all.
+  routeRules: {
+    '/c/**': {
+      noScripts: true,
+      security: { headers: { referrerPolicy: 'no-referrer', contentSecurityPolicy: { 'script-src': ['\'none\''], 'connect-src': ['\'none\''], 'worker-src': ['\'none\''], 'media-src': ['\'none\''] } } },
+    },
+  },
   compatibilityDate: '2026-11-01',
   nitro: {
     plugins: ['~~/server/boot/runtime-config.ts', '~~/server/boot/security-headers.ts'],
@@ -46,13 +53,6 @@ export default defineNuxtConfig({
           bundle: true, platform: 'node', format: 'esm', target: 'node20', logLevel: 'warning',
         })
       },
-    },
-  },
-  // A card is read by people we do not know on whatever they have in hand: words and photos, and no script at all.
-  routeRules: {
-    '/c/**': {
-      noScripts: true,
-      security: { headers: { referrerPolicy: 'no-referrer', contentSecurityPolicy: { 'script-src': ['\'none\''], 'connect-src': ['\'none\''], 'worker-src': ['\'none\''], 'media-src': ['\'none\''] } } },
     },
   },
   typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
