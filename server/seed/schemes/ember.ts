@@ -9,7 +9,7 @@ const DAGGERS = [
 
 export const EMBER: DemoScheme = {
   name: 'Ember',
-  fish: 'No fish: a signal for murky water',
+  fish: '',
   blank: 'Deep crank 62',
   iris: [88, 0, 60],
   notes: ['Fluorescents over a full white', 'Black daggers, shoulder dot'],
