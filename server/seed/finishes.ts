@@ -1,6 +1,6 @@
 import { DEMO_PAINTS, demoPaint, type DemoPaintName } from './paints'
 import { DEMO_SCHEMES } from './schemes'
-import { BASSWOOD, stackOf, type DemoScheme } from './write-scheme'
+import { bodyOf, type DemoScheme } from './write-scheme'
 import type { Ctx } from '#server/services/ctx'
 import { listBlanks } from '#server/services/blank/list-blanks'
 import { createScheme } from '#server/services/scheme/create-scheme'
@@ -10,10 +10,6 @@ import { saveDraft } from '#server/services/scheme/save-draft'
 import { addPaint } from '#server/services/shelf/add-paint'
 import type { SchemeBody } from '#shared/scheme/body'
 import type { RevisionView } from '#shared/scheme/scheme-view'
-import type { Lab } from '#shared/shelf/paint'
-
-const PUPIL: Lab = [6, 0, 0]
-const RIM: Lab = [20, 2, 6]
 
 /** A finish of the demo wall with its newest revision. */
 export interface PublishedDemo { plan: DemoScheme, schemeId: string, revision: RevisionView }
@@ -38,10 +34,6 @@ export async function paintDemoWall(painter: Ctx): Promise<PublishedDemo[]> {
     published.push({ plan, schemeId: scheme.id, revision: await publishScheme(painter, scheme.id, saved.version, { note: plan.notes[1] }) })
   }
   return published
-}
-
-function bodyOf(plan: DemoScheme, blankId: string, paintIds: ReadonlyMap<DemoPaintName, string>): SchemeBody {
-  return { format: 1, blankId, ground: plan.ground ?? BASSWOOD, eyes: { iris: plan.iris, pupil: PUPIL, rim: RIM }, ...stackOf(plan.stack, paintIds) }
 }
 
 function withoutLater(body: SchemeBody, plan: DemoScheme): SchemeBody {

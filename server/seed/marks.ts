@@ -1,4 +1,5 @@
 import { builtInBlank } from '#shared/blank/built-in-blanks'
+import { gillEdge } from '#shared/blank/zones'
 import type { Mark, Place } from '#shared/scheme/mark'
 
 /** Widths are written for a body of 100 mm and follow its length. */
@@ -7,26 +8,25 @@ export function atLength(blank: string, mm: number): number {
 }
 
 /** Places along the back edge of a blank's gill cover, shifted along the body. */
-function gillEdge(blank: string, shift = 0): Place[] {
+function alongGill(blank: string, shift = 0): Place[] {
   const { gill } = builtInBlank(blank)
   return Array.from({ length: 13 }, (_, i): Place => {
-    const k = i / 12
-    const swell = Math.sin(Math.PI * (0.06 + 0.9 * k))
-    return [gill.along - 0.088 * (1 - swell) + gill.bulge * swell ** 2 - 0.02 * k ** 2 + shift, gill.top + k * (gill.bottom - gill.top)]
+    const v = gill.top + i / 12 * (gill.bottom - gill.top)
+    return [gillEdge(gill, v) + shift, v]
   })
 }
 
 /** Shade along the edge of the gill cover, and a fainter second line on the cover. */
 export function gillShade(blank: string): Mark {
   return { kind: 'strokes', with: 'airbrush', strokes: [
-    { points: gillEdge(blank), width: [atLength(blank, 0.6), atLength(blank, 1)], amount: [1, 0.4] },
-    { points: gillEdge(blank, -0.05).slice(2, 10), width: [atLength(blank, 0.6), atLength(blank, 0.6)], amount: [0.5, 0.4] },
+    { points: alongGill(blank), width: [atLength(blank, 0.6), atLength(blank, 1)], amount: [1, 0.4] },
+    { points: alongGill(blank, -0.05).slice(2, 10), width: [atLength(blank, 0.6), atLength(blank, 0.6)], amount: [0.5, 0.4] },
   ] }
 }
 
 /** A line just behind the gill cover. */
 export function gillLine(blank: string, width: number, amount = 1): Mark {
-  return { kind: 'strokes', with: 'airbrush', strokes: [{ points: gillEdge(blank), width: [atLength(blank, width), atLength(blank, width * 0.7)], amount: [amount, amount * 0.5] }] }
+  return { kind: 'strokes', with: 'airbrush', strokes: [{ points: alongGill(blank), width: [atLength(blank, width), atLength(blank, width * 0.7)], amount: [amount, amount * 0.5] }] }
 }
 
 /** A pectoral fin in dagger strokes from one root behind the gill cover. */

@@ -3,7 +3,7 @@ import { DEMO_PAINTS, type DemoPaintName } from './paints'
 import type { Coat, Gun, Tool, Where } from '#shared/scheme/coat'
 import type { Mark } from '#shared/scheme/mark'
 import type { Mask, MaskForm } from '#shared/scheme/mask'
-import type { Ground, StackItem } from '#shared/scheme/body'
+import type { Eyes, Ground, SchemeBody, StackItem } from '#shared/scheme/body'
 import type { Lab } from '#shared/shelf/paint'
 
 /** What goes into the cup: one paint, or paints with their drops. */
@@ -38,17 +38,24 @@ export interface DemoScheme {
   added: readonly string[]
 }
 
+/** A mask of a plan; its fit and its lift name the same one. */
+type MaskPlan = Omit<Mask, 'id'>
+
 export type StackPlan
   = { act: 'coat', plan: CoatPlan }
-    | { act: 'fit', mask: Mask }
-    | { act: 'lift', mask: Mask }
+    | { act: 'fit', mask: MaskPlan }
+    | { act: 'lift', mask: MaskPlan }
 
-export const BASSWOOD: Ground = { name: 'Sealed basswood', colour: [74, 7, 24], finish: 'matt' }
+/** Gives a new id for every coat and mask that a plan is written into. */
+type MakeId = () => string
+
+const BASSWOOD: Ground = { name: 'Sealed basswood', colour: [74, 7, 24], finish: 'matt' }
 const AIRBRUSH: Tool = { kind: 'airbrush', nozzle: 0.35, pressure: 1.4, distance: 12 }
 export const FINE: Tool = { kind: 'airbrush', nozzle: 0.2, pressure: 0.8, distance: 4 }
 export const THROUGH_MESH: Tool = { kind: 'airbrush', nozzle: 0.3, pressure: 1, distance: 8 }
-export const FLAKES: Tool = { kind: 'airbrush', nozzle: 0.5, pressure: 1.9, distance: 15 }
+const FLAKES: Tool = { kind: 'airbrush', nozzle: 0.5, pressure: 1.9, distance: 15 }
 export const BRUSH: Tool = { kind: 'brush' }
+const EYE: Omit<Eyes, 'iris'> = { pupil: [6, 0, 0], rim: [20, 2, 6] }
 
 /** A coat of the plan. */
 export function coat(name: string, cup: InTheCup, lays: number, more: Omit<CoatPlan, 'name' | 'cup' | 'lays'> = {}): StackPlan {
@@ -57,7 +64,7 @@ export function coat(name: string, cup: InTheCup, lays: number, more: Omit<CoatP
 
 /** A mask with everything laid while it is on. */
 export function under(name: string, seed: number, form: MaskForm, coats: StackPlan[]): StackPlan[] {
-  const mask: Mask = { id: randomUUID(), name, form, seed, fromMaskId: null }
+  const mask: MaskPlan = { name, form, seed, fromMaskId: null }
   return [{ act: 'fit', mask }, ...coats, { act: 'lift', mask }]
 }
 
@@ -90,11 +97,11 @@ function mixFor(plan: CoatPlan, paintIds: ReadonlyMap<DemoPaintName, string>): P
 }
 
 /** The plan as a coat, with the shelf's paints. */
-export function coatOf(plan: CoatPlan, paintIds: ReadonlyMap<DemoPaintName, string>): Coat {
+function coatOf(plan: CoatPlan, paintIds: ReadonlyMap<DemoPaintName, string>, id: string): Coat {
   const gun: Gun = plan.gun ? { aim: 'from', angle: plan.gun[0], footprint: plan.gun[1] } : { aim: 'all over' }
   const first = typeof plan.cup === 'string' ? plan.cup : plan.cup[0]![0]
   return {
-    id: randomUUID(),
+    id,
     name: plan.name,
     ...mixFor(plan, paintIds),
     tool: plan.tool ?? (DEMO_PAINTS[first].known.how === 'flake' ? FLAKES : AIRBRUSH),
@@ -108,9 +115,15 @@ export function coatOf(plan: CoatPlan, paintIds: ReadonlyMap<DemoPaintName, stri
 }
 
 /** The stack of a plan, from the ground up. */
-export function stackOf(plans: readonly StackPlan[], paintIds: ReadonlyMap<DemoPaintName, string>): { stack: StackItem[], masks: Mask[] } {
+function stackOf(plans: readonly StackPlan[], paintIds: ReadonlyMap<DemoPaintName, string>, makeId: MakeId): Pick<SchemeBody, 'stack' | 'masks'> {
+  const maskIds = new Map(plans.flatMap(item => item.act === 'fit' ? [[item.mask, makeId()] as const] : []))
   const stack = plans.map((item): StackItem => item.act === 'coat'
-    ? { act: 'coat', coat: coatOf(item.plan, paintIds) }
-    : { act: item.act, maskId: item.mask.id })
-  return { stack, masks: plans.flatMap(item => item.act === 'fit' ? [item.mask] : []) }
+    ? { act: 'coat', coat: coatOf(item.plan, paintIds, makeId()) }
+    : { act: item.act, maskId: maskIds.get(item.mask)! })
+  return { stack, masks: [...maskIds].map(([mask, id]) => ({ id, ...mask })) }
+}
+
+/** A finish of the demo workshop on a blank and a shelf that are there; the same ids make the same body. */
+export function bodyOf(plan: DemoScheme, blankId: string, paintIds: ReadonlyMap<DemoPaintName, string>, makeId: MakeId = randomUUID): SchemeBody {
+  return { format: 1, blankId, ground: plan.ground ?? BASSWOOD, eyes: { iris: plan.iris, ...EYE }, ...stackOf(plan.stack, paintIds, makeId) }
 }

@@ -2,7 +2,7 @@ import sharp from 'sharp'
 import { expect, it } from 'vitest'
 import { objectStore } from '#server/photos/object-store'
 import { drawLook } from '#server/services/picture/draw-look'
-import { ember } from '../../fixtures/looks/ember'
+import { ember } from '../../fixtures/demo-looks'
 import { asOwner } from '../database'
 import { testWorkshop } from '../factories'
 

@@ -44,23 +44,23 @@ describe('the flake lobe', () => {
   })
 
   it.each([
-    ['silver pearl over black', coats(['opaque black', 3], ['silver pearl', 2])],
-    ['blue interference over black', coats(['opaque black', 3], ['blue interference', 2])],
-    ['silver pearl over white', coats(['opaque white', 3], ['silver pearl', 2])],
-    ['aluminium over black', coats(['opaque black', 3], ['aluminium', 2])],
+    ['silver pearl over black', coats(['Opaque black', 3], ['Silver pearl', 2])],
+    ['blue interference over black', coats(['Opaque black', 3], ['Blue flash', 2])],
+    ['silver pearl over white', coats(['Opaque white', 3], ['Silver pearl', 2])],
+    ['aluminium over black', coats(['Opaque black', 3], ['Aluminium, fine', 2])],
   ] as const)('shows on a facing flank of the bench what the engine reads at 45°: %s', (_, stack) => {
     const shown = patchLab(stack, { ...bench, rig: { ...bench.rig, overhead: 0, horizon: 0, floor: 0, strips: [] } })
     expect(deltaE2000(shown, promise({ ground: GROUND, coats: stack, finish: 'gloss' }).lab)).toBeLessThan(3)
   })
 
   it('makes a pearl over black far brighter at its face than at its flop', () => {
-    const stack = coats(['opaque black', 3], ['silver pearl', 2])
+    const stack = coats(['Opaque black', 3], ['Silver pearl', 2])
     const [face, flop] = [lightTables('face'), lightTables('flop')].map(tables => patchLab(stack, tables)[0]) as [number, number]
     expect(face - flop).toBeGreaterThan(8)
   })
 
   it('leaves a flat opaque paint nearly alike at face and flop', () => {
-    const stack = coats(['opaque orange', 4])
+    const stack = coats(['Fin orange', 4])
     const [face, flop] = [lightTables('face'), lightTables('flop')].map(tables => patchLab(stack, tables)) as [ReturnType<typeof patchLab>, ReturnType<typeof patchLab>]
     expect(deltaE2000(face, flop)).toBeLessThan(3)
   })

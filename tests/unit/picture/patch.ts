@@ -1,3 +1,4 @@
+import type { DemoPaintName } from '#server/seed/paints'
 import { emptyViewSamples } from '#shared/blank/view-sample-lists'
 import { labFromXyz, type Lab } from '#shared/optics/colorimetry'
 import { groundFromLab } from '#shared/optics/known-film'
@@ -10,13 +11,16 @@ import { bareGround, layCoats } from '#shared/picture/compose'
 import { glowLight } from '#shared/picture/glow-light'
 import type { LightTables } from '#shared/picture/light-tables'
 import { paintLight } from '#shared/picture/paint-light'
-import type { ShelfPaint } from '../../fixtures/looks/shelf'
-import { SHELF_PAINTS } from '../../fixtures/looks/shelf'
+import { demoOptics } from '../../fixtures/demo-looks'
 
-/** A primed ground, and coats named from the shelf. */
+/** A primed ground, and coats of the demo shelf's paints or of one of a test's own. */
 export const GROUND = groundFromLab([78, 2, 14], 'satin')
-export const coats = (...laid: [ShelfPaint, number][]): Coat[] =>
-  laid.map(([name, passes]) => ({ optics: SHELF_PAINTS.find(paint => paint.name === name)!.optics, passes }))
+export const coats = (...laid: [DemoPaintName | Coat['optics'], number][]): Coat[] =>
+  laid.map(([paint, passes]) => ({ optics: typeof paint === 'string' ? demoOptics(paint) : paint, passes }))
+
+/** The coats of a stack where they lie in full, over one sample. */
+const onePatch = (stack: readonly Coat[]) =>
+  stack.map(({ optics, passes }) => ({ codes: Uint8Array.of(255), table: coatTable(optics, passes) }))
 
 /** Linear light of one flat patch of a stack, as the picture draws it. */
 export function patchLight(
@@ -26,7 +30,7 @@ export function patchLight(
 ): [number, number, number] {
   const samples = emptyViewSamples({ roll: 0, nose: 'left', width: 1, height: 1, scale: 1, centreX: 0, centreY: 0 }, 1)
   samples.occlusion.fill(1)
-  const laid = stack.map(({ optics, passes }) => ({ codes: Uint8Array.of(255), table: coatTable(optics, passes) }))
+  const laid = onePatch(stack)
   const reflectance = layCoats(laid, bareGround(1, toPictureBands(ground)))
   const direction = Float32Array.from(normal)
   const light = paintLight(
@@ -44,7 +48,7 @@ export function patchLab(...ask: Parameters<typeof patchLight>): Lab {
 
 /** The same for a glossy, evenly lit patch before a screen's limits bend it: for paint that outshines any screen. */
 export function untonedLab(stack: readonly Coat[]): Lab {
-  const laid = stack.map(({ optics, passes }) => ({ codes: Uint8Array.of(255), table: coatTable(optics, passes) }))
+  const laid = onePatch(stack)
   const seen = measuredSpectrum(layCoats(laid, bareGround(1, toPictureBands(GROUND))), 'gloss')
   const light = glowOfPatch(stack)
   seen.forEach((value, b) => light.forEach((_, c) => light[c]! += PICTURE_LINEAR_WEIGHTS[16 * c + b]! * value))
@@ -53,7 +57,7 @@ export function untonedLab(stack: readonly Coat[]): Lab {
 
 /** Linear light that the coats of a patch give off. */
 export function glowOfPatch(stack: readonly Coat[]): [number, number, number] {
-  const laid = stack.map(({ optics, passes }) => ({ codes: Uint8Array.of(255), table: coatTable(optics, passes) }))
+  const laid = onePatch(stack)
   const light = glowLight(laid, toPictureBands(GROUND), 1)
   return light ? [light[0]!, light[1]!, light[2]!] : [0, 0, 0]
 }
