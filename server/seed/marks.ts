@@ -25,8 +25,8 @@ export function gillShade(blank: string): Mark {
 }
 
 /** A line just behind the gill cover. */
-export function gillLine(blank: string, width: number, amount = 1): Mark {
-  return { kind: 'strokes', with: 'airbrush', strokes: [{ points: alongGill(blank), width: [atLength(blank, width), atLength(blank, width * 0.7)], amount: [amount, amount * 0.5] }] }
+export function gillLine(blank: string, width: number, { amount = 1, shift = 0 } = {}): Mark {
+  return { kind: 'strokes', with: 'airbrush', strokes: [{ points: alongGill(blank, shift), width: [atLength(blank, width), atLength(blank, width * 0.7)], amount: [amount, amount * 0.5] }] }
 }
 
 /** A pectoral fin in dagger strokes from one root behind the gill cover. */

@@ -26,7 +26,7 @@ export const EMBER: DemoScheme = {
     coat('Dark green back', 'Leaf green', 2.2, { gun: [22, 0.75], where: { zones: ['back', 'upper flank'], reach: -2, fade: 7 } }),
     coat('Black ridge', 'Opaque black', 1.5, { gun: [6, 0.55], where: { zones: ['back'], reach: -0.2, fade: 4 } }),
     coat('Black daggers', 'Opaque black', 1.5, { gun: [70, 2], tool: FINE, marks: [{ kind: 'strokes', with: 'airbrush', strokes: DAGGERS }] }),
-    coat('Gill slash, cerise', 'Fluorescent cerise', 2.4, { gun: [90, 2], tool: FINE, marks: [gillLine('deep-crank-62', 1.4)] }),
+    coat('Gill slash, cerise', 'Fluorescent cerise', 2.4, { gun: [90, 2], tool: FINE, marks: [gillLine('deep-crank-62', 1.4, { shift: -0.035 })] }),
     coat('Gill edge, black line', 'Opaque black', 1, { gun: [85, 2], tool: FINE, marks: [gillLine('deep-crank-62', 0.45)] }),
     coat('Shoulder dot', 'Opaque black', 3, { gun: [90, 2], tool: BRUSH, marks: [{ kind: 'dots', dots: [[0.362, 0.4, atLength('deep-crank-62', 2.3)]], soft: 0.08, grow: 0 }] }),
     EPOXY,
