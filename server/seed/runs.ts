@@ -1,7 +1,10 @@
 import { randomUUID } from 'node:crypto'
+import { eq } from 'drizzle-orm'
 import type { PublishedDemo } from './finishes'
+import { runs } from '#server/db/tables'
 import type { Ctx } from '#server/services/ctx'
 import { recordActs } from '#server/services/bench/record-acts'
+import { inTransaction } from '#server/services/in-transaction'
 import { startRun } from '#server/services/bench/start-run'
 import type { RunAct, RunEvent } from '#shared/bench/run-event'
 import { runSteps } from '#shared/bench/run-steps'
@@ -44,6 +47,8 @@ export async function runDemo(bench: Ctx, wall: readonly PublishedDemo[], now: D
     const run = await startRun(bench, { schemeId: finish.schemeId, revision: finish.revision.number, pieces: plan.pieces })
     const acts = actsOf(plan, finish)
     const start = now.getTime() - plan.hoursAgo * 3_600_000
+    // It began when its first act was done, which the service cannot know of a run of the past.
+    await inTransaction(bench, tx => tx.db.update(runs).set({ startedAt: new Date(start) }).where(eq(runs.id, run.id)))
     const events = acts.map((act, i): RunEvent => ({ id: randomUUID(), doneAt: new Date(start + i * PACE * 60_000).toISOString(), act }))
     const refused = (await recordActs(bench, run.id, events)).find(answer => !answer.taken)
     if (refused) throw new Error(`The demo's run of ${plan.finish} does not fit its revision.`)
