@@ -47,8 +47,8 @@ it('lets everybody leave, and nobody but an owner take others out', async () => 
 it('does not find somebody of another workshop', async () => {
   const { ctx } = await testWorkshop()
   const { ctx: stranger } = await testWorkshop()
-  for (const act of [changeRole(stranger, ctx.personId, 'desk'), removePerson(stranger, ctx.personId)])
-    await expect(act).rejects.toMatchObject({ data: { code: 'people/not-found' } })
+  for (const act of [() => changeRole(stranger, ctx.personId, 'desk'), () => removePerson(stranger, ctx.personId)])
+    await expect(act()).rejects.toMatchObject({ data: { code: 'people/not-found' } })
 })
 
 it('shows addresses to owners only, and one\'s own to oneself', async () => {
