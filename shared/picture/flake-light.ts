@@ -7,7 +7,7 @@ import { atNormal, type LightTables } from './light-tables'
 import type { Lighting, SampleForm } from './paint-light'
 
 /** A glint takes no more than this from the light of the flakes round it. */
-const GLINT_LEAST = 0.15
+export const GLINT_LEAST = 0.15
 const ROWS = FLAKE_TABLE_COSINES.length
 const LOWEST_COSINE = FLAKE_TABLE_COSINES.at(-1)!
 /** Samples worked through at a time. */

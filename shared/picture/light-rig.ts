@@ -24,7 +24,7 @@ export interface LightRig {
 }
 
 /** Centre, radius and softness of the hole the camera looks through, degrees; and the light it leaves. */
-const HOLE = { elevation: 15, radius: 9, edge: 4, left: 0.4 }
+export const HOLE = { elevation: 15, radius: 9, edge: 4, left: 0.4 }
 
 const RIM = { elevation: 108, azimuth: 0, halfHeight: 5, halfWidth: 48, edge: 3 }
 const CARD: Strip = { elevation: -40, azimuth: 0, halfHeight: 10, halfWidth: 60, edge: 7, radiance: 0.95 }

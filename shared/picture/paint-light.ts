@@ -9,14 +9,14 @@ import { fresnel } from './surface-lobes'
 import { addGloss, tonePaint, tonePlain } from './tone'
 
 /** How much of the tent's form the picture shows. Chosen by eye: colours stay near their promise, the body stays round. */
-const FORM = 0.85
+export const FORM = 0.85
 /** Mirrored light of a matt film against the lobe worked out. Chosen by eye. */
-const MATT_SHARE = 0.62
+export const MATT_SHARE = 0.62
 const GLOSS_ON_FINS = 0.8
 /** The rounded rim of a fin is too narrow to carry a highlight without breaking it into dots, mm. */
 const RIM_WITHOUT_GLOSS = 0.8
 /** Light that comes out of the open gap of a joint. */
-const GAP_LIGHT = 0.12
+export const GAP_LIGHT = 0.12
 const THROUGH = (1 - SURFACE_OUTSIDE) * (1 - SURFACE_INSIDE)
 
 /** What is lit: the finished stack under every sample, and the coats in which flakes mirror. */
@@ -105,7 +105,11 @@ export function glossLight(tables: LightTables, x: number, y: number, z: number)
   return fresnel(facing) * mirroredLight(tables, 2 * facing * x, 2 * facing * y, 2 * facing * facing - 1)
 }
 
+/** Share of the gloss that a sample carries: less on fins, none on their rims. */
+export function glossShare({ part, rim }: ViewSamples, i: number): number {
+  return part[i]! >= PART_FIN ? GLOSS_ON_FINS * Math.min(1, rim[i]! / RIM_WITHOUT_GLOSS) ** 2 : 1
+}
+
 function glossAt({ samples, glossNormal }: SampleForm, i: number, tables: LightTables): number {
-  const share = samples.part[i]! >= PART_FIN ? GLOSS_ON_FINS * Math.min(1, samples.rim[i]! / RIM_WITHOUT_GLOSS) ** 2 : 1
-  return share * glossLight(tables, glossNormal[3 * i]!, glossNormal[3 * i + 1]!, glossNormal[3 * i + 2]!)
+  return glossShare(samples, i) * glossLight(tables, glossNormal[3 * i]!, glossNormal[3 * i + 1]!, glossNormal[3 * i + 2]!)
 }

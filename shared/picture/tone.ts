@@ -1,11 +1,11 @@
 import { linearFromOklab, oklabFromLinear } from '#shared/optics/screen-colour'
 
 /** Where bright light begins to bend, and how softly. Chosen by eye. */
-const KNEE = 0.8
-const SOFTNESS = 1.4
-const CHROMA_STEPS = 10
+export const KNEE = 0.8
+export const SOFTNESS = 1.4
+export const CHROMA_STEPS = 10
 /** Light so far above white that its highlight is white whatever it lies on. */
-const WHITE_AT = 3.5
+export const WHITE_AT = 3.5
 
 /** Bends what is brighter than `knee` so that it never reaches 1. */
 function shoulder(value: number, knee: number): number {
