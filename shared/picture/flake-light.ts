@@ -1,6 +1,5 @@
 import { flakeGeometry } from '#shared/optics/flake-angles'
 import { FLAKE_TABLE_COSINES } from '#shared/optics/flake-table'
-import { PICTURE_LINEAR_WEIGHTS } from '#shared/optics/to-picture-bands'
 import { BANDS, type CoatTable, type FlakeLevels } from './coat-table'
 import type { LaidTable } from './compose'
 import { atNormal, type LightTables } from './light-tables'
@@ -38,7 +37,7 @@ export function addFlakeLight(form: SampleForm, coats: readonly LaidTable[], lig
       const { codes, table } = coats[c]!
       if (table.flake) {
         findMirroring(form, table.flake, lighting, from, size, mirroring)
-        mirrorBlock(codes, table.empty, table.flake, from, size, mirroring, light, reaching, out)
+        mirrorBlock(codes, table.empty, table.flake, from, size, mirroring, light, reaching, lighting.seen.reflected, out)
       }
       if (c > lowest) weaken(codes, table, from, size, reaching)
     }
@@ -77,7 +76,7 @@ function setMirroring({ strength, row, share }: Mirroring, i: number, gain: numb
 
 function mirrorBlock(
   codes: Uint8Array, empty: number, { mirrored, diffuse }: FlakeLevels, from: number, size: number,
-  { strength, row, share }: Mirroring, light: Float32Array, reaching: Float64Array, out: Float32Array,
+  { strength, row, share }: Mirroring, light: Float32Array, reaching: Float64Array, reflected: ArrayLike<number>, out: Float32Array,
 ): void {
   for (let i = 0; i < size; i++) {
     const code = codes[from + i]!
@@ -88,9 +87,9 @@ function mirrorBlock(
     for (let b = 0; b < BANDS; b++) {
       const near = mirrored[here + b]!
       const seen = reaching[above + b]! * (gain * (near + between * (mirrored[here + BANDS + b]! - near)) - lit * diffuse[even + b]!)
-      red += PICTURE_LINEAR_WEIGHTS[b]! * seen
-      green += PICTURE_LINEAR_WEIGHTS[BANDS + b]! * seen
-      blue += PICTURE_LINEAR_WEIGHTS[2 * BANDS + b]! * seen
+      red += reflected[b]! * seen
+      green += reflected[BANDS + b]! * seen
+      blue += reflected[2 * BANDS + b]! * seen
     }
     const at = 3 * (from + i)
     out[at]! += red

@@ -1,8 +1,8 @@
 import { PART_FIN, PART_GAP, type ViewSamples } from '#shared/blank/view-sample-lists'
-import { SURFACE_INSIDE, SURFACE_OUTSIDE, VEIL, type Finish } from '#shared/optics/surface'
-import { PICTURE_LINEAR_WEIGHTS } from '#shared/optics/to-picture-bands'
+import { VEIL, type Finish } from '#shared/optics/surface'
 import { BANDS } from './coat-table'
 import type { LaidTable } from './compose'
+import type { SeenLight } from './engine/seen-daylight'
 import { addFlakeLight } from './flake-light'
 import { atNormal, mirroredLight, type LightTables } from './light-tables'
 import { fresnel } from './surface-lobes'
@@ -17,7 +17,6 @@ const GLOSS_ON_FINS = 0.8
 const RIM_WITHOUT_GLOSS = 0.8
 /** Light that comes out of the open gap of a joint. */
 export const GAP_LIGHT = 0.12
-const THROUGH = (1 - SURFACE_OUTSIDE) * (1 - SURFACE_INSIDE)
 
 /** What is lit: the finished stack under every sample, and the coats in which flakes mirror. */
 export interface LitStack {
@@ -36,6 +35,8 @@ export interface Lighting {
   /** Only the promised colours; `aspecular` is the angle flakes are read at, degrees. */
   plain: boolean
   aspecular: number
+  /** The light it is seen by. */
+  seen: SeenLight
 }
 
 /** Directions and grain of the samples. */
@@ -50,13 +51,13 @@ export interface SampleForm {
 /** Linear light of every sample, three each, as the screen will show it: paint toned, gloss on top. */
 export function paintLight(form: SampleForm, stack: LitStack, lighting: Lighting, out = new Float32Array(3 * form.samples.count)): Float32Array {
   const { samples, normal } = form
-  const { tables, finish, plain } = lighting
+  const { tables, finish, plain, seen } = lighting
   const isGlossy = finish === 'gloss' && !plain
   const matt = plain || isGlossy ? undefined : tables.matt()
   const mattShare = MATT_SHARE * VEIL[finish] / VEIL.matt
   const veil = plain ? VEIL[finish] : 0
   const light = lightOnSamples(form, lighting)
-  for (let i = 0; i < samples.count; i++) diffuseLight(stack.reflectance, i * BANDS, light[i]!, veil, out, 3 * i)
+  for (let i = 0; i < samples.count; i++) diffuseLight(stack.reflectance, i * BANDS, seen, light[i]!, veil, out, 3 * i)
   if (stack.glow) for (let i = 0; i < out.length; i++) out[i]! += stack.glow[i]! * light[Math.floor(i / 3)]!
   addFlakeLight(form, stack.coats, lighting, light, out)
   for (let i = 0; i < samples.count; i++) {
@@ -80,16 +81,16 @@ function lightOnSamples({ samples, normal }: SampleForm, { tables, plain }: Ligh
   return light
 }
 
-function diffuseLight(reflectance: Float32Array, from: number, light: number, veil: number, out: Float32Array, at: number): void {
+function diffuseLight(reflectance: Float32Array, from: number, { reflected, surface: { outside, inside } }: SeenLight, light: number, veil: number, out: Float32Array, at: number): void {
   let red = 0, green = 0, blue = 0
   for (let b = 0; b < BANDS; b++) {
     const r = reflectance[from + b]!
-    const seen = r / (1 - SURFACE_INSIDE * r)
-    red += PICTURE_LINEAR_WEIGHTS[b]! * seen
-    green += PICTURE_LINEAR_WEIGHTS[BANDS + b]! * seen
-    blue += PICTURE_LINEAR_WEIGHTS[2 * BANDS + b]! * seen
+    const seen = r / (1 - inside * r)
+    red += reflected[b]! * seen
+    green += reflected[BANDS + b]! * seen
+    blue += reflected[2 * BANDS + b]! * seen
   }
-  const scale = THROUGH * light
+  const scale = (1 - outside) * (1 - inside) * light
   out[at] = scale * red + veil
   out[at + 1] = scale * green + veil
   out[at + 2] = scale * blue + veil

@@ -8,16 +8,19 @@ import { canvasOf, copyCanvas, encodeCanvas, type Canvas } from './canvas'
 import { coatTable, type CoatTable } from './coat-table'
 import { drawEye } from './draw-eye'
 import { drawHardware } from './draw-hardware'
+import type { PictureEngine } from './engine/picture-engine'
+import { plainEngine } from './engine/plain-engine'
+import { SEEN_DAYLIGHT } from './engine/seen-daylight'
 import { keepSome } from './keep-some'
 import { aspecularOf, lightKey } from './light-rig'
 import { lightTables, type LightTables } from './light-tables'
 import type { Look } from './look'
-import { paintLight, type Lighting } from './paint-light'
+import type { Lighting } from './paint-light'
 import { pictureOptions, type Picture, type PictureLight, type PictureOptions, type PictureWish } from './picture-options'
 import { pickPlace, type PickedPlace } from './pick-place'
 import { FOUR_PLACES, jumpingPixels, NINE_PLACES, putRefined, shownPixels } from './refine'
 import { eyesAreFitted, finishShown, shownCoats } from './shown-coats'
-import { composeKept, keptGlow, keptMap, tidyMaps, viewKit, type KeyedCoat, type ViewKit } from './view-kit'
+import { keptMap, tidyMaps, viewKit, type KeyedCoat, type ViewKit } from './view-kit'
 
 /** A coarse picture is this much smaller in each direction. */
 export const COARSE = 4
@@ -55,9 +58,10 @@ export interface PictureBench {
 /**
  * Puts up an empty bench.
  *
- * @param work for `edits` it keeps much, so that the next picture of the same look is quick; for `orders` little
+ * @param work   for `edits` it keeps much, so that the next picture of the same look is quick; for `orders` little
+ * @param engine what works out the light
  */
-export function pictureBench(work: 'edits' | 'orders' = 'edits'): PictureBench {
+export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: PictureEngine = plainEngine()): PictureBench {
   const most = KEPT[work]
   const blanks = keepSome<PreparedBlank>(most.blanks), lights = keepSome<LightTables>(most.lights)
   const views = keepSome<ViewKit>(most.views), refinedViews = keepSome<RefinedView>(most.refinedViews)
@@ -114,13 +118,11 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits'): PictureBench {
     const { colour, finish } = look.body.ground
     const ground = toPictureBands(groundFromLab(colour, finish))
     const groundKey = canonicalJson(look.body.ground)
-    const reflectance = composeKept(kit, groundKey, ground, coats)
-    const glow = keptGlow(kit, groundKey, ground, coats)
     const lighting: Lighting = {
-      tables: lightOf(options.light), finish: finishShown(look, options), plain: options.plain, aspecular: aspecularOf(options.light),
+      tables: lightOf(options.light), finish: finishShown(look, options), plain: options.plain, aspecular: aspecularOf(options.light), seen: SEEN_DAYLIGHT,
     }
     const form = eyesAreFitted(look, options.upTo) ? kit.form : kit.blindForm
-    return paintLight(form, { reflectance, glow, coats }, lighting)
+    return engine.light(kit, { groundKey, ground, coats, form, lighting })
   }
 
   function drawFull(look: Look, options: PictureOptions): Canvas {

@@ -8,6 +8,7 @@ import type { Coat } from '#shared/optics/stack'
 import { PICTURE_LINEAR_WEIGHTS, toPictureBands } from '#shared/optics/to-picture-bands'
 import { coatTable } from '#shared/picture/coat-table'
 import { bareGround, layCoats } from '#shared/picture/compose'
+import { SEEN_DAYLIGHT } from '#shared/picture/engine/seen-daylight'
 import { glowLight } from '#shared/picture/glow-light'
 import type { LightTables } from '#shared/picture/light-tables'
 import { paintLight } from '#shared/picture/paint-light'
@@ -36,7 +37,7 @@ export function patchLight(
   const light = paintLight(
     { samples, normal: direction, glossNormal: direction, sparkle: new Float32Array(1) },
     { reflectance, glow: glowLight(laid, toPictureBands(ground), 1), coats: laid },
-    { tables, finish, plain, aspecular },
+    { tables, finish, plain, aspecular, seen: SEEN_DAYLIGHT },
   )
   return [light[0]!, light[1]!, light[2]!]
 }
