@@ -36,7 +36,11 @@ export function xyzFromReflectance(reflectance: Spectrum, light: Light = 'D65'):
 
 /** L*, a*, b* of a colour against the white of its light. @source CIE 015; constants 216/24389 and 24389/27 exact */
 export function labFromXyz(xyz: Xyz, light: Light = 'D65'): Lab {
-  const white = weightsFor(light).white
+  return labAgainst(xyz, weightsFor(light).white)
+}
+
+/** L*, a*, b* of a colour against a white in the same units. */
+export function labAgainst(xyz: Xyz, white: Xyz): Lab {
   const fx = squash(xyz[0] / white[0]), fy = squash(xyz[1] / white[1]), fz = squash(xyz[2] / white[2])
   return [116 * fy - 16, 500 * (fx - fy), 200 * (fy - fz)]
 }

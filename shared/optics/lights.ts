@@ -25,10 +25,11 @@ export interface BandWeights {
   white: Xyz
 }
 
-interface Table { first: number, step: number, power: number[] }
+/** Relative power of a light every `step` nm from `first`: 380 to 780 nm by 5, as the observer's table. */
+export interface PowerTable { first: number, step: number, power: readonly number[] }
 
 /** Tables of power of the lights, as read. */
-export const POWER: Readonly<Record<Light, Table>> = { 'D65': d65, 'A': a, 'F11': f11, 'LED-5000': led5000, 'LED-3000': led3000 }
+export const POWER: Readonly<Record<Light, PowerTable>> = { 'D65': d65, 'A': a, 'F11': f11, 'LED-5000': led5000, 'LED-3000': led3000 }
 
 /** Tells whether a word names a light the engine knows. */
 export function isLight(name: unknown): name is Light {
@@ -42,14 +43,14 @@ export function powerAtBands(light: Light): Float64Array {
 }
 
 /**
- * Weights of the 36 bands under a light.
+ * Weights of the 36 bands under a light given by its table.
  *
  * Each 5 nm sample of light times observer is shared between its two neighbouring bands in proportion to nearness, which is
  * the same as summing at 5 nm a reflectance joined by straight lines; samples past 730 nm go to the last band.
  *
  * @source ASTM E308 and CIE 015 for the sums; the sharing is linear interpolation
  */
-function shareIntoBands({ power }: Table): BandWeights {
+export function bandWeightsOf({ power }: PowerTable): BandWeights {
   const sums = [observer.x, observer.y, observer.z].map((matching) => {
     const weights = new Float64Array(36)
     matching.forEach((value, i) => {
@@ -71,7 +72,7 @@ function total(values: Float64Array): number {
   return values.reduce((sum, value) => sum + value, 0)
 }
 
-const WEIGHTS = Object.fromEntries(LIGHTS.map(light => [light, shareIntoBands(POWER[light])])) as Record<Light, BandWeights>
+const WEIGHTS = Object.fromEntries(LIGHTS.map(light => [light, bandWeightsOf(POWER[light])])) as Record<Light, BandWeights>
 
 /** Weights of the 36 bands under a light, and its white. Shared: not to be written to. */
 export function weightsFor(light: Light): BandWeights {

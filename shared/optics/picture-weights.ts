@@ -1,6 +1,7 @@
 import { BANDS_36 } from './bands'
 import { solveInPlace } from './linear-system'
-import { type Light, weightsFor } from './lights'
+import { type BandRows, lampNamed } from './light-power'
+import type { Light } from './lights'
 import { adaptToDaylight, linearFromXyz } from './screen-colour'
 import { PICTURE_LINEAR_WEIGHTS, PICTURE_XYZ_WEIGHTS, toPictureBands } from './to-picture-bands'
 
@@ -30,20 +31,39 @@ function lessons(): Float64Array[] {
  *           draws 1.5 under D65, A and F11, and 2.1 under the LED lights, whose blue peak is narrow
  */
 export function pictureXyzWeights(light: Light): Float64Array {
-  if (light === 'D65') return Float64Array.from(PICTURE_XYZ_WEIGHTS)
-  const exact = lessons()
-  const short = exact.map(spectrum => toPictureBands(spectrum))
-  const { x, y, z, white } = weightsFor(light)
+  return light === 'D65' ? Float64Array.from(PICTURE_XYZ_WEIGHTS) : fitPictureWeights(lampNamed(light).weights)
+}
+
+/**
+ * Weights of the 16 picture bands that come nearest to given weights of the 36, for any light and any filter: fitted by least
+ * squares over spectra like those of paint. 16 for X, then Y, then Z; a grey stays exactly what it is by the 36.
+ */
+export function fitPictureWeights({ x, y, z }: BandRows): Float64Array {
+  const { exact, short, normal } = LESSONS
   const answer = new Float64Array(48)
   for (const [row, weights] of [x, y, z].entries()) {
+    const white = total(weights)
     const first = answer.subarray(16 * row, 16 * row + 16)
     first.set(shareOut(weights))
     const rest = exact.map((spectrum, s) => dot(weights, spectrum) - dot(first, short[s]!))
-    correction(short, rest, white[row]!).forEach((value, i) => first[i]! += value)
-    const scale = white[row]! / first.reduce((sum, value) => sum + value, 0)
-    for (let i = 0; i < 16; i++) first[i]! *= scale
+    correction(normal, short, rest).forEach((value, i) => first[i]! += value)
+    const reached = total(first)
+    for (let i = 0; i < 16; i++) first[i]! *= reached > 0 ? white / reached : 0
   }
   return answer
+}
+
+const LESSONS = learn(lessons())
+
+/** The lessons in both sets of bands, and the least-squares matrix that all lights share. */
+function learn(exact: Float64Array[]): { exact: Float64Array[], short: Float64Array[], normal: Float64Array } {
+  const short = exact.map(spectrum => toPictureBands(spectrum))
+  const normal = new Float64Array(256)
+  for (const spectrum of short) {
+    for (let i = 0; i < 16; i++) for (let j = 0; j < 16; j++) normal[16 * i + j]! += spectrum[i]! * spectrum[j]!
+  }
+  for (let i = 0; i < 16; i++) normal[17 * i]! += CALM * short.length
+  return { exact, short, normal }
 }
 
 /**
@@ -76,20 +96,22 @@ function shareOut(weights: Float64Array): Float64Array {
 }
 
 /** The small change of weights that leaves the least squared rest. */
-function correction(short: Float64Array[], rest: number[], white: number): Float64Array {
-  const matrix = new Float64Array(256), right = new Float64Array(16)
+function correction(normal: Float64Array, short: Float64Array[], rest: number[]): Float64Array {
+  const right = new Float64Array(16)
   short.forEach((spectrum, s) => {
-    for (let i = 0; i < 16; i++) {
-      right[i]! += spectrum[i]! * rest[s]!
-      for (let j = 0; j < 16; j++) matrix[16 * i + j]! += spectrum[i]! * spectrum[j]!
-    }
+    for (let i = 0; i < 16; i++) right[i]! += spectrum[i]! * rest[s]!
   })
-  for (let i = 0; i < 16; i++) matrix[17 * i]! += CALM * short.length * white
-  return solveInPlace(matrix, right, 16) ? right : new Float64Array(16)
+  return solveInPlace(normal.slice(), right, 16) ? right : new Float64Array(16)
 }
 
 function dot(a: ArrayLike<number>, b: ArrayLike<number>): number {
   let sum = 0
   for (let i = 0; i < a.length; i++) sum += a[i]! * b[i]!
+  return sum
+}
+
+function total(values: ArrayLike<number>): number {
+  let sum = 0
+  for (let i = 0; i < values.length; i++) sum += values[i]!
   return sum
 }

@@ -35,7 +35,8 @@ function xyzFromLinear(): Matrix3 {
   ]
 }
 
-function times(m: Matrix3, [x, y, z]: readonly [number, number, number]): [number, number, number] {
+/** A matrix times three numbers. */
+export function times(m: Matrix3, [x, y, z]: readonly [number, number, number]): [number, number, number] {
   return [m[0] * x + m[1] * y + m[2] * z, m[3] * x + m[4] * y + m[5] * z, m[6] * x + m[7] * y + m[8] * z]
 }
 
@@ -56,11 +57,7 @@ function inverse(m: Matrix3): Matrix3 {
  * @source Bradford transform, complete adaptation
  */
 export function adaptToDaylight(xyz: Xyz, light: Light): Xyz {
-  if (light === 'D65') return xyz
-  const from = times(BRADFORD, weightsFor(light).white)
-  const to = times(BRADFORD, weightsFor('D65').white)
-  const cones = times(BRADFORD, xyz)
-  return times(BRADFORD_BACK, [cones[0] * to[0] / from[0], cones[1] * to[1] / from[1], cones[2] * to[2] / from[2]])
+  return light === 'D65' ? xyz : adaptWithin(xyz, weightsFor(light).white, Infinity)
 }
 
 /**

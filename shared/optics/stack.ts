@@ -1,12 +1,13 @@
 import { assertBands, assertWithin, type Spectrum } from './bands'
 import { coatLayer } from './coat-layer'
-import { type Lab, labFromXyz, type Light, type Rgb, type Xyz, xyzFromReflectance } from './colorimetry'
+import type { Lab, Light, Rgb, Xyz } from './colorimetry'
 import { type CoatLayer, layOver } from './film'
 import { ASPECULAR, type Aspecular, radianceAtAngles } from './flake-angles'
 import { glowPhotons, hasGlow } from './glow'
-import { fallingLight, xyzOfPhotons } from './light-power'
+import { weigh } from './light-power'
 import type { PaintOptics } from './paint-optics'
 import { type ScreenColour, screenFromGlow, screenFromXyz, softShoulder } from './screen-colour'
+import { type ExactSeen, resolveSeen } from './seen-exact'
 import { type Finish, measuredSpectrum } from './surface'
 
 /** One coat: a paint and the passes it was sprayed in. */
@@ -29,9 +30,8 @@ export interface Colour { xyz: Xyz, lab: Lab, srgb: Rgb, outOfGamut: boolean }
 /** What in a stack may outshine paper: nothing, flakes that mirror, or paint that gives off light. */
 export type Brightness = 'paper' | 'flakes' | 'glow'
 
-/** What a stack will look like under one light, seen straight on and lit from 45°; with flakes also by angle. */
+/** What a stack will look like, seen straight on and lit from 45°; with flakes also by angle. */
 export interface Promised extends Colour {
-  light: Light
   /** What outshines paper in it, and so how a screen bends it. */
   brightness: Brightness
   /** Only with flakes: colours by angle away from the gloss, 15…110 degrees. */
@@ -52,43 +52,55 @@ export function stackReflectance(stack: Stack): StackReflectance {
   return { internal, measured: measuredSpectrum(internal, stack.finish) }
 }
 
-/** The colours a painter sees on the way up: bare ground first, then after each coat. Flakes are seen at 45°. */
-export function coloursOnTheWayUp(stack: Stack, light: Light = 'D65'): Colour[] {
+/**
+ * The colours a painter sees on the way up: bare ground first, then after each coat. Flakes are seen at 45°.
+ *
+ * @param by a light by name in air, or anything a piece can be seen by (`exactSeen`)
+ */
+export function coloursOnTheWayUp(stack: Stack, by: Light | ExactSeen = 'D65'): Colour[] {
+  const seen = resolveSeen(by)
   const layers = layersOf(stack)
   return Array.from({ length: layers.length + 1 }, (_, count) => {
     const part = { ...stack, coats: stack.coats.slice(0, count) }
-    return seenAt45(part, layers.slice(0, count), light)
+    return seenAt45(part, layers.slice(0, count), seen)
   })
 }
 
-/** The colour a finished stack is promised to have under a light; with what its fluorescents give off there. */
-export function promise(stack: Stack, light: Light = 'D65'): Promised {
+/**
+ * The colour a finished stack is promised to have; with what its fluorescents give off in that light.
+ *
+ * @param by a light by name in air, or anything a piece can be seen by (`exactSeen`)
+ */
+export function promise(stack: Stack, by: Light | ExactSeen = 'D65'): Promised {
+  const seen = resolveSeen(by)
   const layers = layersOf(stack)
   const brightness = brightnessOf(stack)
-  if (!hasFlakes(stack)) return { light, brightness, ...seenAt45(stack, layers, light) }
+  if (!hasFlakes(stack)) return { brightness, ...seenAt45(stack, layers, seen) }
 
-  const diffuse = measuredSpectrum(layAll(stack, layers), stack.finish)
-  const glow = glowXyz(stack, layers, light)
-  const radiance = radianceAtAngles(stack.coats, layers, diffuse)
-  const seen = (reflectance: Spectrum) => colourOf(reflectance, light, brightness, glow)
-  const angles = Object.fromEntries(ASPECULAR.map(angle => [angle, seen(radiance[angle])])) as Record<Aspecular, Colour>
+  const diffuse = measuredSpectrum(layAll(stack, layers), stack.finish, undefined, seen.surface)
+  const glow = glowXyz(stack, layers, seen)
+  const radiance = radianceAtAngles(stack.coats, layers, diffuse, ASPECULAR, seen.surface)
+  const shown = (reflectance: Spectrum) => colourOf(reflectance, seen, brightness, glow)
+  const angles = Object.fromEntries(ASPECULAR.map(angle => [angle, shown(radiance[angle])])) as Record<Aspecular, Colour>
   const face = radiance[15].map((value, i) => (value + radiance[25][i]!) / 2)
-  return { light, brightness, ...angles[45], angles, face: seen(face), flop: angles[110] }
+  return { brightness, ...angles[45], angles, face: shown(face), flop: angles[110] }
 }
 
 /** The three forms of a reflectance's colour, with light given off added; what may outshine paper is bent so that a screen can draw it. */
-export function colourOf(reflectance: Spectrum, light: Light = 'D65', brightness: Brightness = 'paper', glow: Xyz = [0, 0, 0]): Colour {
-  const [x, y, z] = xyzFromReflectance(reflectance, light)
+export function colourOf(reflectance: Spectrum, by: Light | ExactSeen = 'D65', brightness: Brightness = 'paper', glow: Xyz = [0, 0, 0]): Colour {
+  const seen = resolveSeen(by)
+  const [x, y, z] = weigh(seen.weights, reflectance)
   const xyz: Xyz = [x + glow[0], y + glow[1], z + glow[2]]
-  return { xyz, lab: labFromXyz(xyz, light), ...screenOf(xyz, brightness, light) }
+  return { xyz, lab: seen.lab(xyz), ...screenOf(xyz, brightness, seen) }
 }
 
 /** How a screen draws a colour. */
-export function screenOf(xyz: Xyz, brightness: Brightness, light: Light = 'D65'): ScreenColour {
+export function screenOf(xyz: Xyz, brightness: Brightness, by: Light | ExactSeen = 'D65'): ScreenColour {
+  const shown = resolveSeen(by).toDaylight(xyz)
   switch (brightness) {
-    case 'paper': return screenFromXyz(xyz, light)
-    case 'flakes': return screenFromXyz(softShoulder(xyz), light)
-    case 'glow': return screenFromGlow(xyz, light)
+    case 'paper': return screenFromXyz(shown)
+    case 'flakes': return screenFromXyz(softShoulder(shown))
+    case 'glow': return screenFromGlow(shown)
   }
 }
 
@@ -101,16 +113,16 @@ function hasFlakes(stack: Stack): boolean {
   return stack.coats.some(coat => coat.optics.flake !== undefined)
 }
 
-function seenAt45(stack: Stack, layers: readonly CoatLayer[], light: Light): Colour {
-  const diffuse = measuredSpectrum(layAll(stack, layers), stack.finish)
-  const seen = hasFlakes(stack) ? radianceAtAngles(stack.coats, layers, diffuse, [45])[45] : diffuse
-  return colourOf(seen, light, brightnessOf(stack), glowXyz(stack, layers, light))
+function seenAt45(stack: Stack, layers: readonly CoatLayer[], seen: ExactSeen): Colour {
+  const diffuse = measuredSpectrum(layAll(stack, layers), stack.finish, undefined, seen.surface)
+  const reflectance = hasFlakes(stack) ? radianceAtAngles(stack.coats, layers, diffuse, [45], seen.surface)[45] : diffuse
+  return colourOf(reflectance, seen, brightnessOf(stack), glowXyz(stack, layers, seen))
 }
 
-function glowXyz({ coats, ground }: Stack, layers: readonly CoatLayer[], light: Light): Xyz {
+function glowXyz({ coats, ground }: Stack, layers: readonly CoatLayer[], { photons, given, surface }: ExactSeen): Xyz {
   if (!hasGlow(coats)) return [0, 0, 0]
   const glowing = coats.map((coat, i) => ({ ...coat, layer: layers[i]! }))
-  return xyzOfPhotons(glowPhotons(glowing, ground, fallingLight(light).photons), light)
+  return weigh(given, glowPhotons(glowing, ground, photons, surface))
 }
 
 function layersOf(stack: Stack): CoatLayer[] {

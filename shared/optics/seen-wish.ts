@@ -1,0 +1,35 @@
+import { z } from 'zod'
+import { KELVIN_MAX, KELVIN_MIN } from './kelvin-light'
+import { LIGHTS } from './lights'
+import { WATERS } from './water'
+
+/** Deepest a lure is looked at, and from farthest away; m. */
+export const DEPTH_MAX = 60, DISTANCE_MAX = 20
+
+/** A light by name, or a white light of the workshop's own by its correlated colour temperature, kelvin. */
+export const SeenLamp = z.union([z.enum(LIGHTS), z.object({ kelvin: z.number().min(KELVIN_MIN).max(KELVIN_MAX) })])
+export type SeenLamp = z.output<typeof SeenLamp>
+
+/** Water between the light, the piece and the eye. */
+export const SeenWater = z.object({
+  type: z.enum(WATERS),
+  /** How deep the piece swims, and from how far it is seen; m. */
+  depth: z.number().min(0).max(DEPTH_MAX),
+  distance: z.number().min(0).max(DISTANCE_MAX),
+  /** Seen by an eye used to the place, as far as an eye gets used to it; otherwise as a camera set for the light above the water sees it. */
+  adapted: z.boolean(),
+})
+export type SeenWater = z.output<typeof SeenWater>
+
+/** What something is seen by: a light, and the water in between if there is any. */
+export const SeenWish = z.object({ light: SeenLamp, water: SeenWater.optional() })
+export type SeenWish = z.output<typeof SeenWish>
+
+/** Daylight in air: what colours are promised by unless told otherwise. */
+export const DAYLIGHT_IN_AIR: Readonly<SeenWish> = { light: 'D65' }
+
+/** Names what something is seen by, for caches: alike in and only in what looks alike. */
+export function seenKey({ light, water }: SeenWish): string {
+  const lamp = typeof light === 'string' ? light : `${light.kelvin} K`
+  return water ? `${lamp}, ${water.type} ${water.depth} m ${water.distance} m ${water.adapted ? 'adapted' : 'as it is'}` : lamp
+}
