@@ -22,6 +22,9 @@ export const POSTGRESQL = { name: 'postgresql', has: () => postgresFolders().len
 /** A browser, for the tests. @type {DebianPackage} */
 export const CHROMIUM = { name: 'chromium', has: () => existsSync('/usr/bin/chromium') }
 
+/** A browser of other make, to hold the checks of the optics in. @type {DebianPackage} */
+export const FIREFOX = { name: 'firefox-esr', has: () => existsSync('/usr/bin/firefox-esr') }
+
 /** An S3 client of other make, to judge the photo store. @type {DebianPackage} */
 export const AWSCLI = { name: 'awscli', has: () => existsSync('/usr/bin/aws') }
 

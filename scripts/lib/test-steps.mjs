@@ -1,7 +1,7 @@
 // What `npm test` runs, step by step.
 import { join } from 'node:path'
 import { ensureBuild } from './application.mjs'
-import { AWSCLI, CHROMIUM, JUDGES, POSTGRESQL } from './debian-packages.mjs'
+import { AWSCLI, CHROMIUM, FIREFOX, JUDGES, POSTGRESQL } from './debian-packages.mjs'
 import { ROOT } from './environment.mjs'
 import { run } from './processes.mjs'
 import { Halt, say, secondsSince, step } from './say.mjs'
@@ -75,7 +75,7 @@ export const STEPS = {
   reference: { needs: JUDGES, hasServices: false, run: vitest('reference') },
   build: { needs: [], hasServices: false, run: buildStep },
   api: { needs: [POSTGRESQL, AWSCLI, ...JUDGES], hasServices: true, run: vitest('api') },
-  e2e: { needs: [POSTGRESQL, CHROMIUM, ...JUDGES], hasServices: true, run: browserStep },
+  e2e: { needs: [POSTGRESQL, CHROMIUM, FIREFOX, ...JUDGES], hasServices: true, run: browserStep },
 }
 
 /**
