@@ -24,6 +24,8 @@ export function sentence(problem: ProblemData): string {
     case 'paint/not-found': return 'This paint is not on the shelf of this workshop.'
     case 'paint/changed-meanwhile': return 'Somebody changed this paint after you opened it. Load it again; what you typed stays until you do.'
     case 'paint/unknown-colour': return `This does not give a colour to calculate with: ${problem.reason}`
+    case 'bottle/not-found': return 'This bottle is not on the shelf of this workshop.'
+    case 'bottle/changed-meanwhile': return 'Somebody changed this bottle after you opened it. Load it again; what you typed stays until you do.'
     case 'blank/not-found': return 'This blank is not in this workshop.'
     case 'blank/changed-meanwhile': return 'Somebody changed this blank after you opened it. Load it again; what you typed stays until you do.'
     case 'blank/built-in': return 'This blank came with the workshop and keeps its shape. Copy it, and change the copy.'
@@ -37,6 +39,7 @@ export function sentence(problem: ProblemData): string {
     case 'revision/not-found': return 'This scheme has no revision of that number.'
     case 'run/not-found': return 'This run is not in this workshop.'
     case 'run/finished': return 'This run is finished; nothing more is noted in it.'
+    case 'run/too-many-listening': return 'Too many screens follow this at once. This one asks for news every few seconds instead.'
     case 'run/event-refused': return `This could not be noted: ${problem.reason}`
     case 'photo/not-found': return 'This photo is gone.'
     case 'photo/not-an-image': return 'This is not a photo we can read. Save it as JPEG, PNG or WebP and add it again.'

@@ -1,12 +1,24 @@
 import type { DeviationKind, RunAct } from './run-event'
-import { piecesLabel, piecesWords } from './piece-words'
-import type { RunStep } from './run-step'
+import { durationWords, piecesLabel, piecesWords } from './piece-words'
+import { isWait, type RunStep } from './run-step'
 import { nextWords, stepName } from './step-words'
 import { countWords } from '#shared/scheme/coat-words'
 
 /** What was different, as a choice and in a list. */
 export const DEVIATION_WORDS: Readonly<Record<DeviationKind, string>> = {
   passes: 'Passes', thinning: 'Thinning', paint: 'Paint', wait: 'Wait', other: 'Something else',
+}
+
+const forPieces = (pieces: readonly number[] | undefined) => pieces ? `, ${piecesLabel(pieces)}` : ''
+
+function coatNumber(steps: readonly RunStep[], coatId: string): string {
+  const lay = steps.find(step => step.kind === 'lay' && step.coat.id === coatId)
+  return lay?.kind === 'lay' ? String(lay.number) : '?'
+}
+
+function waitName(steps: readonly RunStep[], stepId: string): string {
+  const step = named(steps, stepId)
+  return step && isWait(step) ? stepName(step) : 'A wait'
 }
 
 const named = (steps: readonly RunStep[], stepId: string) => steps.find(step => step.id === stepId)
@@ -20,7 +32,13 @@ export function takeBackWords(act: RunAct, steps: readonly RunStep[]): string {
       return step ? `to ${nextWords(step)}` : 'last step'
     }
     case 'wait-started': return 'timer start'
+    case 'wait-set': return 'the timer\'s new length'
+    case 'wait-cut': return 'the wait cut short'
     case 'deviation': return 'last note'
+    case 'bottle-used': return 'the bottle'
+    case 'thinned': return 'the thinning'
+    case 'paint-changed': return 'the other paint'
+    case 'photo-taken': return 'the photo'
     case 'piece-set-aside': return `${act.piece} set aside`
     case 'piece-taken-up': return `${act.piece} taken up`
     case 'inspected': return act.pieces.length === 1 ? `look at ${act.pieces[0]}` : `look at ${countWords(act.pieces.length, 'piece')}`
@@ -33,8 +51,7 @@ export function takeBackWords(act: RunAct, steps: readonly RunStep[]): string {
 export function actWords(act: RunAct, steps: readonly RunStep[]): string {
   switch (act.kind) {
     case 'pass-laid': {
-      const lay = steps.find(step => step.kind === 'lay' && step.coat.id === act.coatId)
-      return `${countWords(act.passes, 'pass', 'passes')} of coat ${lay?.kind === 'lay' ? lay.number : '?'} on ${piecesLabel(act.pieces)}`
+      return `${countWords(act.passes, 'pass', 'passes')} of coat ${coatNumber(steps, act.coatId)} on ${piecesLabel(act.pieces)}`
     }
     case 'step-done': {
       const step = named(steps, act.stepId)
@@ -44,7 +61,13 @@ export function actWords(act: RunAct, steps: readonly RunStep[]): string {
       const step = named(steps, act.stepId)
       return `Timer started: ${step ? stepName(step) : 'a wait'}`
     }
+    case 'wait-set': return `${waitName(steps, act.stepId)} set to ${durationWords(act.seconds)}${forPieces(act.pieces)}`
+    case 'wait-cut': return `${waitName(steps, act.stepId)} cut short by ${durationWords(act.secondsLeft)}${forPieces(act.pieces)}`
     case 'deviation': return `${DEVIATION_WORDS[act.what]}: ${act.note}`
+    case 'bottle-used': return `Another bottle${act.coatId === undefined ? '' : ` for coat ${coatNumber(steps, act.coatId)}`}`
+    case 'thinned': return `Coat ${coatNumber(steps, act.coatId)} with ${countWords(act.reducer, 'drop')} of reducer${forPieces(act.pieces)}`
+    case 'paint-changed': return `Another paint in coat ${coatNumber(steps, act.coatId)}${forPieces(act.pieces)}`
+    case 'photo-taken': return `Photo${act.pieces ? ` of ${piecesLabel(act.pieces)}` : ''}`
     case 'piece-set-aside': return `Piece ${act.piece} set aside: ${act.reason}`
     case 'piece-taken-up': return `Piece ${act.piece} taken up again`
     case 'inspected': return `${act.pieces.length === 1 ? 'Piece' : 'Pieces'} ${piecesWords(act.pieces)} ${act.passed ? 'passed' : 'failed'}${act.note ? `: ${act.note}` : ''}`

@@ -1,4 +1,4 @@
-import { isFor, isWait, type RunStep, waitSeconds } from './run-step'
+import { isFor, isWait, type RunStep, waitSeconds, type WaitStep } from './run-step'
 import { isThrough, passesOn, piecesGoingOn, type RunPlan, type RunState, type Wait } from './run-state'
 
 /** Pieces that stand at the same step and are worked on together. A batch is one part until some of it goes ahead. */
@@ -29,10 +29,16 @@ export function waitOf(stepId: string, piece: number, state: Pick<RunState, 'wai
   return begun.findLast(wait => wait.byHand) ?? begun[0]
 }
 
+/** How long a wait takes for a piece, ms: as its step says, or as it was set since. */
+export function wholeWait(step: WaitStep, piece: number, state: Pick<RunState, 'waitSets'>): number {
+  const set = state.waitSets.findLast(each => each.stepId === step.id && (each.pieces === null || each.pieces.includes(piece)))
+  return (set?.seconds ?? waitSeconds(step)) * 1000
+}
+
 /** Milliseconds a piece still has to wait at a step; 0 when it need not, all of it when the wait has not begun. `now` is the clock, ms. */
-export function waitLeft(step: RunStep, piece: number, state: Pick<RunState, 'waits'>, now: number): number {
+export function waitLeft(step: RunStep, piece: number, state: Pick<RunState, 'waits' | 'waitSets'>, now: number): number {
   if (!isWait(step)) return 0
-  const whole = waitSeconds(step) * 1000
+  const whole = wholeWait(step, piece, state)
   const wait = waitOf(step.id, piece, state)
   return wait ? Math.min(whole, Math.max(0, Date.parse(wait.at) + whole - now)) : whole
 }

@@ -1,5 +1,5 @@
 import type { DeviationKind, RunAct, RunEvent } from './run-event'
-import { isFor, type RunStep } from './run-step'
+import { isFor, isWait, type RunStep } from './run-step'
 
 /** What a run is made of. */
 export interface RunPlan { steps: readonly RunStep[], pieces: number }
@@ -10,6 +10,18 @@ export interface Wait { eventId: string, stepId: string, pieces: readonly number
 /** Something done differently from the revision. */
 export interface Deviation { eventId: string, stepId: string, what: DeviationKind, note: string, pieces: readonly number[] | null, at: string }
 
+/** A word about some pieces, by the act that said it; null stands for all pieces of the run. */
+interface Said { eventId: string, pieces: readonly number[] | null, at: string }
+
+/** A wait that takes another time than its step says, or was cut short; seconds. */
+export interface WaitChange extends Said { stepId: string, seconds: number }
+
+/** A cup that was mixed otherwise: reduced otherwise, or with another paint in place of one. */
+export type CupChange = Said & { coatId: string } & ({ how: 'thinned', reducer: number } | { how: 'paint', from: string, to: string })
+
+/** A photo taken at the bench. */
+export interface BenchPhoto extends Said { photoId: string, stepId: string }
+
 /** What is known of a run at one moment. Pieces that are null stand for all of the run. */
 export interface RunState {
   /** Which pieces are through with which step. */
@@ -17,6 +29,12 @@ export interface RunState {
   /** Passes laid, by coat and piece. */
   laid: ReadonlyMap<string, ReadonlyMap<number, number>>
   waits: readonly Wait[]
+  /** Waits made longer or shorter, the latest word last. */
+  waitSets: readonly WaitChange[]
+  /** Waits that were not waited out, with what was left of them. */
+  waitCuts: readonly WaitChange[]
+  cupChanges: readonly CupChange[]
+  photos: readonly BenchPhoto[]
   /** Pieces set aside, with the reason. */
   aside: ReadonlyMap<number, string>
   inspected: ReadonlyMap<number, { passed: boolean, note: string }>
@@ -29,13 +47,24 @@ export function refusalOf(plan: RunPlan, act: RunAct): string | null {
   const knows = (id: string | undefined) => id === undefined || plan.steps.some(step => step.id === id)
   switch (act.kind) {
     case 'pass-laid':
-      if (!plan.steps.some(step => step.kind === 'lay' && step.coat.id === act.coatId)) return 'This revision has no such coat.'
+      if (!hasCoat(plan, act.coatId)) return NO_COAT
       return piecesRefusal(plan, act.pieces)
     case 'step-done':
       return knows(act.stepId) && knows(act.starts) ? piecesRefusal(plan, act.pieces) : NO_STEP
     case 'wait-started':
+    case 'wait-cut':
     case 'deviation':
+    case 'photo-taken':
       return knows(act.stepId) ? piecesRefusal(plan, act.pieces) : NO_STEP
+    case 'wait-set':
+      if (!plan.steps.some(step => step.id === act.stepId && isWait(step))) return NO_STEP
+      return piecesRefusal(plan, act.pieces)
+    case 'thinned':
+    case 'paint-changed':
+      if (!hasCoat(plan, act.coatId)) return NO_COAT
+      return piecesRefusal(plan, act.pieces)
+    case 'bottle-used':
+      return act.coatId === undefined || hasCoat(plan, act.coatId) ? null : NO_COAT
     case 'piece-set-aside':
     case 'piece-taken-up':
       return piecesRefusal(plan, [act.piece])
@@ -48,6 +77,11 @@ export function refusalOf(plan: RunPlan, act: RunAct): string | null {
 }
 
 const NO_STEP = 'This revision has no such step.'
+const NO_COAT = 'This revision has no such coat.'
+
+function hasCoat(plan: RunPlan, coatId: string): boolean {
+  return plan.steps.some(step => step.kind === 'lay' && step.coat.id === coatId)
+}
 
 function piecesRefusal(plan: RunPlan, pieces: readonly number[] = []): string | null {
   return pieces.every(piece => piece <= plan.pieces) ? null : `This run has ${plan.pieces} pieces.`
@@ -55,22 +89,38 @@ function piecesRefusal(plan: RunPlan, pieces: readonly number[] = []): string | 
 
 const earlier = (a: string | undefined, b: string) => a !== undefined && a < b ? a : b
 
+/** An act, with the time on the server's clock once the server has it. */
+export type DoneAct = RunEvent & { at?: string }
+
+/** When an act was done: on the server's clock where that is known, else on the tablet's. */
+export function timeOf({ at, doneAt }: DoneAct): string {
+  return at ?? doneAt
+}
+
 /**
- * Works out where a run stands from its acts, in the order they arrived. The same act twice counts once, an act taken back
- * counts as if it had never been. Passes, steps and waits come out alike in any order; only where one word replaces another
- * (set aside and taken up, looked at again) the later arrival stands.
+ * Works out where a run stands from its acts, in whatever order they arrived: every order gives the same. The same act twice
+ * counts once, an act taken back counts as if it had never been. Where one word replaces another (set aside and taken up,
+ * looked at again) the one stands that was said knowing of the other; of two tablets that knew nothing of each other, the one
+ * with the higher place, then the greater id.
  */
-export function runState(events: readonly RunEvent[]): RunState {
-  const standing = standingActs(events)
+export function runState(events: readonly DoneAct[]): RunState {
+  const standing = standingActs(events).sort(inPlace)
   const done = new Map<string, { pieces: Set<number> | 'all', at: string }>()
   const laid = new Map<string, Map<number, number>>()
   const waits: Wait[] = []
   const aside = new Map<number, string>()
   const inspected = new Map<number, { passed: boolean, note: string }>()
   const deviations: Deviation[] = []
+  const waitSets: WaitChange[] = []
+  const waitCuts: WaitChange[] = []
+  const cupChanges: CupChange[] = []
+  const photos: BenchPhoto[] = []
   let finishedAt: string | null = null
 
-  for (const { id, act, doneAt } of standing) {
+  for (const event of standing) {
+    const { id, act } = event
+    const doneAt = timeOf(event)
+    const said = (pieces: readonly number[] | undefined): Said => ({ eventId: id, pieces: pieces ?? null, at: doneAt })
     switch (act.kind) {
       case 'pass-laid': {
         const pieces = laid.get(act.coatId) ?? new Map<number, number>()
@@ -88,6 +138,21 @@ export function runState(events: readonly RunEvent[]): RunState {
       case 'wait-started':
         waits.push({ eventId: id, stepId: act.stepId, pieces: act.pieces ?? null, at: doneAt, byHand: true })
         break
+      case 'wait-set':
+        waitSets.push({ ...said(act.pieces), stepId: act.stepId, seconds: act.seconds })
+        break
+      case 'wait-cut':
+        waitCuts.push({ ...said(act.pieces), stepId: act.stepId, seconds: act.secondsLeft })
+        break
+      case 'thinned':
+        cupChanges.push({ ...said(act.pieces), how: 'thinned', coatId: act.coatId, reducer: act.reducer })
+        break
+      case 'paint-changed':
+        cupChanges.push({ ...said(act.pieces), how: 'paint', coatId: act.coatId, from: act.from, to: act.to })
+        break
+      case 'photo-taken':
+        photos.push({ ...said(act.pieces), photoId: act.photoId, stepId: act.stepId })
+        break
       case 'deviation':
         deviations.push({ eventId: id, stepId: act.stepId, what: act.what, note: act.note, pieces: act.pieces ?? null, at: doneAt })
         break
@@ -103,11 +168,20 @@ export function runState(events: readonly RunEvent[]): RunState {
       case 'run-finished':
         finishedAt = earlier(finishedAt ?? undefined, doneAt)
         break
+      case 'bottle-used': // counts for the stock only: see paint-used.ts
       case 'taken-back':
         break
     }
   }
-  return { done, laid, waits: waits.sort(byTime), aside, inspected, deviations: deviations.sort(byTime), finishedAt }
+  return { done, laid, waits: waits.sort(byTime), waitSets, waitCuts, cupChanges, photos, aside, inspected, deviations: deviations.sort(byTime), finishedAt }
+}
+
+/** Orders acts as they were done, the same on every tablet: by place; those of before that have none first, by their clock; then by id. */
+export function inPlace(a: RunEvent, b: RunEvent): number {
+  const [left, right] = [a.place ?? 0, b.place ?? 0]
+  if (left !== right) return left - right
+  if (left === 0 && a.doneAt !== b.doneAt) return a.doneAt < b.doneAt ? -1 : 1
+  return a.id < b.id ? -1 : a.id > b.id ? 1 : 0
 }
 
 const byTime = (a: { at: string, eventId: string }, b: { at: string, eventId: string }) => a.at.localeCompare(b.at) || a.eventId.localeCompare(b.eventId)

@@ -1,5 +1,5 @@
-import { partsOf, waitOf } from './run-parts'
-import { isWait, type LayStep, type MixStep, type WaitStep, waitSeconds } from './run-step'
+import { partsOf, waitOf, wholeWait } from './run-parts'
+import { isWait, type LayStep, type MixStep, type WaitStep } from './run-step'
 import { isThrough, type RunPlan, type RunState } from './run-state'
 
 /** A wait that some pieces are in. */
@@ -22,10 +22,12 @@ export function runTimers(plan: RunPlan, state: RunState): RunTimer[] {
     for (const piece of pieces) {
       const wait = waitOf(step.id, piece, state)
       if (!wait) continue
-      const whole = waitSeconds(step) * 1000
-      const timer = timers.get(wait.eventId) ?? { eventId: wait.eventId, step, pieces: [], endsAt: Date.parse(wait.at) + whole, whole }
+      const whole = wholeWait(step, piece, state)
+      // Pieces of one batch whose wait was set otherwise run under a timer of their own.
+      const key = `${wait.eventId} ${whole}`
+      const timer = timers.get(key) ?? { eventId: wait.eventId, step, pieces: [], endsAt: Date.parse(wait.at) + whole, whole }
       timer.pieces.push(piece)
-      timers.set(wait.eventId, timer)
+      timers.set(key, timer)
     }
   }
   return [...timers.values()].sort((a, b) => a.endsAt - b.endsAt)

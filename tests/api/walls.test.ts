@@ -20,14 +20,19 @@ const ONE_OF_EACH: readonly string[] = [
   `insert into sign_ups (token_hash, email, expires_at) values ('s' || $3, $3 || '@wall.example', now() + interval '1 hour')`,
   `insert into idempotency_keys (person_id, key, request_hash, status, answer) values ($2, $3, 'h', 201, '{}')`,
   `insert into paint_optics (workshop_id, engine_version, data) values ($1, '1', '{}')`,
-  `insert into paints (workshop_id, name, kind, base, known, optics_id, reducer_per_100, film_per_pass, volume_solids, density, rest_minutes, hazards, note, volume_left)
-    select $1, $3, 'opaque', 'water', '{}', id, 0, 1, .3, 1, 5, '[]', '', 100 from paint_optics where workshop_id = $1`,
+  `insert into paints (workshop_id, name, kind, base, known, optics_id, reducer_per_100, film_per_pass, volume_solids, density, rest_minutes, hazards, note)
+    select $1, $3, 'opaque', 'water', '{}', id, 0, 1, .3, 1, 5, '[]', '' from paint_optics where workshop_id = $1`,
   `insert into blanks (workshop_id, name, shape) values ($1, $3, '{}')`,
   `insert into masks (workshop_id, name, form) values ($1, $3, '{}')`,
   `insert into schemes (workshop_id, name, blank_id, draft) select $1, $3, id, '{}' from blanks where workshop_id = $1`,
   `insert into revisions (workshop_id, scheme_id, number, note, body, materials, body_hash, engine_version) select $1, id, 1, '', '{}', '{}', 'h', '1' from schemes where workshop_id = $1`,
   `insert into runs (workshop_id, number, scheme_id, revision_id, pieces) select $1, 1, scheme_id, id, 3 from revisions where workshop_id = $1`,
   `insert into run_events (id, workshop_id, run_id, kind, body, done_at) select gen_random_uuid(), $1, id, 'x', '{}', now() from runs where workshop_id = $1`,
+  `insert into bottles (workshop_id, paint_id, code, ml) select $1, id, $3, 10 from paints where workshop_id = $1`,
+  `insert into bottle_uses (workshop_id, run_id, paint_id, bottle_id, ml) select $1, r.id, b.paint_id, b.id, 1 from runs r, bottles b where r.workshop_id = $1 and b.workshop_id = $1`,
+  `insert into run_bottles (workshop_id, run_id, paint_id, bottle_id) select $1, r.id, b.paint_id, b.id from runs r, bottles b where r.workshop_id = $1 and b.workshop_id = $1`,
+  `insert into run_painters (workshop_id, run_id, person_id) select $1, id, $2 from runs where workshop_id = $1`,
+  `insert into run_measures (workshop_id, run_id, piece, zones, engine_version) select $1, id, 1, '[]', '1' from runs where workshop_id = $1`,
   `insert into photos (workshop_id, scheme_id, sha256, format, bytes, width, height, position) select $1, id, 'h', 'jpeg', 1, 1, 1, 0 from schemes where workshop_id = $1`,
   `insert into cards (workshop_id, scheme_id, content, token_hash) select $1, id, '{}', 'c' || $3 from schemes where workshop_id = $1`,
   `insert into pictures (hash, workshop_id, engine_version, object_key) values ('h' || $3, $1, '1', 'k')`,
@@ -71,7 +76,7 @@ describe('a raw query as the server\'s own role', () => {
   })
 
   it('changes and removes nothing of another workshop', async () => {
-    for (const table of ['paints', 'schemes', 'blanks', 'masks', 'runs', 'photos', 'cards', 'invitations', 'memberships', 'sessions']) {
+    for (const table of ['paints', 'bottles', 'bottle_uses', 'run_bottles', 'run_painters', 'schemes', 'blanks', 'masks', 'runs', 'photos', 'cards', 'invitations', 'memberships', 'sessions']) {
       const { workshopId } = there
       const changed = await asHere(`update ${table} set workshop_id = workshop_id where workshop_id = '${workshopId}' returning 1`)
       const removed = await asHere(`delete from ${table} where workshop_id = '${workshopId}' returning 1`)
@@ -95,7 +100,7 @@ describe('a raw query as the server\'s own role', () => {
   })
 
   it('does not change what is written once', async () => {
-    for (const table of ['revisions', 'run_events', 'paint_optics'])
+    for (const table of ['revisions', 'run_events', 'run_measures', 'paint_optics'])
       await expect(asHere(`update ${table} set workshop_id = workshop_id`)).rejects.toMatchObject({ cause: { code: '42501' } })
   })
 

@@ -1,5 +1,6 @@
-import { boolean, doublePrecision, index, integer, jsonb, pgTable, text, timestamp, uuid, varchar } from 'drizzle-orm/pg-core'
+import { boolean, date, doublePrecision, index, integer, jsonb, pgTable, text, timestamp, uuid, varchar } from 'drizzle-orm/pg-core'
 import { workshops } from './people'
+import { BOTTLE_CODE_MAX, BOTTLE_STATES, LOT_MAX } from '#shared/shelf/bottle'
 import { PAINT_BASES, PAINT_KINDS, PAINT_NAME_MAX, type PaintKnown } from '#shared/shelf/paint'
 import type { StoredOptics } from '#shared/shelf/stored-optics'
 
@@ -30,10 +31,27 @@ export const paints = pgTable('paints', {
   potLifeMinutes: doublePrecision('pot_life_minutes'),
   hazards: jsonb().$type<string[]>().notNull(),
   note: text().notNull(),
-  volumeLeft: doublePrecision('volume_left').notNull(),
   pricePerMl: doublePrecision('price_per_ml'),
   retired: boolean().notNull().default(false),
   version: integer().notNull().default(1),
   createdAt: at('created_at').notNull().defaultNow(),
   changedAt: at('changed_at').notNull().defaultNow(),
 }, t => [index('paints_workshop').on(t.workshopId, t.name)])
+
+/** A container of a paint, with its lot. What is left of it: `ml` less what runs took since it was looked at (see `bottle_uses`). */
+export const bottles = pgTable('bottles', {
+  id: uuid().primaryKey().defaultRandom(),
+  workshopId: uuid('workshop_id').notNull().references(() => workshops.id, { onDelete: 'cascade' }),
+  paintId: uuid('paint_id').notNull().references(() => paints.id, { onDelete: 'cascade' }),
+  /** What is scanned; a maker's code may stand on several. */
+  code: varchar({ length: BOTTLE_CODE_MAX }).notNull(),
+  lot: varchar({ length: LOT_MAX }).notNull().default(''),
+  /** What was in it when somebody last looked, mL. */
+  ml: doublePrecision().notNull(),
+  /** What runs had taken from it in all by then, mL. */
+  usedBefore: doublePrecision('used_before').notNull().default(0),
+  state: text({ enum: BOTTLE_STATES }).notNull().default('open'),
+  openedOn: date('opened_on', { mode: 'string' }),
+  version: integer().notNull().default(1),
+  createdAt: at('created_at').notNull().defaultNow(),
+}, t => [index('bottles_paint').on(t.paintId), index('bottles_code').on(t.workshopId, t.code)])

@@ -3,6 +3,7 @@ import { inTransaction } from '#server/services/in-transaction'
 import { assertMay } from '#server/services/people/assert-may'
 import type { RunEventsView, RunView } from '#shared/bench/run-view'
 import { eventsOfRun } from './run-events'
+import { dayOf } from './run-day'
 import { runInWorkshop } from './run-in-workshop'
 import { runView } from './run-view'
 
@@ -11,7 +12,7 @@ export async function getRun(ctx: Ctx, runId: string): Promise<RunView> {
   assertMay(ctx, 'run:read')
   return inTransaction(ctx, async (tx) => {
     const row = await runInWorkshop(tx, runId)
-    return runView(row, await eventsOfRun(tx, runId))
+    return runView(row, await dayOf(tx, row), await eventsOfRun(tx, runId), new Date())
   })
 }
 
@@ -20,6 +21,6 @@ export async function getRunEvents(ctx: Ctx, runId: string, since: number): Prom
   assertMay(ctx, 'run:read')
   return inTransaction(ctx, async (tx) => {
     const { run, headNumber } = await runInWorkshop(tx, runId)
-    return { events: await eventsOfRun(tx, runId, since), headNumber, finishedAt: run.finishedAt?.toISOString() ?? null }
+    return { events: await eventsOfRun(tx, runId, since), headNumber, finishedAt: run.finishedAt?.toISOString() ?? null, now: new Date().toISOString() }
   })
 }

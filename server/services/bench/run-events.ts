@@ -31,6 +31,8 @@ function runEventView({ event, byName }: EventRow): RunEventView {
     id: event.id,
     seq: event.seq,
     doneAt: event.doneAt.toISOString(),
+    at: new Date(event.doneAt.getTime() + event.clockBehind).toISOString(),
+    ...event.place === null ? {} : { place: event.place },
     act: RunAct.parse(event.body),
     by: event.personId !== null && byName !== null ? { id: event.personId, name: byName } : null,
   }

@@ -1,3 +1,4 @@
+import type { RunDay } from './run-day'
 import type { RunWithFinish } from './run-in-workshop'
 import { partsOf, partToDo } from '#shared/bench/run-parts'
 import { runState } from '#shared/bench/run-state'
@@ -12,6 +13,7 @@ function runBase({ run, schemeName, revision, startedByName }: RunWithFinish) {
     scheme: { id: run.schemeId, name: schemeName },
     revision,
     pieces: run.pieces,
+    names: run.names,
     startedAt: run.startedAt.toISOString(),
     startedBy: run.startedBy !== null && startedByName !== null ? { id: run.startedBy, name: startedByName } : null,
     finishedAt: run.finishedAt?.toISOString() ?? null,
@@ -36,7 +38,7 @@ export function runListItem(row: RunWithFinish, events: readonly RunEventView[],
   }
 }
 
-/** A run as the bench follows it. */
-export function runView(row: RunWithFinish, events: RunEventView[]): RunView {
-  return { ...runBase(row), body: row.body, materials: row.materials, headNumber: row.headNumber, events }
+/** A run as the bench follows it, at a moment of the server's clock. */
+export function runView(row: RunWithFinish, day: RunDay, events: RunEventView[], now: Date): RunView {
+  return { ...runBase(row), body: row.body, materials: row.materials, headNumber: row.headNumber, room: row.run.room, ...day, events, now: now.toISOString() }
 }

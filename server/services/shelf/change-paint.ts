@@ -10,6 +10,7 @@ import { ENGINE_VERSION } from '#shared/optics/engine-version'
 import { deriveOptics } from './derive-optics'
 import { paintValues } from './paint-values'
 import { paintView } from './paint-view'
+import { setPaintVolume } from './set-paint-volume'
 
 /**
  * Changes a paint that is still at `version`. A new colour gets new optical data; the old stays where revisions point at it,
@@ -35,6 +36,6 @@ export async function changePaint(ctx: Ctx, paintId: string, version: number, ch
     const [paint] = await tx.db.update(paints)
       .set({ ...paintValues(change), retired: change.retired ?? row.paint.retired, opticsId, version: version + 1, changedAt: new Date() })
       .where(and(eq(paints.id, paintId), eq(paints.workshopId, tx.workshopId))).returning()
-    return paintView(paint!, data, tx.role)
+    return paintView({ ...paint!, volumeLeft: await setPaintVolume(tx, paintId, change.volumeLeft) }, data, tx.role)
   })
 }

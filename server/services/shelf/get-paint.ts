@@ -5,17 +5,18 @@ import { assertMay } from '#server/services/people/assert-may'
 import { paintOptics, paints, schemes } from '#server/db/tables'
 import { Problem } from '#shared/errors/problem'
 import type { PaintUse, PaintView } from '#shared/shelf/paint-view'
+import { leftOfPaint } from './bottle-rows'
 import { paintView } from './paint-view'
 
 /** One paint of the workshop, or paint/not-found. */
 export async function getPaint(ctx: Ctx, paintId: string): Promise<PaintView> {
   assertMay(ctx, 'shelf:read')
   return inTransaction(ctx, async (tx) => {
-    const [row] = await tx.db.select({ paint: paints, optics: paintOptics.data })
+    const [row] = await tx.db.select({ paint: paints, optics: paintOptics.data, volumeLeft: leftOfPaint })
       .from(paints).innerJoin(paintOptics, eq(paintOptics.id, paints.opticsId))
       .where(and(eq(paints.id, paintId), eq(paints.workshopId, tx.workshopId)))
     if (!row) throw new Problem({ code: 'paint/not-found' })
-    return paintView(row.paint, row.optics, tx.role)
+    return paintView({ ...row.paint, volumeLeft: row.volumeLeft }, row.optics, tx.role)
   })
 }
 

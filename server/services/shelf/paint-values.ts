@@ -1,6 +1,6 @@
 import type { PaintDraft } from '#shared/shelf/paint'
 
-/** A draft as columns: everything but the colour, which goes through the engine. */
+/** A draft as columns: everything but the colour, which goes through the engine, and what is left, which is in bottles. */
 export function paintValues(draft: PaintDraft) {
   return {
     name: draft.name,
@@ -15,7 +15,6 @@ export function paintValues(draft: PaintDraft) {
     potLifeMinutes: draft.potLifeMinutes ?? null,
     hazards: draft.hazards,
     note: draft.note,
-    volumeLeft: draft.volumeLeft,
     pricePerMl: draft.pricePerMl ?? null,
   }
 }

@@ -6,7 +6,8 @@ import type { PaintListItem, PaintView } from '#shared/shelf/paint-view'
 import { paintTrust } from '#shared/shelf/paint-trust'
 import { swatchesOf } from './swatch-keep'
 
-export type PaintRow = typeof paints.$inferSelect
+/** A paint with what is left of it in its bottles, mL. */
+export type PaintRow = typeof paints.$inferSelect & { volumeLeft: number }
 
 /** The only way from a paint's row to the wire; leaves the price out for those who may not see cost. */
 export function paintView(row: PaintRow, optics: StoredOptics, role: Role): PaintView {

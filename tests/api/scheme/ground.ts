@@ -1,4 +1,4 @@
-import { blanks, paintOptics, paints } from '#server/db/tables'
+import { blanks, bottles, paintOptics, paints } from '#server/db/tables'
 import type { Ctx } from '#server/services/ctx'
 import { inTransaction } from '#server/services/in-transaction'
 import { createScheme } from '#server/services/scheme/create-scheme'
@@ -16,14 +16,15 @@ const OPTICS: StoredOptics = {
 }
 const WHITE: PaintKnown = { how: 'masstone-hide', masstone: [95, -1, 2], passesToHide: 6 }
 
-/** Puts a paint on a workshop's shelf with given optical data. */
+/** Puts a paint on a workshop's shelf with given optical data, and one bottle of it with 50 mL. */
 export async function addTestPaint(ctx: Ctx, name = 'Opaque white, water-based', known: PaintKnown = WHITE): Promise<string> {
   return inTransaction(ctx, async (tx) => {
     const [optics] = await tx.db.insert(paintOptics).values({ workshopId: tx.workshopId, engineVersion: '1', data: OPTICS }).returning()
     const [paint] = await tx.db.insert(paints).values({
       workshopId: tx.workshopId, name, kind: 'opaque', base: 'water', known, opticsId: optics!.id, reducerPer100: 30, filmPerPass: 4,
-      volumeSolids: 25, density: 1.1, restMinutes: 6, hazards: [], note: '', volumeLeft: 50,
+      volumeSolids: 25, density: 1.1, restMinutes: 6, hazards: [], note: '',
     }).returning()
+    await tx.db.insert(bottles).values({ workshopId: tx.workshopId, paintId: paint!.id, code: `T-${paint!.id.slice(0, 8)}`, ml: 50 })
     return paint!.id
   })
 }

@@ -5,10 +5,11 @@ import { recordActs } from '#server/services/bench/record-acts'
 import { RunEventBatch } from '#shared/bench/run-event'
 import { RunParams } from '#shared/bench/run-view'
 
-/** Acts carry ids of their own, so that a batch may be sent again without a key. */
+/** Acts carry ids of their own, so that a batch may be sent again without a key. The answer tells the server's time. */
 export default defineApiHandler(async (event) => {
   const ctx = await requireContext(event, 'run:record')
   const { runId } = parseParams(event, RunParams)
-  const { events } = await parseBody(event, RunEventBatch)
-  return { answers: await recordActs(ctx, runId, events) }
+  const { events, sentAt } = await parseBody(event, RunEventBatch)
+  const clockBehind = sentAt === undefined ? 0 : Date.now() - Date.parse(sentAt)
+  return { answers: await recordActs(ctx, runId, events, clockBehind), now: new Date().toISOString() }
 })
