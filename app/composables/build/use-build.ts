@@ -1,6 +1,7 @@
 import { computed, type ComputedRef, inject, type InjectionKey, provide, type Ref, ref, type ShallowRef, watch } from 'vue'
 import { coatColours } from './coat-colours'
 import { type FilmRow, filmRows } from './film-rows'
+import { type UseSeen, useSeen } from './use-seen'
 import { useToast } from '~/composables/ui/use-toast'
 import { useSpoken } from '~/composables/ui/use-spoken'
 import { useZoneColours } from '~/composables/picture/use-zone-colours'
@@ -49,6 +50,8 @@ export interface Build {
   clear: Ref<boolean>
   roll: Ref<number>
   tilt: Ref<number>
+  /** The light it is seen in, and the water it swims in. */
+  seen: UseSeen
   /** On small screens the coat sheet lies over the rest. */
   isSheetOpen: Ref<boolean>
   /** Does an edit; what cannot be done is said, and false comes back. */
@@ -100,6 +103,7 @@ export function provideBuild(given: Pick<Build, 'scheme' | 'draft' | 'whyNot' | 
     zone: ref<ZoneName>('upper-flank'),
     zones: useZoneColours(() => import.meta.client ? look.value : null, () => ({ upTo: upTo.value, clear: clear.value, light: { tilt: tilt.value } })),
     upTo, clear, tilt,
+    seen: useSeen(),
     roll: ref(0),
     isSheetOpen: ref(false),
     act(edit) {
