@@ -1,7 +1,8 @@
 import { type Bands, wavelengthsOf } from './bands'
 import { type CoatLayer, filmLayer } from './film'
-import { diffuseFlake, singleFlake, type SingleFlake } from './flake'
+import type { SingleFlake } from './flake'
 import { flakeCoat } from './flake-coat'
+import { meanFlake, meanFlakeInDiffuse } from './mean-flake'
 import type { PaintOptics } from './paint-optics'
 import { toPictureBands } from './to-picture-bands'
 
@@ -18,8 +19,7 @@ export function coatLayer(paint: PaintOptics, passes: number, bands: Bands = 'ex
   const { K, S } = coefficientsIn(paint, bands)
   const film = filmLayer(K, S, passes)
   if (!paint.flake) return film
-  const { oxide, thickness, flakesPerPass } = paint.flake
-  return flakeCoat(diffuseFlake(oxide, thickness, bands), flakesPerPass, K, S, passes)
+  return flakeCoat(meanFlakeInDiffuse(paint.flake, bands), paint.flake.flakesPerPass, K, S, passes)
 }
 
 /**
@@ -30,10 +30,10 @@ export function coatLayer(paint: PaintOptics, passes: number, bands: Bands = 'ex
  */
 export function flakeCoatAt(paint: PaintOptics, passes: number, cosines: readonly number[], bands: Bands = 'exact36'): CoatLayer[] {
   if (!paint.flake) throw new RangeError('flakeCoatAt: the paint has no flakes')
-  const { oxide, thickness, flakesPerPass } = paint.flake
+  const { flakesPerPass } = paint.flake
   const { K, S } = coefficientsIn(paint, bands)
   const count = wavelengthsOf(bands).length
-  const all = singleFlake(oxide, thickness, cosines, bands)
+  const all = meanFlake(paint.flake, cosines, bands)
   return cosines.map((_, c) => {
     const one: SingleFlake = { R: all.R.subarray(c * count, (c + 1) * count), T: all.T.subarray(c * count, (c + 1) * count) }
     return flakeCoat(one, flakesPerPass, K, S, passes)

@@ -16,7 +16,12 @@ export interface Flake {
   sigma: number
   /** Share of the flakes' light scattered by their edges, 0…1; 0.03…0.12 is usual (our estimate). */
   edge: number
+  /** Where pearls share a cup: each kind and its share of all flakes, summing to 1. `oxide` and `thickness` are then those of the commonest. */
+  kinds?: FlakeKind[]
 }
+
+/** One of several kinds of flake in a cup. */
+export interface FlakeKind { oxide: Oxide, thickness: number, share: number }
 
 /** One flake, averaged over its spreads: R and T at each cosine in turn, all bands of the first cosine first. */
 export interface SingleFlake { R: Float64Array, T: Float64Array }

@@ -1,10 +1,10 @@
 import { assertBands, type Bands, type Spectrum } from './bands'
 import { coefficientsIn } from './coat-layer'
 import { type CoatLayer, filmLayer } from './film'
-import { diffuseFlake } from './flake'
 import { flakeCoat } from './flake-coat'
 import { emissionPhotons, type Glow, glowOf } from './fluorescence'
 import { type ChainLayer, type Glower, solveGlow } from './glow-chain'
+import { meanFlakeInDiffuse } from './mean-flake'
 import type { PaintOptics } from './paint-optics'
 import { AIR_SURFACE, type SurfaceLoss } from './surface'
 import { toPictureBands } from './to-picture-bands'
@@ -32,14 +32,13 @@ export function glowingCoat(paint: PaintOptics, glow: Glow, passes: number, band
 function sliceOf(paint: PaintOptics, passes: number, bands: Bands): CoatLayer {
   const { K, S } = coefficientsIn(paint, bands)
   if (!paint.flake) return filmLayer(K, S, passes)
-  const { oxide, thickness, flakesPerPass } = paint.flake
-  return flakeCoat(diffuseFlake(oxide, thickness, bands), flakesPerPass, K, S, passes)
+  return flakeCoat(meanFlakeInDiffuse(paint.flake, bands), paint.flake.flakesPerPass, K, S, passes)
 }
 
 /** Share of what a coat absorbs that feeds its glow: the rest goes to its other dyes and to flakes that absorb. */
 export function glowShare(paint: PaintOptics, glow: Glow, bands: Bands): Float64Array {
   const { K } = coefficientsIn(paint, bands)
-  const one = paint.flake && diffuseFlake(paint.flake.oxide, paint.flake.thickness, bands)
+  const one = paint.flake && meanFlakeInDiffuse(paint.flake, bands)
   return inBands(Float64Array.from(glow.Kf), bands).map((Kf, b) => {
     const flakes = one ? paint.flake!.flakesPerPass * Math.max(0, 1 - one.R[b]! - one.T[b]!) : 0
     const whole = K[b]! + flakes

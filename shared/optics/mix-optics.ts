@@ -1,6 +1,6 @@
 import { assertBands } from './bands'
 import { ENGINE_VERSION } from './engine-version'
-import type { Flake } from './flake'
+import type { Flake, FlakeKind } from './flake'
 import { emissionPhotons, type Fluorescence, glowOf } from './fluorescence'
 import type { PaintOptics } from './paint-optics'
 
@@ -10,9 +10,10 @@ export interface DropPart { optics: PaintOptics, drops: number }
 /**
  * The paint that a cup of drops makes: absorption, scattering and flakes add up by volume.
  *
- * Good for films with films, a pearl tinted by a film paint, and a candy with a pearl. A reducer or clear only thins.
+ * Films with films, a pearl in a candy, flake in clear, and pearls with pearls: each drop brings its own K, S and flakes and thins
+ * the others'. A reducer or clear only thins.
  *
- * @throws {RangeError} when no drops are given, a count is negative, or two different flakes are mixed
+ * @throws {RangeError} when no drops are given, or a count is negative
  */
 export function mixOptics(parts: readonly DropPart[]): PaintOptics {
   let total = 0
@@ -52,18 +53,39 @@ function mainPart(used: readonly DropPart[]): DropPart {
   return (coloured.length > 0 ? coloured : used).reduce((most, part) => part.drops > most.drops ? part : most)
 }
 
+/**
+ * The flakes of the cup: their numbers add up by volume. Their tilt and their edges are the mean by number, and every kind keeps
+ * its own colour (`mean-flake.ts`).
+ */
 function mixedFlake(used: readonly DropPart[], total: number): Flake | undefined {
-  const flaked = used.flatMap(({ optics, drops }) => optics.flake ? [{ flake: optics.flake, drops }] : [])
+  const flaked = used.flatMap(({ optics: { flake }, drops }) => flake ? [{ flake, count: flake.flakesPerPass * drops }] : [])
   const first = flaked[0]?.flake
   if (!first) return undefined
-  if (flaked.some(({ flake }) => flake.oxide !== first.oxide || flake.thickness !== first.thickness)) {
-    throw new RangeError('mix: two different pearls cannot share a cup; spray them as two coats')
-  }
-  const flakes = flaked.reduce((sum, { flake, drops }) => sum + flake.flakesPerPass * drops, 0)
+  const flakes = flaked.reduce((sum, { count }) => sum + count, 0)
   const mean = (read: (flake: Flake) => number) => flakes === 0
     ? read(first)
-    : flaked.reduce((sum, { flake, drops }) => sum + read(flake) * flake.flakesPerPass * drops, 0) / flakes
-  return { ...first, flakesPerPass: flakes / total, sigma: mean(flake => flake.sigma), edge: mean(flake => flake.edge) }
+    : flaked.reduce((sum, { flake, count }) => sum + read(flake) * count, 0) / flakes
+  const kinds = kindsOf(flaked, flakes)
+  const main = kinds.reduce((most, kind) => kind.share > most.share ? kind : most, kinds[0] ?? { ...first, share: 1 })
+  return {
+    oxide: main.oxide, thickness: main.thickness, flakesPerPass: flakes / total,
+    sigma: mean(flake => flake.sigma), edge: mean(flake => flake.edge),
+    ...(kinds.length > 1 ? { kinds } : {}),
+  }
+}
+
+/** Every kind there are flakes of, once, and its share of their number. */
+function kindsOf(flaked: readonly { flake: Flake, count: number }[], flakes: number): FlakeKind[] {
+  const kinds = new Map<string, FlakeKind>()
+  for (const { flake, count } of flaked) {
+    if (count === 0) continue
+    for (const { oxide, thickness, share } of flake.kinds ?? [{ ...flake, share: 1 }]) {
+      const key = `${oxide} ${thickness}`
+      const before = kinds.get(key)?.share ?? 0
+      kinds.set(key, { oxide, thickness, share: before + share * count / flakes })
+    }
+  }
+  return [...kinds.values()]
 }
 
 /**
