@@ -30,7 +30,7 @@ const pageWorld: Plugin = {
 /** The pages of these checks as files by name, in memory. */
 export async function bundlePages(): Promise<Map<string, Uint8Array>> {
   const { outputFiles } = await build({
-    entryPoints: ['laws-page.ts'].map(file => join(HERE, file)),
+    entryPoints: ['laws-page.ts', 'engines-page.ts', 'engines-worker.ts'].map(file => join(HERE, file)),
     outdir: '/', absWorkingDir: ROOT, write: false, bundle: true, splitting: true, format: 'esm', platform: 'browser', target: 'es2022', logLevel: 'error',
     plugins: [pageWorld],
     alias: {

@@ -36,3 +36,11 @@ test.describe('published checks and laws', () => {
     }
   })
 })
+
+test.describe('engines of pictures', () => {
+  test('agree with double precision in Chromium', async ({ page }) => {
+    const reported = pages.report(110_000)
+    await page.goto(pages.address('engines-page'))
+    console.log(JSON.stringify(await reported, null, 1))
+  })
+})
