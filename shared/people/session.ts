@@ -5,7 +5,7 @@ import type { Units } from './workshop'
 /** Who is signed in, where, as what, and where else they could be. */
 export interface SessionView {
   person: { id: string, name: string, email: string }
-  workshop: { id: string, name: string, isDemo: boolean, units: Units } | null
+  workshop: { id: string, name: string, isDemo: boolean, units: Units, ownLamp: number | null } | null
   role: Role | null
   workshops: { id: string, name: string, role: Role }[]
 }

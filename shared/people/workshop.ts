@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { KELVIN_MAX, KELVIN_MIN } from '#shared/optics/kelvin-light'
 import { NewPassword, PersonName } from './person'
 
 export const WORKSHOP_NAME_MAX = 80
@@ -16,8 +17,11 @@ export const UNITS_WORDS: Readonly<Record<Units, string>> = {
 
 export const WorkshopName = z.string().trim().min(1, 'The workshop needs a name.').max(WORKSHOP_NAME_MAX)
 
+/** Colour temperature of the workshop's own lamp, kelvin, as printed on it; null while it has named none. */
+export const OwnLamp = z.number().int('Give whole kelvin, such as 5000.').min(KELVIN_MIN).max(KELVIN_MAX).nullable()
+
 /** How a workshop is set up. A part it never chose has its default. */
-export const WorkshopSettings = z.object({ units: Units.default('metric') })
+export const WorkshopSettings = z.object({ units: Units.default('metric'), ownLamp: OwnLamp.default(null) })
 export type WorkshopSettings = z.output<typeof WorkshopSettings>
 
 /** One more workshop for somebody who is signed in. */
@@ -29,7 +33,7 @@ export const SignUp = z.object({ name: PersonName, workshopName: WorkshopName, p
 export type SignUp = z.output<typeof SignUp>
 
 /** Changing a workshop; what is left out stays. */
-export const WorkshopChange = z.object({ name: WorkshopName, units: Units }).partial()
+export const WorkshopChange = z.object({ name: WorkshopName, units: Units, ownLamp: OwnLamp }).partial()
 export type WorkshopChange = z.output<typeof WorkshopChange>
 
 export const WorkshopParams = z.object({ workshopId: z.uuid() })
@@ -43,6 +47,7 @@ export interface WorkshopView {
   id: string
   name: string
   units: Units
+  ownLamp: number | null
   isDemo: boolean
   since: string
 }

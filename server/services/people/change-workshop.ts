@@ -13,13 +13,14 @@ export async function getWorkshop(ctx: Ctx, workshopId: string): Promise<Worksho
   return inTransaction(ctx, tx => workshopHere(tx, workshopId))
 }
 
-/** Gives the workshop another name or other units. */
+/** Gives the workshop another name, other units or another lamp. */
 export async function changeWorkshop(ctx: Ctx, workshopId: string, change: WorkshopChange): Promise<WorkshopRow> {
   assertMay(ctx, 'workshop:change')
   return inTransaction(ctx, async (tx) => {
     const workshop = await workshopHere(tx, workshopId)
-    const settings: WorkshopSettings = { ...settingsOf(workshop), units: change.units ?? settingsOf(workshop).units }
-    const [changed] = await tx.db.update(workshops).set({ name: change.name ?? workshop.name, settings })
+    const { name = workshop.name, ...chosen } = change
+    const settings: WorkshopSettings = { ...settingsOf(workshop), ...chosen }
+    const [changed] = await tx.db.update(workshops).set({ name, settings })
       .where(eq(workshops.id, tx.workshopId)).returning()
     return changed ?? workshop
   })

@@ -19,7 +19,7 @@ export async function getSession(ctx: PersonCtx, workshopId: string | null): Pro
     return {
       person,
       workshop: here
-        ? { id: here.workshop.id, name: here.workshop.name, isDemo: here.workshop.isDemo, units: settingsOf(here.workshop).units }
+        ? { id: here.workshop.id, name: here.workshop.name, isDemo: here.workshop.isDemo, ...settingsOf(here.workshop) }
         : null,
       role: here?.role ?? null,
       workshops: places.map(place => ({ id: place.workshop.id, name: place.workshop.name, role: place.role })),

@@ -11,5 +11,5 @@ export function settingsOf(row: Pick<WorkshopRow, 'settings'>): WorkshopSettings
 
 /** A workshop as it travels to its people. */
 export function workshopView(row: WorkshopRow): WorkshopView {
-  return { id: row.id, name: row.name, units: settingsOf(row).units, isDemo: row.isDemo, since: row.createdAt.toISOString() }
+  return { id: row.id, name: row.name, ...settingsOf(row), isDemo: row.isDemo, since: row.createdAt.toISOString() }
 }

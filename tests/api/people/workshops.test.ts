@@ -8,11 +8,13 @@ import { resumeSession } from '#server/services/people/resume-session'
 import { asOwner } from '../database'
 import { testWorkshop } from '../factories'
 
-it('takes a new name and other units, one without the other', async () => {
+it('takes a new name, other units and a lamp, each without the others', async () => {
   const { ctx, workshopId } = await testWorkshop({ name: 'Old name' })
   expect(await changeWorkshop(ctx, workshopId, { units: 'inch' })).toMatchObject({ name: 'Old name', settings: { units: 'inch' } })
   expect(await changeWorkshop(ctx, workshopId, { name: 'New name' })).toMatchObject({ name: 'New name', settings: { units: 'inch' } })
-  expect((await getSession(ctx, workshopId)).workshop).toMatchObject({ name: 'New name', units: 'inch' })
+  expect(await changeWorkshop(ctx, workshopId, { ownLamp: 5300 })).toMatchObject({ name: 'New name', settings: { units: 'inch', ownLamp: 5300 } })
+  expect((await getSession(ctx, workshopId)).workshop).toMatchObject({ name: 'New name', units: 'inch', ownLamp: 5300 })
+  expect(await changeWorkshop(ctx, workshopId, { ownLamp: null })).toMatchObject({ settings: { units: 'inch', ownLamp: null } })
 })
 
 it('is not found by the owner of another', async () => {
