@@ -1,4 +1,5 @@
 import { assertBands, BANDS_36, type Spectrum } from './bands'
+import { BASS_PAIR_WORDS, type BassTold } from './bass-words'
 import { fallingLight } from './light-power'
 
 /**
@@ -17,6 +18,7 @@ export interface BassVerdict {
   hue: number
   /** Difference of brightness, in the same steps. */
   brightness: number
+  by: BassTold
   words: string
 }
 
@@ -45,7 +47,8 @@ export function coneSensitivity(peak: number): Float64Array {
   })
 }
 
-const GREEN: Readonly<Float64Array> = coneSensitivity(BASS_PEAKS.green), RED: Readonly<Float64Array> = coneSensitivity(BASS_PEAKS.red)
+/** Sensitivities of the two cones, 36 bands. Shared: not to be written to. */
+export const BASS_CONES: Readonly<Record<keyof BassCatch, Readonly<Float64Array>>> = { green: coneSensitivity(BASS_PEAKS.green), red: coneSensitivity(BASS_PEAKS.red) }
 
 /**
  * What the two cones take of a colour.
@@ -64,7 +67,7 @@ export function bassCatch(reflectance: Spectrum, light: Spectrum = fallingLight(
     })
     return white > 0 ? taken / white : 0
   }
-  return { green: share(GREEN), red: share(RED) }
+  return { green: share(BASS_CONES.green), red: share(BASS_CONES.red) }
 }
 
 /**
@@ -74,20 +77,18 @@ export function bassCatch(reflectance: Spectrum, light: Spectrum = fallingLight(
  *         the two limits are assumptions (`LEAST_SHARE`, `DROWNS_BELOW`)
  */
 export function toldApartByBass(a: Spectrum, b: Spectrum, light?: Spectrum): BassVerdict {
-  const one = bassCatch(a, light), other = bassCatch(b, light)
+  return verdictOn(bassCatch(a, light), bassCatch(b, light))
+}
+
+/** Whether a bass's two cones would tell two catches apart; see `toldApartByBass`. */
+export function verdictOn(one: BassCatch, other: BassCatch): BassVerdict {
   const step = (p: number, q: number) => Math.log((p + DROWNS_BELOW) / (q + DROWNS_BELOW)) / LEAST_SHARE
   const green = step(one.green, other.green), red = step(one.red, other.red)
   const hue = Math.abs(green - red) / Math.SQRT2
   const brightness = Math.abs(green + red) / 2
-  return { hue, brightness, words: wordsFor(hue, brightness) }
+  const by = hue >= BY_HUE ? 'colour' : brightness >= BY_BRIGHTNESS ? 'brightness' : 'nothing'
+  return { hue, brightness, by, words: BASS_PAIR_WORDS[by] }
 }
 
 /** Steps from which two colours count as told apart. Set so that the pairs that bass were trained on come out as they did; our judgement. */
 const BY_HUE = 2.5, BY_BRIGHTNESS = 3
-
-function wordsFor(hue: number, brightness: number): string {
-  const cones = 'What a largemouth bass’s two cones would tell apart'
-  if (hue >= BY_HUE) return `${cones}: these two, by colour.`
-  if (brightness >= BY_BRIGHTNESS) return `${cones}: not these two by colour; one is the brighter.`
-  return `${cones}: not these two.`
-}

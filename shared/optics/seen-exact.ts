@@ -11,7 +11,7 @@ import { ADAPTATION_MOST, PATH_FACTOR, waterShares } from './water-light'
 /** What a piece is seen by, in the 36 exact bands: the light that falls on it and how an eye weighs what comes from it. */
 export interface ExactSeen {
   key: string
-  /** X, Y and Z of a radiance factor; a perfect white in the light above any water has Y = 1. */
+  /** X, Y and Z of a radiance factor in each band; a perfect white in the light above any water has Y = 1. */
   weights: BandRows
   /** Photons that fall on the piece, in the light's own units. */
   photons: Float64Array
@@ -19,6 +19,8 @@ export interface ExactSeen {
   given: BandRows
   /** X, Y and Z of a perfect white there. */
   white: Xyz
+  /** Share of the light of the piece that comes to the eye. */
+  path: Float64Array
   /** Against what the piece's film ends: air or water. */
   surface: Readonly<SurfaceLoss>
   /** The colour in daylight that looks as this one does to the eye it is seen by. */
@@ -28,7 +30,8 @@ export interface ExactSeen {
 }
 
 /**
- * Works out what something is seen by, for numbers. Keep it: it is the same for every stack.
+ * Works out what something is seen by, for numbers: those of a person's eye, whatever eye is wished (`bass-map.ts` has the other's).
+ * Keep it: it is the same for every stack.
  *
  * @throws {RangeError} when the colour temperature, the depth or the distance is out of range
  */
@@ -38,7 +41,7 @@ export function exactSeen(wish: SeenWish): ExactSeen {
   const inDaylight = wish.light === 'D65' ? (xyz: Xyz) => xyz : (xyz: Xyz) => adaptWithin(xyz, lampWhite, Infinity)
   if (!wish.water) {
     return {
-      key: seenKey(wish), weights: lamp.weights, photons: lamp.falling.photons, given: lamp.given, white: lampWhite, surface: AIR_SURFACE,
+      key: seenKey(wish), weights: lamp.weights, photons: lamp.falling.photons, given: lamp.given, white: lampWhite, path: ONES, surface: AIR_SURFACE,
       toDaylight: inDaylight, lab: xyz => labAgainst(xyz, lampWhite),
     }
   }
@@ -49,7 +52,7 @@ export function exactSeen(wish: SeenWish): ExactSeen {
   const localWhite = inDaylight(white)
   const toDaylight = adapted ? (xyz: Xyz) => adaptWithin(inDaylight(xyz), localWhite, ADAPTATION_MOST) : inDaylight
   return {
-    key: seenKey(wish), weights, white, surface: WATER_SURFACE, toDaylight,
+    key: seenKey(wish), weights, white, path, surface: WATER_SURFACE, toDaylight,
     photons: lamp.falling.photons.map((photons, i) => photons * down[i]!),
     given: filtered(lamp.given, path),
     lab: xyz => labFromXyz(toDaylight(xyz)),

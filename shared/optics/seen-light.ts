@@ -1,10 +1,11 @@
+import { bassLight } from './bass-map'
 import type { Rgb, Xyz } from './colorimetry'
 import { fitPictureWeights } from './picture-weights'
 import { linearFromXyz } from './screen-colour'
 import { exactSeen } from './seen-exact'
 import type { SeenWish } from './seen-wish'
 import type { SurfaceLoss } from './surface'
-import { PICTURE_BAND_WIDTHS, PICTURE_XYZ_WEIGHTS, shareExactBands } from './to-picture-bands'
+import { perTen, PICTURE_XYZ_WEIGHTS } from './to-picture-bands'
 
 export { SeenLamp, SeenWater, SeenWish, seenKey, DAYLIGHT_IN_AIR } from './seen-wish'
 
@@ -30,6 +31,7 @@ export interface SeenLight {
  * @accuracy against the 36 bands on random stacks, CIEDE2000: half within 0.2 and 95 in 100 within 0.6; light given off within 0.5
  */
 export function seenLight(wish: SeenWish): SeenLight {
+  if (wish.eye === 'bass') return bassLight(wish)
   const exact = exactSeen(wish)
   const toRgb = (xyz: Xyz) => linearFromXyz(exact.toDaylight(xyz))
   const photons = perTen(exact.photons)
@@ -41,11 +43,6 @@ export function seenLight(wish: SeenWish): SeenLight {
     key: exact.key, reflected, photons, given: inLinear(given, toRgb), surface: exact.surface,
     white: [0, 16, 32].map(from => reflected.subarray(from, from + 16).reduce((sum, weight) => sum + weight, 0)) as Rgb, // three of three
   }
-}
-
-/** Counts in the 36 bands as densities at the 16, per 10 nm; nothing is lost, lines included. */
-function perTen(exact: Float64Array): Float64Array {
-  return shareExactBands(exact).map((value, b) => value / PICTURE_BAND_WIDTHS[b]!)
 }
 
 /** Weights for X, Y and Z as weights for linear red, green and blue. */

@@ -21,15 +21,21 @@ export const SeenWater = z.object({
 })
 export type SeenWater = z.output<typeof SeenWater>
 
-/** What something is seen by: a light, and the water in between if there is any. */
-export const SeenWish = z.object({ light: SeenLamp, water: SeenWater.optional() })
+/** Whose eye: a person's, or a map of what a largemouth bass's two cones would tell apart. */
+export const SEEN_EYES = ['person', 'bass'] as const
+
+/** What something is seen by: a light, the water in between if there is any, and whose eye; a person's when left out. */
+export const SeenWish = z.object({ light: SeenLamp, water: SeenWater.optional(), eye: z.enum(SEEN_EYES).optional() })
 export type SeenWish = z.output<typeof SeenWish>
 
 /** Daylight in air: what colours are promised by unless told otherwise. */
 export const DAYLIGHT_IN_AIR: Readonly<SeenWish> = { light: 'D65' }
 
 /** Names what something is seen by, for caches: alike in and only in what looks alike. */
-export function seenKey({ light, water }: SeenWish): string {
-  const lamp = typeof light === 'string' ? light : `${light.kelvin} K`
-  return water ? `${lamp}, ${water.type} ${water.depth} m ${water.distance} m ${water.adapted ? 'adapted' : 'as it is'}` : lamp
+export function seenKey({ light, water, eye }: SeenWish): string {
+  return [
+    typeof light === 'string' ? light : `${light.kelvin} K`,
+    ...(water ? [`${water.type} ${water.depth} m ${water.distance} m ${water.adapted ? 'adapted' : 'as it is'}`] : []),
+    ...(eye === 'bass' ? ['bass'] : []),
+  ].join(', ')
 }

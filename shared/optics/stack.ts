@@ -86,6 +86,15 @@ export function promise(stack: Stack, by: Light | ExactSeen = 'D65'): Promised {
   return { brightness, ...angles[45], angles, face: shown(face), flop: angles[110] }
 }
 
+/**
+ * Light that leaves a stack, 36 bands: its radiance factor lit from 45° and seen straight on, and the photons it gives off in the
+ * units of `ExactSeen.photons`.
+ */
+export function lightFrom(stack: Stack, seen: ExactSeen): { reflected: Float64Array, photons: Float64Array } {
+  const layers = layersOf(stack)
+  return { reflected: reflectedAt45(stack, layers, seen), photons: givenOff(stack, layers, seen) }
+}
+
 /** The three forms of a reflectance's colour, with light given off added; what may outshine paper is bent so that a screen can draw it. */
 export function colourOf(reflectance: Spectrum, by: Light | ExactSeen = 'D65', brightness: Brightness = 'paper', glow: Xyz = [0, 0, 0]): Colour {
   const seen = resolveSeen(by)
@@ -114,15 +123,20 @@ function hasFlakes(stack: Stack): boolean {
 }
 
 function seenAt45(stack: Stack, layers: readonly CoatLayer[], seen: ExactSeen): Colour {
-  const diffuse = measuredSpectrum(layAll(stack, layers), stack.finish, undefined, seen.surface)
-  const reflectance = hasFlakes(stack) ? radianceAtAngles(stack.coats, layers, diffuse, [45], seen.surface)[45] : diffuse
-  return colourOf(reflectance, seen, brightnessOf(stack), glowXyz(stack, layers, seen))
+  return colourOf(reflectedAt45(stack, layers, seen), seen, brightnessOf(stack), glowXyz(stack, layers, seen))
 }
 
-function glowXyz({ coats, ground }: Stack, layers: readonly CoatLayer[], { photons, given, surface }: ExactSeen): Xyz {
-  if (!hasGlow(coats)) return [0, 0, 0]
-  const glowing = coats.map((coat, i) => ({ ...coat, layer: layers[i]! }))
-  return weigh(given, glowPhotons(glowing, ground, photons, surface))
+function reflectedAt45(stack: Stack, layers: readonly CoatLayer[], { surface }: ExactSeen): Float64Array {
+  const diffuse = measuredSpectrum(layAll(stack, layers), stack.finish, undefined, surface)
+  return hasFlakes(stack) ? radianceAtAngles(stack.coats, layers, diffuse, [45], surface)[45] : diffuse
+}
+
+function glowXyz(stack: Stack, layers: readonly CoatLayer[], seen: ExactSeen): Xyz {
+  return hasGlow(stack.coats) ? weigh(seen.given, givenOff(stack, layers, seen)) : [0, 0, 0]
+}
+
+function givenOff({ coats, ground }: Stack, layers: readonly CoatLayer[], { photons, surface }: ExactSeen): Float64Array {
+  return glowPhotons(coats.map((coat, i) => ({ ...coat, layer: layers[i]! })), ground, photons, surface)
 }
 
 function layersOf(stack: Stack): CoatLayer[] {
