@@ -92,8 +92,8 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
     return { key, blank: blanks(key, () => prepareBlank(shape)) }
   }
 
-  function viewOf(blank: PreparedBlank, { width, height, roll, mmPerPixel }: PictureOptions): View {
-    return fitView(blank, { width, height, roll, ...(mmPerPixel ? { scale: 1 / mmPerPixel } : {}) })
+  function viewOf(blank: PreparedBlank, { width, height, roll, nose, mmPerPixel }: PictureOptions): View {
+    return fitView(blank, { width, height, roll, nose, ...(mmPerPixel ? { scale: 1 / mmPerPixel } : {}) })
   }
 
   function kitOf(look: Look, options: PictureOptions): { kit: ViewKit, key: string, blank: PreparedBlank, view: View } {

@@ -30,6 +30,8 @@ export const PictureOptions = z.object({
   height: side,
   /** Degrees about the long axis: 0 left flank, 90 back, 180 right flank (belly up), 270 belly. */
   roll: z.number().min(-360).max(360).default(0),
+  /** Which way the nose points: to the right turns the picture half round, so roll 180 shows the right flank with its back up. */
+  nose: z.enum(['left', 'right']).default('left'),
   light: PictureLight.default('bench'),
   upTo: UpTo.default('all'),
   /** Seen under a gloss clear; without it, as it stands before clear: matt, and clear coats left out. */

@@ -85,6 +85,8 @@ export const PictureQuery = z.object({
   /** With the clear coats on. */
   clear: z.stringbool().default(true),
   roll: z.coerce.number().min(0).max(360).default(0),
+  /** With the nose to the right, roll 180 shows the right flank upright. */
+  nose: z.enum(['left', 'right']).default('left'),
   light: z.union([z.enum(['bench', 'face', 'flop']), z.coerce.number().min(15).max(110)]).default('bench'),
   /** Grey of the surround, or none. */
   surround: z.union([z.literal('none'), z.coerce.number().int().min(0).max(255)]).default('none'),

@@ -7,6 +7,7 @@ export function wishOf(query: PictureQuery): PictureWish {
     width: query.width,
     height: query.height ?? Math.round(query.width / 2),
     roll: query.roll,
+    nose: query.nose,
     light: typeof query.light === 'number' ? { tilt: query.light } : query.light,
     upTo: query.upTo ?? 'all',
     clear: query.clear,
