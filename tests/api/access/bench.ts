@@ -1,3 +1,4 @@
+import { recordActs } from '#server/services/bench/record-acts'
 import { act, publishedScheme, testRun } from '../bench/ground'
 import type { AccessRow, Ground, Who } from './row'
 
@@ -22,6 +23,15 @@ export const BENCH_ACCESS: AccessRow[] = [
   },
   { method: 'GET', path: '/api/runs/[runId]', who: atBench(200), make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}`, secret: SECRET }) },
   { method: 'GET', path: '/api/runs/[runId]/events', who: atBench(200), make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/events?since=0`, secret: SECRET }) },
+  {
+    method: 'GET', path: '/api/runs/[runId]/live', who: atBench(200),
+    make: async (ground) => {
+      const run = await runOf(ground)
+      // A finished run is told and over at once; one that goes on would be told for hours.
+      await recordActs(ground.owner, run.id, [act({ v: 1, kind: 'run-finished' })])
+      return { url: `/api/runs/${run.id}/live`, secret: SECRET }
+    },
+  },
   {
     method: 'POST', path: '/api/runs/[runId]/events', who: atBench(200),
     make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/events`, body: { events: [act({ v: 1, kind: 'step-done', stepId: 'prepare' })] } }),
