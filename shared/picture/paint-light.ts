@@ -1,10 +1,11 @@
 import { PART_FIN, PART_GAP, type ViewSamples } from '#shared/blank/view-sample-lists'
-import { VEIL, type Finish } from '#shared/optics/surface'
+import type { Finish } from '#shared/optics/surface'
 import { BANDS } from './coat-table'
 import type { LaidTable } from './compose'
 import type { SeenLight } from './engine/seen-daylight'
+import { sampleLight, type SampleLight } from './engine/sample-light'
 import { addFlakeLight } from './flake-light'
-import { atNormal, mirroredLight, type LightTables } from './light-tables'
+import { mirroredLight, type LightTables } from './light-tables'
 import { fresnel } from './surface-lobes'
 import { addGloss, tonePaint, tonePlain } from './tone'
 
@@ -49,39 +50,30 @@ export interface SampleForm {
 }
 
 /** Linear light of every sample, three each, as the screen will show it: paint toned, gloss on top. */
-export function paintLight(form: SampleForm, stack: LitStack, lighting: Lighting, out = new Float32Array(3 * form.samples.count)): Float32Array {
-  const { samples, normal } = form
-  const { tables, finish, plain, seen } = lighting
-  const isGlossy = finish === 'gloss' && !plain
-  const matt = plain || isGlossy ? undefined : tables.matt()
-  const mattShare = MATT_SHARE * VEIL[finish] / VEIL.matt
-  const veil = plain ? VEIL[finish] : 0
-  const light = lightOnSamples(form, lighting)
-  for (let i = 0; i < samples.count; i++) diffuseLight(stack.reflectance, i * BANDS, seen, light[i]!, veil, out, 3 * i)
-  if (stack.glow) for (let i = 0; i < out.length; i++) out[i]! += stack.glow[i]! * light[Math.floor(i / 3)]!
-  addFlakeLight(form, stack.coats, lighting, light, out)
-  for (let i = 0; i < samples.count; i++) {
-    if (matt) addEvenly(out, 3 * i, mattShare * atNormal(matt, normal[3 * i]!, normal[3 * i + 1]!) * samples.occlusion[i]!)
-    if (plain) tonePlain(out, 3 * i)
-    else tonePaint(out, 3 * i)
-    if (isGlossy) addGloss(out, 3 * i, glossAt(form, i, tables))
-    if (samples.part[i] === PART_GAP) for (let c = 0; c < 3; c++) out[3 * i + c]! *= GAP_LIGHT
+export function paintLight(form: SampleForm, stack: LitStack, lighting: Lighting, sample: SampleLight = sampleLight(form, lighting)): Float32Array {
+  const { count } = form.samples
+  const out = new Float32Array(3 * count)
+  for (let i = 0; i < count; i++) diffuseLight(stack.reflectance, i * BANDS, lighting.seen, sample.light[i]!, out, 3 * i)
+  addFlakeLight(stack.coats, count, lighting.seen, sample, out)
+  return finishLight(form, stack.glow, lighting, sample, out)
+}
+
+/** Adds to the light of the paint what it gives off and what the surface mirrors, and bends it for the screen. */
+export function finishLight(form: SampleForm, glow: Float32Array | undefined, { plain }: Lighting, { light, even, gloss }: SampleLight, out: Float32Array): Float32Array {
+  const { samples: { count, part } } = form
+  for (let i = 0; i < count; i++) {
+    const at = 3 * i
+    if (glow) for (let c = 0; c < 3; c++) out[at + c]! += glow[at + c]! * light[i]!
+    if (even) for (let c = 0; c < 3; c++) out[at + c]! += even[i]!
+    if (plain) tonePlain(out, at)
+    else tonePaint(out, at)
+    if (gloss) addGloss(out, at, gloss[i]!)
+    if (part[i] === PART_GAP) for (let c = 0; c < 3; c++) out[at + c]! *= GAP_LIGHT
   }
   return out
 }
 
-/** Light that falls on the paint of every sample from all of the tent. */
-function lightOnSamples({ samples, normal }: SampleForm, { tables, plain }: Lighting): Float32Array {
-  const light = new Float32Array(samples.count)
-  if (plain) return light.fill(1)
-  for (let i = 0; i < samples.count; i++) {
-    const irradiance = atNormal(tables.irradiance, normal[3 * i]!, normal[3 * i + 1]!)
-    light[i] = (1 + FORM * (irradiance - 1)) * samples.occlusion[i]!
-  }
-  return light
-}
-
-function diffuseLight(reflectance: Float32Array, from: number, { reflected, surface: { outside, inside } }: SeenLight, light: number, veil: number, out: Float32Array, at: number): void {
+function diffuseLight(reflectance: Float32Array, from: number, { reflected, surface: { outside, inside } }: SeenLight, light: number, out: Float32Array, at: number): void {
   let red = 0, green = 0, blue = 0
   for (let b = 0; b < BANDS; b++) {
     const r = reflectance[from + b]!
@@ -91,13 +83,9 @@ function diffuseLight(reflectance: Float32Array, from: number, { reflected, surf
     blue += reflected[2 * BANDS + b]! * seen
   }
   const scale = (1 - outside) * (1 - inside) * light
-  out[at] = scale * red + veil
-  out[at + 1] = scale * green + veil
-  out[at + 2] = scale * blue + veil
-}
-
-function addEvenly(out: Float32Array, at: number, light: number): void {
-  for (let c = 0; c < 3; c++) out[at + c]! += light
+  out[at] = scale * red
+  out[at + 1] = scale * green
+  out[at + 2] = scale * blue
 }
 
 /** White light the clear mirrors to the eye. */
@@ -111,6 +99,7 @@ export function glossShare({ part, rim }: ViewSamples, i: number): number {
   return part[i]! >= PART_FIN ? GLOSS_ON_FINS * Math.min(1, rim[i]! / RIM_WITHOUT_GLOSS) ** 2 : 1
 }
 
-function glossAt({ samples, glossNormal }: SampleForm, i: number, tables: LightTables): number {
+/** White light that the clear mirrors to the eye at one sample. */
+export function glossAt({ samples, glossNormal }: SampleForm, i: number, tables: LightTables): number {
   return glossShare(samples, i) * glossLight(tables, glossNormal[3 * i]!, glossNormal[3 * i + 1]!, glossNormal[3 * i + 2]!)
 }

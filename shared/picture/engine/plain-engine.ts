@@ -3,6 +3,7 @@ import { glowLight } from '../glow-light'
 import { paintLight } from '../paint-light'
 import type { KeyedCoat, ViewKit } from '../view-kit'
 import type { LightAsk, PictureEngine } from './picture-engine'
+import { sampleLightKeep } from './sample-light'
 import { changedCoats, sharedStart } from './shared-coats'
 
 interface KeptState { keys: readonly string[], state: Float32Array }
@@ -18,13 +19,14 @@ interface Kept {
 /** The engine that runs anywhere, and that the others are held to. */
 export function plainEngine(): PictureEngine {
   let held = new WeakMap<ViewKit, Kept>()
+  const samplesLit = sampleLightKeep()
   return {
     name: 'plain',
     light(kit, ask) {
       const kept = held.get(kit) ?? { prefix: undefined, whole: undefined, glow: undefined }
       held.set(kit, kept)
       const reflectance = composeKept(kept, ask)
-      return paintLight(ask.form, { reflectance, glow: keptGlow(kept, ask), coats: ask.coats }, ask.lighting)
+      return paintLight(ask.form, { reflectance, glow: keptGlow(kept, ask), coats: ask.coats }, ask.lighting, samplesLit(ask.form, ask.lighting))
     },
     close() {
       held = new WeakMap()

@@ -1,0 +1,2 @@
+export { glow } from './glow'
+export { lay } from './lay'
