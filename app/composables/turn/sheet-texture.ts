@@ -1,0 +1,31 @@
+import { ClampToEdgeWrapping, DataTexture, HalfFloatType, LinearFilter, LinearMipmapLinearFilter, RepeatWrapping, RGBAFormat } from 'three'
+import type { HalfSheet } from '#shared/picture/turn/paint-sheet'
+
+/** Sharpness kept where a surface turns away from the viewer; more costs more than it shows. */
+const SLANT = 4
+
+/** How a sheet is read. */
+export interface SheetReading {
+  /** It goes once round: its last row meets its first. */
+  goesRound?: boolean
+  /** It is also read from far away or at a slant: keep smaller copies. */
+  shrinks?: boolean
+}
+
+/** A sheet of half floats as a texture. */
+export function sheetTexture(data: HalfSheet, width: number, height: number, { goesRound = false, shrinks = false }: SheetReading = {}): DataTexture {
+  const texture = new DataTexture(data, width, height, RGBAFormat, HalfFloatType)
+  texture.wrapS = ClampToEdgeWrapping
+  texture.wrapT = goesRound ? RepeatWrapping : ClampToEdgeWrapping
+  texture.magFilter = LinearFilter
+  texture.minFilter = shrinks ? LinearMipmapLinearFilter : LinearFilter
+  texture.generateMipmaps = shrinks
+  if (shrinks) texture.anisotropy = SLANT
+  texture.needsUpdate = true
+  return texture
+}
+
+/** One texel of nothing, for what is not there. */
+export function noTexture(): DataTexture {
+  return sheetTexture(new Uint16Array(4), 1, 1)
+}
