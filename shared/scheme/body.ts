@@ -5,6 +5,7 @@ import { Lab } from '#shared/shelf/paint'
 
 export const COATS_MAX = 60
 export const MASKS_MAX = 20
+export const ANSWERED_MAX = 200
 
 /** What one does, in order, from the ground up: fit a mask, lay a coat, lift a mask. A mask keeps paint off every coat between its fit and its lift. */
 export const StackItem = z.discriminatedUnion('act', [
@@ -34,5 +35,7 @@ export const SchemeBody = z.object({
   stack: z.array(StackItem).max(COATS_MAX + 2 * MASKS_MAX),
   masks: z.array(Mask).max(MASKS_MAX),
   eyes: Eyes.nullable(),
+  /** Warnings of a second look that a painter has answered, by their keys; absent while there is none. */
+  answered: z.array(z.string().max(200)).min(1).max(ANSWERED_MAX).optional(),
 })
 export type SchemeBody = z.output<typeof SchemeBody>

@@ -72,6 +72,7 @@ export function diffSentences(diff: SchemeDiff, two: TwoVersions): string[] {
     ...diff.masksAdded.map(mask => `${maskWord([mask], mask.id)} is fitted.`),
     ...diff.masksChanged.map(change => `${maskWord([change.to], change.maskId)} has another ${listWords(change.fields.map(maskFieldWord))}.`),
     ...diff.masksSpanned.map(span => `${maskWord(to.body.masks, span.maskId)} is on for ${numbers(span.to, to.body)} instead of ${numbers(span.from, from.body)}.`),
+    ...diff.answered ? [`Of the second look’s warnings ${diff.answered.to.length} ${diff.answered.to.length === 1 ? 'is' : 'are'} answered instead of ${diff.answered.from.length}.`] : [],
   ]
 }
 
@@ -84,7 +85,7 @@ export function diffSummary(diff: SchemeDiff): string {
     ...diff.takenOut.length > 0 ? [`${diff.takenOut.length} taken out`] : [],
     ...diff.moved.length > 0 ? [`${diff.moved.length} moved`] : [],
     ...masks.size > 0 ? [countWords(masks.size, 'mask')] : [],
-    ...[diff.ground && 'ground', diff.eyes && 'eyes', diff.blankId && 'blank'].filter(part => typeof part === 'string'),
+    ...[diff.answered && 'answers', diff.ground && 'ground', diff.eyes && 'eyes', diff.blankId && 'blank'].filter(part => typeof part === 'string'),
   ]
   return parts.length === 0 ? 'nothing' : parts.join(', ')
 }

@@ -40,6 +40,8 @@ export interface SchemeDiff {
   rows: StackKey[] | null
   /** The masks in the later order; null when it is that of the earlier. */
   maskOrder: string[] | null
+  /** Warnings answered in each; null when they are the same. */
+  answered: Change<string[]> | null
 }
 
 function keysOf(stack: readonly StackItem[]): StackKey[] {
@@ -115,6 +117,7 @@ export function diffBodies(from: SchemeBody, to: SchemeBody): SchemeDiff {
     masksSpanned: spannedMasks(from, to),
     rows: change(keysOf(from.stack), keysOf(to.stack))?.to ?? null,
     maskOrder: change(from.masks.map(mask => mask.id), to.masks.map(mask => mask.id))?.to ?? null,
+    answered: change(from.answered ?? [], to.answered ?? []),
   }
 }
 
@@ -134,8 +137,11 @@ export function applyDiff(body: SchemeBody, diff: SchemeDiff): SchemeBody {
   for (const mask of [...diff.masksAdded, ...diff.masksChanged.map(each => each.to)]) masks.set(mask.id, mask)
 
   const rowOf = ({ act, id }: StackKey): StackItem => act === 'coat' ? { act, coat: known(coats, id) } : { act, maskId: id }
+  const { answered: before, ...bare } = body
+  const answered = diff.answered?.to ?? before ?? []
   return {
-    ...body,
+    ...bare,
+    ...answered.length > 0 ? { answered } : {},
     blankId: diff.blankId?.to ?? body.blankId,
     ground: diff.ground?.to ?? body.ground,
     eyes: diff.eyes ? diff.eyes.to : body.eyes,

@@ -1,7 +1,7 @@
 import { type Coat, PASSES_MAX } from './coat'
 import { coatFault, groundFault, maskFault } from './field-faults'
 import type { Mask } from './mask'
-import { COATS_MAX, type Eyes, type Ground, MASKS_MAX, type SchemeBody, type StackItem } from './body'
+import { ANSWERED_MAX, COATS_MAX, type Eyes, type Ground, MASKS_MAX, type SchemeBody, type StackItem } from './body'
 import { carryCoat, coatsOf, maskWord, moveItem, rowOfCoat, rowsOfMask, type StackOutcome } from './stack-order'
 
 /** The coats a mask is fitted for: fitted just before the first, lifted just after the last. */
@@ -28,6 +28,8 @@ export type SchemeEdit
     | { do: 'change-ground', ground: Ground }
     | { do: 'set-eyes', eyes: Eyes | null }
     | { do: 'choose-blank', blankId: string }
+    /** Answers a warning of a second look, or takes the answer back. */
+    | { do: 'answer', key: string, known: boolean }
     /** Puts a whole body in place: an older revision, or the other of two versions. */
     | { do: 'replace-body', body: SchemeBody }
 
@@ -110,6 +112,13 @@ function removeMask(body: SchemeBody, maskId: string): EditOutcome {
   }
 }
 
+/** The oldest answers go first when there are too many: a warning that comes back can be answered again. */
+function answer({ answered = [], ...body }: SchemeBody, key: string, known: boolean): SchemeBody {
+  const others = answered.filter(each => each !== key)
+  const now = known ? [...others, key].slice(-ANSWERED_MAX) : others
+  return now.length > 0 ? { ...body, answered: now } : body
+}
+
 /** Does one edit. Pure: the body it was given stays as it is. What cannot be done is refused with a sentence, never mended. */
 export function applyEdit(body: SchemeBody, edit: SchemeEdit): EditOutcome {
   switch (edit.do) {
@@ -136,6 +145,7 @@ export function applyEdit(body: SchemeBody, edit: SchemeEdit): EditOutcome {
     }
     case 'set-eyes': return { ok: true, body: { ...body, eyes: edit.eyes } }
     case 'choose-blank': return { ok: true, body: { ...body, blankId: edit.blankId } }
+    case 'answer': return { ok: true, body: answer(body, edit.key, edit.known) }
     case 'replace-body': return { ok: true, body: edit.body }
   }
 }
@@ -158,6 +168,7 @@ export function editField(edit: SchemeEdit): string | null {
     case 'span-mask':
     case 'remove-mask':
     case 'choose-blank':
+    case 'answer':
     case 'replace-body':
       return null
   }
@@ -182,6 +193,7 @@ export function editWords(body: SchemeBody, edit: SchemeEdit): string {
     case 'change-ground': return 'Ground'
     case 'set-eyes': return 'Eyes'
     case 'choose-blank': return 'Another blank'
+    case 'answer': return edit.known ? 'Answer a warning' : 'Open a warning again'
     case 'replace-body': return 'Take over a version'
   }
 }

@@ -66,6 +66,7 @@ export const anyEdit: fc.Arbitrary<SchemeEdit> = fc.oneof(
   fc.record({ do: fc.constant('span-mask' as const), maskId: anyMask, over: anySpan }),
   fc.record({ do: fc.constant('remove-mask' as const), maskId: anyMask }),
   fc.record({ do: fc.constant('set-eyes' as const), eyes: fc.constant(null) }),
+  fc.record({ do: fc.constant('answer' as const), key: fc.constantFrom('thick', 'damp', 'dark'), known: fc.boolean() }),
   fc.record({ do: fc.constant('choose-blank' as const), blankId: fc.integer({ min: 1, max: 3 }).map(n => id('blank', n)) }),
 )
 
