@@ -1,13 +1,9 @@
 import { coverAt, type CutBlank } from './film-cover'
+import { filmTexture, type FilmTexture } from './film-texture'
 import type { Look } from '#shared/picture/look'
 import { isClearCoat } from '#shared/picture/coat-paint'
-import type { Coat } from '#shared/scheme/coat'
 import { filmSection } from '#shared/scheme/film'
 import { laidCoats } from '#shared/scheme/laid-coats'
-import type { Materials } from '#shared/scheme/materials'
-
-/** How a stratum is hatched, by what its paint does to light. */
-export type FilmTexture = 'plain' | 'dashes' | 'upright' | 'flakes' | 'clear'
 
 /** One coat in the section. Lines run from A (belly, 0) to A′ (back), heights up from the bottom, px of the drawing. */
 export interface DrawnStratum {
@@ -45,20 +41,6 @@ const HAIR = 0.8
 const a = (i: number) => i / STEPS
 const wave = (i: number, turn: number) => Math.sin(a(i) * 7.1 + turn) * 0.6 + Math.sin(a(i) * 12.7 + turn * 2.3) * 0.4
 
-function textureOf(coat: Coat, materials: Materials): FilmTexture {
-  const main = [...coat.mix.parts].sort((x, y) => y.drops - x.drops)[0]
-  const kinds = coat.mix.parts.map(part => materials.paints.find(paint => paint.id === part.paintId)?.kind)
-  if (kinds.some(kind => kind === 'pearl' || kind === 'interference' || kind === 'metallic')) return 'flakes'
-  switch (materials.paints.find(paint => paint.id === main?.paintId)?.kind) {
-    case 'clear': return 'clear'
-    case 'transparent':
-    case 'candy': return 'upright'
-    case 'semi-opaque':
-    case 'fluorescent': return 'dashes'
-    default: return 'plain'
-  }
-}
-
 /** Paint runs into hollows before it dries: a line, evened over its neighbours. */
 function evened(line: readonly number[], reach: number): number[] {
   return line.map((_, i) => {
@@ -94,7 +76,7 @@ export function filmDrawing(look: Look, blank: CutBlank, height: number): FilmDr
     // A hair at A′ at least, so that every coat has an end to lead from.
     const level = isMasked ? raised : evened(raised, one.isClear ? 14 : 5).map((high, i) => Math.max(high, (base[i] ?? 0) + 0.45 * ((raised[i] ?? 0) - (base[i] ?? 0))))
     below = level
-    return { coatId: one.coat.id, texture: textureOf(one.coat, look.materials), film: one.film, base, top: level, isShortened, isMasked }
+    return { coatId: one.coat.id, texture: filmTexture(one.coat, look.materials), film: one.film, base, top: level, isShortened, isMasked }
   })
   return { height, steps: STEPS, groundTop, strata, scale }
 }
