@@ -59,15 +59,15 @@ export function paintLight(form: SampleForm, stack: LitStack, lighting: Lighting
 }
 
 /** Adds to the light of the paint what it gives off and what the surface mirrors, and bends it for the screen. */
-export function finishLight(form: SampleForm, glow: Float32Array | undefined, { plain }: Lighting, { light, even, gloss }: SampleLight, out: Float32Array): Float32Array {
+export function finishLight(form: SampleForm, glow: Float32Array | undefined, { plain, seen: { white } }: Lighting, { light, even, gloss }: SampleLight, out: Float32Array): Float32Array {
   const { samples: { count, part } } = form
   for (let i = 0; i < count; i++) {
     const at = 3 * i
     if (glow) for (let c = 0; c < 3; c++) out[at + c]! += glow[at + c]! * light[i]!
-    if (even) for (let c = 0; c < 3; c++) out[at + c]! += even[i]!
+    if (even) for (let c = 0; c < 3; c++) out[at + c]! += white[c]! * even[i]!
     if (plain) tonePlain(out, at)
     else tonePaint(out, at)
-    if (gloss) addGloss(out, at, gloss[i]!)
+    if (gloss) addGloss(out, at, gloss[i]!, white)
     if (part[i] === PART_GAP) for (let c = 0; c < 3; c++) out[at + c]! *= GAP_LIGHT
   }
   return out

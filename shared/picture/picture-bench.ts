@@ -2,6 +2,7 @@ import { prepareBlank, type PreparedBlank } from '#shared/blank/prepared-blank'
 import { projectPoint, type View } from '#shared/blank/view'
 import { fitView, subpixelSamples, viewSamples } from '#shared/blank/view-samples'
 import { groundFromLab } from '#shared/optics/known-film'
+import { seenKey, seenLight, type SeenLight } from '#shared/optics/seen-light'
 import { toPictureBands } from '#shared/optics/to-picture-bands'
 import { canonicalJson } from '#shared/scheme/canonical'
 import { canvasOf, copyCanvas, encodeCanvas, type Canvas } from './canvas'
@@ -10,7 +11,6 @@ import { drawEye } from './draw-eye'
 import { drawHardware } from './draw-hardware'
 import type { PictureEngine } from './engine/picture-engine'
 import { plainEngine } from './engine/plain-engine'
-import { SEEN_DAYLIGHT } from './engine/seen-daylight'
 import { keepSome } from './keep-some'
 import { aspecularOf, lightKey } from './light-rig'
 import { lightTables, type LightTables } from './light-tables'
@@ -33,6 +33,8 @@ const KEPT = {
   edits: { blanks: 4, views: 4, refinedViews: 2, tables: 120, lights: 8 },
   orders: { blanks: 12, views: 1, refinedViews: 0, tables: 120, lights: 4 },
 }
+/** White this dark is as good as none; whites this near to one another are the same. */
+const DARKEST = 1e-4, SAME_WHITE = 1e-6
 /** Share of the jumps of a picture that kept samples must hold to be used again: an edit of one coat moves few of them. */
 const SAME_JUMPS = 0.9
 
@@ -65,7 +67,7 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
   const most = KEPT[work]
   const blanks = keepSome<PreparedBlank>(most.blanks), lights = keepSome<LightTables>(most.lights)
   const views = keepSome<ViewKit>(most.views), refinedViews = keepSome<RefinedView>(most.refinedViews)
-  const tables = keepSome<CoatTable>(most.tables)
+  const tables = keepSome<CoatTable>(most.tables), seens = keepSome<SeenLight>(most.lights)
 
   return {
     draw(look, wish) {
@@ -107,6 +109,10 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
     return lights(lightKey(light), () => lightTables(light))
   }
 
+  function seenBy({ seen }: PictureOptions): SeenLight {
+    return seens(seenKey(seen), () => seenLight(seen))
+  }
+
   /** Light of every sample of a kit. */
   function lit(kit: ViewKit, look: Look, options: PictureOptions): Float32Array {
     const coats = shownCoats(look, options).map((coat): KeyedCoat => {
@@ -119,7 +125,8 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
     const ground = toPictureBands(groundFromLab(colour, finish))
     const groundKey = canonicalJson(look.body.ground)
     const lighting: Lighting = {
-      tables: lightOf(options.light), finish: finishShown(look, options), plain: options.plain, aspecular: aspecularOf(options.light), seen: SEEN_DAYLIGHT,
+      tables: lightOf(options.light), finish: finishShown(look, options), plain: options.plain, aspecular: aspecularOf(options.light),
+      seen: seenBy(options),
     }
     const form = eyesAreFitted(look, options.upTo) ? kit.form : kit.blindForm
     return engine.light(kit, { groundKey, ground, coats, form, lighting })
@@ -150,15 +157,25 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
     const { kit, view } = kitOf(look, options)
     const canvas = copyCanvas(painted)
     const { eyes } = look.body
+    const { white } = seenBy(options)
+    // Eyes and wire are drawn as a white lamp shows them, so for as long everything is counted against the white there.
+    tint(canvas, white.map(channel => 1 / Math.max(DARKEST, channel)))
     if (eyes && eyesAreFitted(look, options.upTo)) {
       for (const eye of kit.parts.eyes) drawEye(canvas, eye, eyes, lightOf(options.light), options.plain)
     }
     drawHardware(canvas, kit.parts)
+    tint(canvas, white.map(channel => Math.max(DARKEST, channel)))
     return {
       width: options.width, height: options.height, rgba: encodeCanvas(canvas, options), mmPerPixel: 1 / view.scale,
       origin: projectPoint(view, look.materials.blank.shape.length, 0, 0, 0),
     }
   }
+}
+
+/** Multiplies the light of a canvas, channel by channel. */
+function tint({ light }: Canvas, by: readonly number[]): void {
+  if (by.every(channel => Math.abs(channel - 1) < SAME_WHITE)) return
+  for (let i = 0; i < light.length; i++) light[i]! *= by[i % 3]!
 }
 
 function coarser(options: PictureOptions): PictureOptions {

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { DAYLIGHT_IN_AIR, SeenWish } from '#shared/optics/seen-wish'
 
 /** Widest and highest picture, pixels. */
 export const PICTURE_SIDE_MAX = 4096
@@ -33,6 +34,8 @@ export const PictureOptions = z.object({
   /** Which way the nose points: to the right turns the picture half round, so roll 180 shows the right flank with its back up. */
   nose: z.enum(['left', 'right']).default('left'),
   light: PictureLight.default('bench'),
+  /** The lamp, the water in between and whose eye. */
+  seen: SeenWish.default(DAYLIGHT_IN_AIR),
   upTo: UpTo.default('all'),
   /** Seen under a gloss clear; without it, as it stands before clear: matt, and clear coats left out. */
   clear: z.boolean().default(true),

@@ -29,22 +29,27 @@ export function tonePlain(rgb: Float32Array, at: number): void {
   if (most > 1) for (let c = 0; c < 3; c++) rgb[at + c]! /= most
 }
 
+/** A white in air. */
+const WHITE = [1, 1, 1] as const
+
 /**
- * Adds white mirrored light to a colour that has been through `tonePaint`.
+ * Adds mirrored light to a colour that has been through `tonePaint`.
  *
  * What is far brighter than white turns white: whitening is for light that the surface mirrors, never for paint.
+ *
+ * @param white what a perfect white looks like there, linear sRGB
  */
-export function addGloss(rgb: Float32Array, at: number, gloss: number): void {
+export function addGloss(rgb: Float32Array, at: number, gloss: number, white: readonly number[] = WHITE): void {
   const before = Math.max(rgb[at]!, rgb[at + 1]!, rgb[at + 2]!)
-  const most = before + gloss
-  for (let c = 0; c < 3; c++) rgb[at + c]! += gloss
+  for (let c = 0; c < 3; c++) rgb[at + c]! += gloss * white[c]!
+  const most = Math.max(rgb[at]!, rgb[at + 1]!, rgb[at + 2]!)
   const knee = Math.max(KNEE, Math.min(0.97, before))
   if (most <= knee) return
   const shown = shoulder(most, knee)
-  const white = most > 1 ? Math.min(1, ((most - 1) / WHITE_AT) ** 0.8) : 0
+  const whitened = most > 1 ? Math.min(1, ((most - 1) / WHITE_AT) ** 0.8) : 0
   for (let c = 0; c < 3; c++) {
     const scaled = rgb[at + c]! * shown / most
-    rgb[at + c] = scaled + (shown - scaled) * white
+    rgb[at + c] = scaled + (shown - scaled) * whitened
   }
 }
 
