@@ -6,7 +6,7 @@ import { build } from 'esbuild'
 const here = (path: string) => fileURLToPath(new URL(path, import.meta.url))
 
 export default defineNuxtConfig({
-  modules: ['@nuxt/eslint', '@nuxtjs/tailwindcss', '@pinia/nuxt', 'nuxt-auth-utils', 'nuxt-security'],
+  modules: ['@nuxt/eslint', '@nuxtjs/tailwindcss', '@pinia/nuxt', 'nuxt-auth-utils', 'nuxt-security', '@vite-pwa/nuxt'],
   // The drawing sheet is for us: no built product has it.
   $production: { ignore: ['**/pages/dev/**'] },
   // Path data and tables lie beside the components that draw them.
@@ -36,6 +36,9 @@ export default defineNuxtConfig({
       noScripts: true,
       security: { headers: { referrerPolicy: 'no-referrer', contentSecurityPolicy: { 'script-src': ['\'none\''], 'connect-src': ['\'none\''], 'worker-src': ['\'none\''], 'media-src': ['\'none\''] } } },
     },
+    // Bench pages are one empty shell that a tablet keeps: what they show lies on the tablet, so the server draws nothing of it.
+    '/runs/here': { ssr: false },
+    '/runs/*/follow': { ssr: false },
   },
   compatibilityDate: '2026-11-01',
   nitro: {
@@ -65,6 +68,36 @@ export default defineNuxtConfig({
   },
   auth: { loadStrategy: 'none' },
   eslint: { config: { stylistic: true } },
+  // The application as it is kept on a tablet. It is registered, and gives way to a new version, in app/bench/device/app-worker.ts.
+  pwa: {
+    strategies: 'injectManifest',
+    srcDir: 'bench/service-worker',
+    filename: 'worker.ts',
+    registerType: 'prompt',
+    injectRegister: false,
+    client: { registerPlugin: false },
+    injectManifest: {
+      globPatterns: ['**/*.{js,mjs,css,woff2,wasm,svg,webp}', 'icon-*.png'],
+      maximumFileSizeToCacheInBytes: 6 * 1024 ** 2,
+    },
+    manifest: {
+      id: '/',
+      name: 'Countershade',
+      short_name: 'Countershade',
+      description: 'A notebook for layered paint, from the first idea to the bench',
+      lang: 'en',
+      start_url: '/runs',
+      scope: '/',
+      display: 'standalone',
+      background_color: '#929292',
+      theme_color: '#161616',
+      icons: [
+        { src: '/icon-192.png', sizes: '192x192', type: 'image/png' },
+        { src: '/icon-512.png', sizes: '512x512', type: 'image/png' },
+        { src: '/icon-maskable-512.png', sizes: '512x512', type: 'image/png', purpose: 'maskable' },
+      ],
+    },
+  },
   // What depends on the address and on development is added at start: server/boot/security-headers.ts.
   security: {
     headers: {

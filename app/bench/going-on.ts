@@ -1,5 +1,5 @@
-import type { RunAct } from '#shared/bench/run-event'
-import { clockWords, countInLetters, durationWords, piecesLabel, piecesWords } from '#shared/bench/piece-words'
+import { DEVIATION_NOTE_MAX, type RunAct } from '#shared/bench/run-event'
+import { clockWords, countInLetters, piecesWords } from '#shared/bench/piece-words'
 import { isReady, type Part, stepAfter, waitLeft } from '#shared/bench/run-parts'
 import { isWait, type RunStep } from '#shared/bench/run-step'
 import { passesOn, type RunPlan, type RunState } from '#shared/bench/run-state'
@@ -37,9 +37,11 @@ function startsByItself(step: RunStep): boolean {
 
 function missed(step: RunStep, open: readonly number[], state: RunState, now: number): RunAct[] {
   if (open.length === 0) return []
-  const note = (what: 'passes' | 'wait', words: string): RunAct[] => [{ v: 1, kind: 'deviation', stepId: step.id, what, note: words, pieces: [...open] }]
-  if (step.kind === 'lay') return note('passes', open.map(piece => `Piece ${piece} went on with ${passesOn(step.coat.id, piece, state)} of ${countWords(step.coat.passes, 'pass', 'passes')}.`).join(' ').slice(0, 500))
-  if (isWait(step)) return note('wait', `Went on ${durationWords(longest(step, open, state, now) / 1000)} early: ${piecesLabel(open)}.`)
+  if (step.kind === 'lay') {
+    const note = open.map(piece => `Piece ${piece} went on with ${passesOn(step.coat.id, piece, state)} of ${countWords(step.coat.passes, 'pass', 'passes')}.`).join(' ').slice(0, DEVIATION_NOTE_MAX)
+    return [{ v: 1, kind: 'deviation', stepId: step.id, what: 'passes', note, pieces: [...open] }]
+  }
+  if (isWait(step)) return [{ v: 1, kind: 'wait-cut', stepId: step.id, secondsLeft: Math.ceil(longest(step, open, state, now) / 1000), pieces: [...open] }]
   return []
 }
 

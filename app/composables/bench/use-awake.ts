@@ -1,23 +1,24 @@
-import { onMounted } from 'vue'
+import { onMounted, ref, type Ref } from 'vue'
 import { useEventListener, useWakeLock } from '@vueuse/core'
 
-/** Keeps this screen awake while the page is open; `onCannot` is called once where the device does not allow it. */
-export function useAwake(onCannot: () => void): void {
+/** Keeps this screen awake while the page is open; says whether the device allows it, null until it is known. */
+export function useAwake(): Readonly<Ref<boolean | null>> {
   const { isSupported, request } = useWakeLock()
-  let isTold = false
+  const isAwake = ref<boolean | null>(null)
 
   async function stayAwake() {
     try {
       if (!isSupported.value) throw new Error('no wake lock')
       await request('screen')
+      isAwake.value = true
     }
     catch {
-      if (!isTold) onCannot()
-      isTold = true
+      isAwake.value = false
     }
   }
   onMounted(stayAwake)
-  if (import.meta.client) useEventListener(document, 'visibilitychange', () => {
+  useEventListener(document, 'visibilitychange', () => {
     if (document.visibilityState === 'visible') void stayAwake()
   })
+  return isAwake
 }

@@ -10,7 +10,7 @@ const BOUNCE_MS = 500
 /** What is pressed at the bench, and the questions that are open. */
 export interface FollowActs {
   /** The question before a step is left early. */
-  leaving: { open: boolean, asked: LeavingEarly | null, split: () => void, all: () => void }
+  leaving: { open: boolean, asked: LeavingEarly | null, split: () => void, all: () => void, shut: () => void }
   /** The next piece pressed is to be set aside. */
   setting: Ref<boolean>
   differing: Ref<boolean>
@@ -37,27 +37,29 @@ export function useFollowActs(follow: Follow, speak: (words: string) => void): F
   const leaving = reactive<FollowActs['leaving']>({
     open: false,
     asked: null,
-    split: () => go(ready.value.ready),
-    all: () => go(),
+    split: () => void go(ready.value.ready),
+    all: () => void go(),
+    shut() {
+      leaving.open = false
+    },
   })
 
-  function go(pieces?: readonly number[]) {
+  async function go(pieces?: readonly number[]) {
     leaving.open = false
     setting.value = false
-    follow.goOn(pieces)
     isMoving.value = true
     window.setTimeout(() => {
       isMoving.value = false
     }, BOUNCE_MS)
-    window.scrollTo({ top: 0 })
+    if (await follow.goOn(pieces)) window.scrollTo({ top: 0 })
   }
 
   function next() {
     if (isMoving.value || isFinished.value) return
-    if (!part.value) return acts.do({ v: 1, kind: 'run-finished' })
+    if (!part.value) return void acts.do({ v: 1, kind: 'run-finished' })
     leaving.asked = follow.asked()
     if (leaving.asked) leaving.open = true
-    else go()
+    else void go()
   }
 
   function press(piece: number) {
@@ -70,14 +72,14 @@ export function useFollowActs(follow: Follow, speak: (words: string) => void): F
     if (now?.kind === 'inspect') seenPiece.value = piece
     if (now?.kind !== 'lay') return
     const laid = passesOn(now.coat.id, piece, state.value)
-    if (laid < now.coat.passes) acts.do({ v: 1, kind: 'pass-laid', coatId: now.coat.id, pieces: [piece], passes: 1 })
+    if (laid < now.coat.passes) void acts.do({ v: 1, kind: 'pass-laid', coatId: now.coat.id, pieces: [piece], passes: 1 })
     else speak(`Piece ${piece} has ${countWords(laid, 'pass', 'passes')}. One more is noted under Done differently.`)
   }
 
   function all(pieces: number[]) {
     const now = step.value
-    if (now?.kind === 'lay') acts.do({ v: 1, kind: 'pass-laid', coatId: now.coat.id, pieces, passes: 1 })
-    if (now?.kind === 'inspect') acts.do({ v: 1, kind: 'inspected', pieces, passed: true, note: '' })
+    if (now?.kind === 'lay') void acts.do({ v: 1, kind: 'pass-laid', coatId: now.coat.id, pieces, passes: 1 })
+    if (now?.kind === 'inspect') void acts.do({ v: 1, kind: 'inspected', pieces, passed: true, note: '' })
   }
 
   return { leaving, setting, differing, asidePiece, seenPiece, isMoving, next, press, all }

@@ -1,6 +1,7 @@
 import { computed, type ComputedRef, ref, type Ref } from 'vue'
-import { useIntervalFn } from '@vueuse/core'
+import { useBenchClock } from './use-bench-clock'
 import { type RunActs, useRunActs } from './use-run-acts'
+import type { RunHere } from './use-run-here'
 import { goingOn, leavingEarly, type LeavingEarly, type Readiness, readiness } from '~/bench/going-on'
 import type { RunAct } from '#shared/bench/run-event'
 import { type Part, partsOf, partToDo, stepAfter } from '#shared/bench/run-parts'
@@ -8,7 +9,6 @@ import type { RunStep } from '#shared/bench/run-step'
 import { runSteps } from '#shared/bench/run-steps'
 import { type RunPlan, runState, type RunState } from '#shared/bench/run-state'
 import { type CupNow, cupNow, type RunTimer, runTimers } from '#shared/bench/run-timers'
-import type { RunView } from '#shared/bench/run-view'
 import type { Look } from '#shared/picture/look'
 
 /** A run as it is followed at the bench. */
@@ -17,8 +17,8 @@ export interface Follow {
   plan: RunPlan
   look: Look
   state: ComputedRef<RunState>
-  /** The clock, ms. */
-  now: Ref<number>
+  /** The time at the bench, ms. */
+  now: Readonly<Ref<number>>
   parts: ComputedRef<Part[]>
   /** The part that is looked at; undefined when every piece is through or set aside. */
   part: ComputedRef<Part | undefined>
@@ -33,22 +33,20 @@ export interface Follow {
   show: (part: Part) => void
   /** What is asked before leaving this step; null when every piece is ready. */
   asked: () => LeavingEarly | null
-  /** These pieces go on, or all of the part. */
-  goOn: (pieces?: readonly number[]) => void
+  /** These pieces go on, or all of the part. False when that could not be kept. */
+  goOn: (pieces?: readonly number[]) => Promise<boolean>
   /** Does an act, then looks at what there is to do. */
-  doAndLook: (act: RunAct) => void
-  takeBack: () => void
+  doAndLook: (act: RunAct) => Promise<void>
+  takeBack: () => Promise<void>
 }
 
-/** Follows a run: where it stands, what there is to do now, and the acts that do it. Called in the set-up of its page. */
-export function useFollow(run: RunView, onRefused: (reason: string) => void): Follow {
+/** Follows a run: where it stands, what there is to do now, and the acts that do it. Called in the set-up of its page, in a browser. */
+export function useFollow(here: RunHere): Follow {
+  const { run } = here
   const look: Look = { body: run.body, materials: run.materials }
   const plan: RunPlan = { steps: runSteps(look, run.pieces), pieces: run.pieces }
-  const acts = useRunActs(run, onRefused)
-  const now = useState(`follow now ${run.id}`, () => Date.now())
-  if (import.meta.client) useIntervalFn(() => {
-    now.value = Date.now()
-  }, 1000, { immediateCallback: false })
+  const acts = useRunActs(here)
+  const { now, read } = useBenchClock()
 
   const state = computed(() => runState(acts.events.value))
   const parts = computed(() => partsOf(plan, state.value))
@@ -63,7 +61,7 @@ export function useFollow(run: RunView, onRefused: (reason: string) => void): Fo
   const ready = computed(() => part.value ? readiness(part.value, state.value, now.value) : { ready: [], open: [] })
 
   function lookAround() {
-    now.value = Date.now()
+    read()
     anchor.value = toDo()?.pieces[0]
   }
 
@@ -77,20 +75,18 @@ export function useFollow(run: RunView, onRefused: (reason: string) => void): Fo
       anchor.value = other.pieces[0]
     },
     asked: () => part.value ? leavingEarly(part.value, ready.value, state.value, now.value) : null,
-    goOn(pieces) {
-      if (!part.value) return
-      acts.do(...goingOn(plan, state.value, part.value, pieces ?? part.value.pieces, now.value))
-      lookAround()
+    async goOn(pieces) {
+      if (!part.value) return false
+      const isKept = await acts.do(...goingOn(plan, state.value, part.value, pieces ?? part.value.pieces, now.value))
+      if (isKept) lookAround()
+      return isKept
     },
-    doAndLook(act) {
-      acts.do(act)
-      lookAround()
+    async doAndLook(act) {
+      if (await acts.do(act)) lookAround()
     },
-    takeBack() {
+    async takeBack() {
       const last = acts.last.value
-      if (!last) return
-      acts.do({ v: 1, kind: 'taken-back', eventId: last.id })
-      lookAround()
+      if (last && await acts.do({ v: 1, kind: 'taken-back', eventId: last.id })) lookAround()
     },
   }
 }

@@ -1,10 +1,10 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
-import type { RevisionView } from '#shared/scheme/scheme-view'
+import { RevisionView } from '#shared/scheme/scheme-view'
 
 /** One revision of a finish, as it was frozen. */
 export async function useRevision(schemeId: string, number: number): Promise<{ revision: ComputedRef<RevisionView | null>, error: Ref<unknown> }> {
   const request = useRequestFetch()
-  const { data, error } = await useAsyncData(`revision ${schemeId} ${number}`, () => request(`/api/schemes/${schemeId}/revisions/${number}`), { deep: false })
+  const { data, error } = await useAsyncData(`revision ${schemeId} ${number}`, async () => RevisionView.parse(await request<unknown>(`/api/schemes/${schemeId}/revisions/${number}`)), { deep: false })
   return { revision: computed(() => data.value ?? null), error }
 }
 

@@ -1,6 +1,6 @@
 import { computed, type ComputedRef, type Ref, ref, shallowRef, watch } from 'vue'
 import { runsKey } from './run-keys'
-import type { RunListItem, RunStart } from '#shared/bench/run-view'
+import type { RunListItem, RunStartInput } from '#shared/bench/run-view'
 
 /** Runs of one kind on the page. */
 export interface Runs {
@@ -37,6 +37,6 @@ export async function useRuns(state: 'bench' | 'made'): Promise<Runs> {
 }
 
 /** Starts a run; the key makes a press that was sent twice one run. */
-export async function startRun(start: RunStart, key: string): Promise<RunListItem> {
+export async function startRun(start: RunStartInput, key: string): Promise<RunListItem> {
   return $fetch('/api/runs', { method: 'POST', body: start, headers: { 'idempotency-key': key } })
 }

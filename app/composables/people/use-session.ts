@@ -1,4 +1,5 @@
 import type { Ref } from 'vue'
+import { useLeaveDevice } from '~/composables/bench/use-leave-device'
 import type { SessionView } from '#shared/people/session'
 
 /** Who is signed in here, and what can be done about it. */
@@ -17,6 +18,7 @@ export function useSession(): UseSession {
   const session = useState<SessionView | null>('session', () => null)
   const isKnown = useState('session-is-known', () => false)
   const request = useRequestFetch()
+  const { leave } = useLeaveDevice()
 
   return {
     session,
@@ -27,6 +29,8 @@ export function useSession(): UseSession {
       isKnown.value = true
     },
     async signOut() {
+      // What the bench left on this device is private, and some of it may be nowhere else.
+      if (!await leave()) return
       await $fetch('/api/sign-out', { method: 'POST' })
       // A page loaded anew keeps nothing of what the last person saw.
       reloadNuxtApp({ path: '/sign-in', force: true })

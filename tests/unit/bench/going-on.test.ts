@@ -41,7 +41,7 @@ describe('going on', () => {
     expect(notes).toMatchObject([{ kind: 'deviation', what: 'passes', note: 'Piece 6 went on with 1 of 3 passes.', pieces: [6] }, { kind: 'step-done' }])
     const resting = [...laying([[1, 2, 3, 4, 5, 6], 3]), event(10, { v: 1, kind: 'step-done', stepId: LAY, starts: REST })]
     expect(stand(resting, 14).asked).toMatchObject({ title: 'Six pieces are still waiting', words: '1 to 6 have 2:00 to go.', split: null, all: 'Go on all the same' })
-    expect(stand(resting, 14).go()).toMatchObject([{ kind: 'deviation', what: 'wait', note: 'Went on 2 minutes early: pieces 1–6.' }, { kind: 'step-done', stepId: REST }])
+    expect(stand(resting, 14).go()).toMatchObject([{ kind: 'wait-cut', secondsLeft: 120, stepId: REST }, { kind: 'step-done', stepId: REST }])
     expect(stand(resting, 16).asked).toBeNull()
   })
 

@@ -1,0 +1,100 @@
+import { onBeforeUnmount, onMounted, ref, type Ref, shallowRef, type ShallowRef } from 'vue'
+import { useEventListener, useIntervalFn } from '@vueuse/core'
+import { fetchActs } from './bench-link'
+import { useBenchClock } from './use-bench-clock'
+import type { RunShelf } from '~/bench/device/run-shelf'
+import { problemOf } from '~/errors/problem-of'
+import { RunEventsView, type RunEventView, type RunView } from '#shared/bench/run-view'
+
+/** How often one asks what others did meanwhile: while the server tells by itself, and while it does not, ms. */
+const ASK_MS = { told: 20_000, untold: 4_000 }
+/** A stream that broke off is opened anew after this time, ms. */
+const REOPEN_MS = 8_000
+
+/** What the notebook shows of a run. */
+export interface ActsHeard {
+  heard: ShallowRef<readonly RunEventView[]>
+  headNumber: Ref<number>
+  /** Asks now. */
+  listen: () => Promise<void>
+}
+
+/** Hears what is done in a run, here and elsewhere, as it is done; keeps it on the tablet, and notices the network coming and going. */
+export function useActsHeard(run: RunView, shelf: RunShelf, { onHeard, network }: {
+  onHeard: (ids: readonly string[]) => Promise<void>
+  network: (is: 'online' | 'none') => void
+}): ActsHeard {
+  const clock = useBenchClock()
+  const heard = shallowRef<readonly RunEventView[]>(run.events)
+  const headNumber = ref(run.headNumber)
+  const since = () => heard.value.at(-1)?.seq ?? 0
+  let stream: EventSource | null = null
+  let askedAt = 0
+  /** The server has nothing more to tell by itself. */
+  let isOver = false
+
+  async function take(view: RunEventsView): Promise<void> {
+    headNumber.value = view.headNumber
+    // Another answer may have come first.
+    const fresh = view.events.filter(event => event.seq > since())
+    if (fresh.length === 0) return
+    heard.value = [...heard.value, ...fresh]
+    await shelf.hear(run.id, { events: fresh, headNumber: view.headNumber }).catch(() => undefined)
+    await onHeard(fresh.map(event => event.id))
+  }
+
+  async function listen(): Promise<void> {
+    if (document.visibilityState === 'hidden') return
+    askedAt = performance.now()
+    const asked = Date.now()
+    try {
+      const view = await fetchActs(run.id, since())
+      clock.heard(view.now, asked, Date.now())
+      await take(view)
+      network('online')
+      if (!stream) openStream()
+    }
+    catch (error) {
+      if (problemOf(error) === null) network('none')
+    }
+  }
+
+  function openStream(): void {
+    if (stream || isOver || document.visibilityState === 'hidden') return
+    const opened = new EventSource(`/api/runs/${run.id}/live?since=${since()}`)
+    stream = opened
+    opened.addEventListener('acts', (event) => {
+      const view = RunEventsView.safeParse(JSON.parse(event.data))
+      if (view.success) void take(view.data)
+    })
+    opened.addEventListener('over', () => {
+      isOver = true
+      shutStream()
+    })
+    opened.addEventListener('error', () => {
+      shutStream()
+      window.setTimeout(() => void listen(), REOPEN_MS)
+    })
+  }
+  function shutStream(): void {
+    stream?.close()
+    stream = null
+  }
+
+  onMounted(openStream)
+  onBeforeUnmount(shutStream)
+  useIntervalFn(() => {
+    if (performance.now() - askedAt >= (stream ? ASK_MS.told : ASK_MS.untold)) void listen()
+  }, 1_000)
+  useEventListener(window, 'online', () => void listen())
+  useEventListener(window, 'offline', () => {
+    shutStream()
+    network('none')
+  })
+  useEventListener(document, 'visibilitychange', () => {
+    // A page nobody sees keeps no way open.
+    if (document.visibilityState === 'hidden') shutStream()
+    else void listen()
+  })
+  return { heard, headNumber, listen }
+}
