@@ -7,34 +7,46 @@ const ROOT = join(import.meta.dirname, '../..')
 const HERE = join(ROOT, 'tests/browser-checks')
 const fromVitest = createRequire(createRequire(import.meta.url).resolve('vitest/package.json'))
 
+function testsIn(...folders: string[]): string[] {
+  return folders.flatMap(folder => readdirSync(join(ROOT, folder)).filter(file => file.endsWith('.test.ts')).sort().map(file => `${folder}/${file}`))
+}
+
 /** Tests of the optics that need nothing of Node but to read a published table. */
 export function lawFiles(): string[] {
-  const all = ['tests/reference/optics', 'tests/unit/optics'].flatMap(folder => readdirSync(join(ROOT, folder)).sort().map(file => `${folder}/${file}`))
-  return all.filter(path => path.endsWith('.test.ts')).filter(path => !/from 'node:(?!fs')/.test(readFileSync(join(ROOT, path), 'utf8')))
+  return testsIn('tests/reference/optics', 'tests/unit/optics')
+    .filter(path => !/from 'node:(?!fs')/.test(readFileSync(join(ROOT, path), 'utf8')))
 }
 
-/** Gives pages what they find elsewhere in Node. */
-const pageWorld: Plugin = {
-  name: 'page-world',
-  setup({ onLoad, onResolve }) {
-    onResolve({ filter: /^test-files$/ }, () => ({ path: 'test-files', namespace: 'made' }))
-    onLoad({ filter: /^test-files$/, namespace: 'made' }, () => ({
-      contents: `export const FILES = {${lawFiles().map(path => `${JSON.stringify(path)}: () => import(${JSON.stringify(join(ROOT, path))}),`).join('\n')}}`,
-      resolveDir: ROOT,
-    }))
-    onResolve({ filter: /^node:crypto$/ }, () => ({ path: 'node:crypto', namespace: 'made' }))
-    onLoad({ filter: /^node:crypto$/, namespace: 'made' }, () => ({ contents: 'export const randomUUID = () => crypto.randomUUID()' }))
-  },
+/** Tests that need a page with a graphics processor, played or real. */
+export function graphicsFiles(): string[] {
+  return testsIn('tests/browser-checks/graphics')
 }
 
-/** The pages of these checks as files by name, in memory. */
-export async function bundlePages(): Promise<Map<string, Uint8Array>> {
+/** What pages find elsewhere than in Node. */
+function pageWorld(): Plugin {
+  const gathered = (paths: string[]) => `export const FILES = {${paths.map(path => `${JSON.stringify(path)}: () => import(${JSON.stringify(join(ROOT, path))}),`).join('\n')}}`
+  const made: Record<string, string> = {
+    'law-files': gathered(lawFiles()),
+    'graphics-files': gathered(graphicsFiles()),
+    'node:crypto': 'export const randomUUID = () => crypto.randomUUID()',
+  }
+  return {
+    name: 'page-world',
+    setup({ onLoad, onResolve }) {
+      onResolve({ filter: /./ }, ({ path }) => path in made ? { path, namespace: 'made' } : undefined)
+      onLoad({ filter: /./, namespace: 'made' }, ({ path }) => ({ contents: made[path]!, resolveDir: ROOT }))
+    },
+  }
+}
+
+/** Scripts of pages and threads as files by name, in memory: `laws-page`. */
+export async function bundlePages(...scripts: string[]): Promise<Map<string, Uint8Array>> {
   const { outputFiles } = await build({
-    entryPoints: ['laws-page.ts', 'engines-page.ts', 'engines-worker.ts'].map(file => join(HERE, file)),
+    entryPoints: scripts.map(script => join(HERE, `${script}.ts`)),
     outdir: '/', absWorkingDir: ROOT, write: false, bundle: true, splitting: true, format: 'esm', platform: 'browser', target: 'es2022', logLevel: 'error',
-    plugins: [pageWorld],
+    plugins: [pageWorld()],
     alias: {
-      '#shared': join(ROOT, 'shared'), '#server': join(ROOT, 'server'),
+      '#shared': join(ROOT, 'shared'), '#server': join(ROOT, 'server'), '~': join(ROOT, 'app'),
       'vitest': join(HERE, 'vitest-in-page.ts'),
       'node:fs': join(HERE, 'files-in-page.ts'),
       '@vitest/runner': fromVitest.resolve('@vitest/runner'),

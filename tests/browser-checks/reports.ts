@@ -1,6 +1,7 @@
-/** How the published checks and laws went in a browser. */
-export interface LawsReport {
-  files: { path: string, tests: number, failure: string | null }[]
+/** How tests went in a browser. */
+export interface TestReport {
+  /** Paths from the root. */
+  files: string[]
   passed: number
   failures: string[]
 }

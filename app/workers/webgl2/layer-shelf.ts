@@ -15,13 +15,13 @@ export interface ShelfWay<Item> {
   format: GLenum
   width: number
   height: number
+  /** Layers it begins with. */
+  least: number
   fill: (item: Item, layer: number) => void
 }
 
-const LEAST_LAYERS = 8
-
 /** Puts up an empty shelf. When it is full, what was not used for longest makes room. */
-export function layerShelf<Item extends object>(gl: WebGL2RenderingContext, { format, width, height, fill }: ShelfWay<Item>): LayerShelf<Item> {
+export function layerShelf<Item extends object>(gl: WebGL2RenderingContext, { format, width, height, least, fill }: ShelfWay<Item>): LayerShelf<Item> {
   const most = Number(gl.getParameter(gl.MAX_ARRAY_TEXTURE_LAYERS))
   let room = 0
   let texture: WebGLTexture | undefined
@@ -33,7 +33,7 @@ export function layerShelf<Item extends object>(gl: WebGL2RenderingContext, { fo
   function grow(wanted: number): void {
     if (wanted > most) throw new RangeError(`${wanted} layers are more than the ${most} a texture has here`)
     gl.deleteTexture(texture ?? null)
-    room = Math.min(most, Math.max(LEAST_LAYERS, 2 ** Math.ceil(Math.log2(1.25 * wanted))))
+    room = Math.min(most, Math.max(least, 2 ** Math.ceil(Math.log2(1.25 * wanted))))
     texture = gl.createTexture()
     gl.bindTexture(gl.TEXTURE_2D_ARRAY, texture)
     gl.texStorage3D(gl.TEXTURE_2D_ARRAY, 1, format, width, height, room)

@@ -68,15 +68,15 @@ vec3 tonedPlain(vec3 rgb) {
   return shown / max(1.0, most(shown));
 }
 
-vec3 withGloss(vec3 rgb, float gloss) {
+vec3 withGloss(vec3 rgb, vec3 gloss) {
   float before = most(rgb);
-  float peak = before + gloss;
   vec3 sum = rgb + gloss;
+  float peak = most(sum);
   float knee = max(${glsl(KNEE)}, min(0.97, before));
   if (peak <= knee) return sum;
   float shown = shoulder(peak, knee);
-  float white = peak > 1.0 ? min(1.0, pow((peak - 1.0) / ${glsl(WHITE_AT)}, 0.8)) : 0.0;
+  float whitened = peak > 1.0 ? min(1.0, pow((peak - 1.0) / ${glsl(WHITE_AT)}, 0.8)) : 0.0;
   vec3 scaled = sum * (shown / peak);
-  return scaled + (shown - scaled) * white;
+  return scaled + (shown - scaled) * whitened;
 }
 `

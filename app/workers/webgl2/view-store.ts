@@ -1,5 +1,6 @@
 import { PART_GAP } from '#shared/blank/view-sample-lists'
-import { glossShare, type SampleForm } from '#shared/picture/paint-light'
+import type { Mirroring, SampleLight } from '#shared/picture/engine/sample-light'
+import type { SampleForm } from '#shared/picture/paint-light'
 import { layerShelf, type LayerShelf } from './layer-shelf'
 import { putSamples, ROW, rowsOf, sampleTexture, type SampleFormat } from './sample-textures'
 
@@ -7,9 +8,10 @@ import { putSamples, ROW, rowsOf, sampleTexture, type SampleFormat } from './sam
 export interface ViewStore {
   rows: number
   codes: LayerShelf<Uint8Array>
-  /** Directions and grain of a form, handed over at its first use. */
-  form: (form: SampleForm) => FormTextures
-  /** The glow, handed over when it is another than last time. */
+  mirrorings: LayerShelf<Mirroring>
+  /** What a light does at every sample, handed over when it is another than last time. */
+  lights: (light: SampleLight, form: SampleForm) => WebGLTexture
+  /** The glow, likewise. */
   glow: (light: Float32Array) => WebGLTexture
   /** Where the light is drawn, and room to read it into, four numbers for each sample. */
   target: WebGLFramebuffer
@@ -19,13 +21,15 @@ export interface ViewStore {
   free: () => void
 }
 
-/** The normals that paint is lit by, and those that the gloss follows. */
-export interface FormTextures { directions: WebGLTexture, glosses: WebGLTexture }
-
-/** Makes room for a view of so many samples. */
+/**
+ * Makes room for a view of so many samples.
+ *
+ * @throws {RangeError} when a texture here does not take as many
+ */
 export function viewStore(gl: WebGL2RenderingContext, count: number): ViewStore {
   const FOUR: SampleFormat = { internal: gl.RGBA32F, format: gl.RGBA, type: gl.FLOAT, each: 4 }
   const THREE: SampleFormat = { internal: gl.RGB32F, format: gl.RGB, type: gl.FLOAT, each: 3 }
+  const TWO: SampleFormat = { internal: gl.RG32F, format: gl.RG, type: gl.FLOAT, each: 2 }
   const CODE: SampleFormat = { internal: gl.R8UI, format: gl.RED_INTEGER, type: gl.UNSIGNED_BYTE, each: 1 }
   const rows = rowsOf(count)
   const most = Number(gl.getParameter(gl.MAX_TEXTURE_SIZE))
@@ -36,61 +40,60 @@ export function viewStore(gl: WebGL2RenderingContext, count: number): ViewStore 
   gl.bindFramebuffer(gl.FRAMEBUFFER, target)
   gl.framebufferTexture2D(gl.FRAMEBUFFER, gl.COLOR_ATTACHMENT0, gl.TEXTURE_2D, drawn, 0)
 
-  const codes = layerShelf<Uint8Array>(gl, { format: CODE.internal, width: ROW, height: rows, fill: (item, layer) => putSamples(gl, CODE, item, layer) })
-  const forms = new Map<SampleForm, FormTextures>()
-  let glowing: { light: Float32Array, texture: WebGLTexture } | undefined
+  const size = { width: ROW, height: rows }
+  const codes = layerShelf<Uint8Array>(gl, { ...size, format: CODE.internal, least: 8, fill: (item, layer) => putSamples(gl, CODE, item, layer) })
+  const mirrorings = layerShelf<Mirroring>(gl, { ...size, format: TWO.internal, least: 1, fill: (item, layer) => putSamples(gl, TWO, pairsOf(item), layer) })
+  const lights = keptTexture(gl, FOUR, rows), glow = keptTexture(gl, THREE, rows)
 
   return {
-    rows, codes, target,
+    rows, codes, mirrorings, target,
     readings: new Float32Array(4 * ROW * rows),
-    // Drawn light and its readings, two textures of directions, the glow, and codes of some twenty coats.
-    bytes: ROW * rows * (16 + 16 + 2 * 16 + 12 + 20),
-    form(form) {
-      const found = forms.get(form)
-      if (found) return found
-      const put = (values: Float32Array) => {
-        const texture = sampleTexture(gl, FOUR, rows)
-        putSamples(gl, FOUR, values)
-        return texture
-      }
-      const made = { directions: put(directionsOf(form)), glosses: put(glossesOf(form)) }
-      forms.set(form, made)
-      return made
-    },
-    glow(light) {
-      if (glowing?.light === light) return glowing.texture
-      const texture = glowing?.texture ?? sampleTexture(gl, THREE, rows)
-      gl.bindTexture(gl.TEXTURE_2D, texture)
-      putSamples(gl, THREE, light)
-      glowing = { light, texture }
-      return texture
-    },
+    // What is drawn, its readings, light and glow, two kinds of flakes, and codes of some twenty coats.
+    bytes: ROW * rows * (16 + 16 + 16 + 12 + 2 * 8 + 20),
+    lights: (light, form) => lights.of(light, () => fourOf(light, form)),
+    glow: light => glow.of(light, () => light),
     free() {
-      codes.free()
       gl.deleteFramebuffer(target)
-      for (const texture of [drawn, glowing?.texture ?? null, ...[...forms.values()].flatMap(({ directions, glosses }) => [directions, glosses])]) gl.deleteTexture(texture)
+      gl.deleteTexture(drawn)
+      for (const held of [codes, mirrorings, lights, glow]) held.free()
     },
   }
 }
 
-/** Normal across and up, light from all round, sparkle: four for each sample. */
-function directionsOf({ samples: { count, occlusion }, normal, sparkle }: SampleForm): Float32Array {
+/** A texture that holds what was made of the last source; made at its first use. */
+function keptTexture(gl: WebGL2RenderingContext, format: SampleFormat, rows: number) {
+  let texture: WebGLTexture | undefined
+  let last: object | undefined
+  return {
+    of(source: object, values: () => Float32Array): WebGLTexture {
+      texture ??= sampleTexture(gl, format, rows)
+      if (source === last) return texture
+      gl.bindTexture(gl.TEXTURE_2D, texture)
+      putSamples(gl, format, values())
+      last = source
+      return texture
+    },
+    free: () => gl.deleteTexture(texture ?? null),
+  }
+}
+
+/** Light on the paint, white added evenly, gloss, and 1 in the gap of a joint: four for each sample. */
+function fourOf({ light, even, gloss }: SampleLight, { samples: { count, part } }: SampleForm): Float32Array {
   const out = new Float32Array(4 * count)
   for (let i = 0; i < count; i++) {
-    out[4 * i] = normal[3 * i]!
-    out[4 * i + 1] = normal[3 * i + 1]!
-    out[4 * i + 2] = occlusion[i]!
-    out[4 * i + 3] = sparkle[i]!
+    out[4 * i] = light[i]!
+    out[4 * i + 1] = even ? even[i]! : 0
+    out[4 * i + 2] = gloss ? gloss[i]! : 0
+    out[4 * i + 3] = part[i] === PART_GAP ? 1 : 0
   }
   return out
 }
 
-/** Normal of the gloss and its share: four for each sample; the share is below zero in the gap of a joint. */
-function glossesOf({ samples, glossNormal }: SampleForm): Float32Array {
-  const out = new Float32Array(4 * samples.count)
-  for (let i = 0; i < samples.count; i++) {
-    out.set(glossNormal.subarray(3 * i, 3 * i + 3), 4 * i)
-    out[4 * i + 3] = samples.part[i] === PART_GAP ? -1 : glossShare(samples, i)
+function pairsOf({ strength, place }: Mirroring): Float32Array {
+  const out = new Float32Array(2 * strength.length)
+  for (let i = 0; i < strength.length; i++) {
+    out[2 * i] = strength[i]!
+    out[2 * i + 1] = place[i]!
   }
   return out
 }

@@ -1,4 +1,5 @@
-import type { LightAsk, PictureEngine } from '#shared/picture/engine/picture-engine'
+import type { PictureEngine } from '#shared/picture/engine/picture-engine'
+import { sampleLightKeep } from '#shared/picture/engine/sample-light'
 import type { ViewKit } from '#shared/picture/view-kit'
 import { coatShelves, type CoatShelves } from './coat-shelves'
 import { stackProgram, type StackProgram } from './draw-stack'
@@ -14,11 +15,9 @@ export interface Webgl2Engine extends PictureEngine {
   readonly renderer: string
   /** Whether the machine has taken the graphics processor away, for now or for good: `light` throws as long as it has. */
   isLost: () => boolean
-  /** Hears when it is taken away, and when it is there again. */
-  hearLoss: (hear: (isLost: boolean) => void) => void
 }
 
-/** Views the graphics processor holds at most of, bytes; beyond it what was not drawn for longest is let go of. */
+/** What views may take on the graphics processor, bytes; beyond it the one drawn longest ago is let go of. */
 const VIEWS_BYTES = 256 * 2 ** 20
 
 /** All that stands on the graphics processor; gone as a whole when it is taken away. */
@@ -33,30 +32,25 @@ interface Standing {
 }
 
 /**
- * Light worked out on the graphics processor: the whole stack of every sample in one go, with flakes, finish and tone; only the
- * glow is worked out beside it. Codes and tables are handed over once for as long as they stand.
+ * Light worked out on the graphics processor: the whole stack of every sample in one go, with its flakes, finish and tone. Codes,
+ * tables, what the tent does at every sample, and glow are worked out beside it and handed over once for as long as they stand.
  *
- * @param canvas of this engine's own, on a page or in a thread
+ * @param canvas     of this engine's own, on a page or in a thread
+ * @param viewsBytes what views may take on the graphics processor
  * @returns undefined where there is no WebGL 2 that draws into 32-bit numbers
  */
-export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1)): Webgl2Engine | undefined {
+export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1), viewsBytes: number = VIEWS_BYTES): Webgl2Engine | undefined {
   const gl = openContext(canvas)
   if (!gl) return undefined
-  const glow = glowKeeper()
-  const ears: ((isLost: boolean) => void)[] = []
+  const glow = glowKeeper(), samplesLit = sampleLightKeep()
   let standing: Standing | undefined
 
   const losing = (event: Event) => {
     // Without this the browser would never give it back.
     event.preventDefault()
     standing = undefined
-    for (const hear of ears) hear(true)
-  }
-  const restored = () => {
-    for (const hear of ears) hear(false)
   }
   canvas.addEventListener('webglcontextlost', losing)
-  canvas.addEventListener('webglcontextrestored', restored)
 
   function standUp(context: WebGL2RenderingContext): Standing {
     context.getExtension('EXT_color_buffer_float')
@@ -74,13 +68,13 @@ export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1)): 
     name: 'webgl2',
     renderer: rendererOf(gl),
     isLost: () => gl.isContextLost(),
-    hearLoss: hear => void ears.push(hear),
     light(kit, ask) {
       assertThere(gl)
       try {
         standing ??= standUp(gl)
-        const view = storeOf(gl, standing, kit, ask)
-        standing.program.draw(view, standing.shelves, ask, glow(kit, ask))
+        const view = storeOf(gl, standing, kit, ask.form.samples.count)
+        letGo(standing, viewsBytes)
+        standing.program.draw({ view, shelves: standing.shelves, ask, sample: samplesLit(ask.form, ask.lighting), glow: glow(kit, ask) })
         return readLight(gl, view, ask.form.samples.count)
       }
       catch (error) {
@@ -91,10 +85,7 @@ export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1)): 
     },
     close() {
       canvas.removeEventListener('webglcontextlost', losing)
-      canvas.removeEventListener('webglcontextrestored', restored)
-      for (const store of standing?.stores ?? []) store.free()
-      standing?.shelves.free()
-      standing?.program.free()
+      if (standing) for (const held of [...standing.stores, standing.shelves.films, standing.shelves.flakes, standing.program]) held.free()
       standing = undefined
       gl.getExtension('WEBGL_lose_context')?.loseContext()
     },
@@ -106,9 +97,9 @@ function assertThere(gl: WebGL2RenderingContext): void {
 }
 
 /** The store of a view, made at its first use. */
-function storeOf(gl: WebGL2RenderingContext, { views, stores, gone }: Standing, kit: ViewKit, { form }: LightAsk): ViewStore {
+function storeOf(gl: WebGL2RenderingContext, { views, stores, gone }: Standing, kit: ViewKit, count: number): ViewStore {
   const kept = views.get(kit)
-  const store = kept && stores.has(kept) ? kept : viewStore(gl, form.samples.count)
+  const store = kept && stores.has(kept) ? kept : viewStore(gl, count)
   if (store !== kept) {
     views.set(kit, store)
     gone.register(kit, store)
@@ -116,14 +107,18 @@ function storeOf(gl: WebGL2RenderingContext, { views, stores, gone }: Standing, 
   // Put in anew, so that the first of the list is the one unused for longest.
   stores.delete(store)
   stores.add(store)
+  return store
+}
+
+/** Frees the views drawn longest ago until the others fit; the last one always stays. */
+function letGo({ stores }: Standing, most: number): void {
   let bytes = [...stores].reduce((sum, each) => sum + each.bytes, 0)
   for (const oldest of stores) {
-    if (bytes <= VIEWS_BYTES || oldest === store) break
+    if (bytes <= most || stores.size === 1) return
     bytes -= oldest.bytes
     stores.delete(oldest)
     oldest.free()
   }
-  return store
 }
 
 /** Waits for the drawing and fetches it: three numbers for each sample. */

@@ -1,0 +1,127 @@
+import { describe, expect, it } from 'vitest'
+import { perch } from '../../fixtures/demo-looks'
+import { differenceOf, joined } from '../agreement/compare-light'
+import { doubleLight } from '../agreement/double-light'
+import { randomStacks } from '../agreement/random-stacks'
+import { graphicsCounts } from './graphics-counts'
+import { sparedEngine } from '~/workers/webgl2/spared-engine'
+import { webgl2Engine, type Webgl2Engine } from '~/workers/webgl2/webgl2-engine'
+import { plainEngine } from '#shared/picture/engine/plain-engine'
+import type { Look } from '#shared/picture/look'
+import { pictureBench } from '#shared/picture/picture-bench'
+
+/** Bytes: room for three views of one row of samples each, and not for four. */
+const THREE_VIEWS = 3.5 * 2048 * 96
+const SIZE = { width: 320, height: 160 }
+
+function pageCanvas(): { canvas: HTMLCanvasElement, gl: WebGL2RenderingContext } {
+  const canvas = document.createElement('canvas')
+  return { canvas, gl: canvas.getContext('webgl2')! }
+}
+
+function engineOn(canvas: HTMLCanvasElement, viewsBytes?: number): Webgl2Engine {
+  const engine = webgl2Engine(canvas, viewsBytes)
+  if (!engine) throw new Error('this browser has no WebGL 2 that draws into 32-bit numbers')
+  return engine
+}
+
+function heard(canvas: HTMLCanvasElement, event: string): Promise<unknown> {
+  return new Promise(resolve => canvas.addEventListener(event, resolve, { once: true }))
+}
+
+/** Until all who listen have heard. */
+function breath(): Promise<void> {
+  return new Promise(resolve => setTimeout(resolve))
+}
+
+/** Perch with one pass more of its coat in the middle. */
+function onePassMore(look: Look): Look {
+  const coats = look.body.stack.filter(item => item.act === 'coat')
+  const middle = coats[Math.floor(coats.length / 2)]!
+  const stack = look.body.stack.map(item => item === middle && item.act === 'coat' ? { ...item, coat: { ...item.coat, passes: item.coat.passes + 1 } } : item)
+  return { ...look, body: { ...look.body, stack } }
+}
+
+/** Greatest step between two pictures, of 255. */
+function apart(a: Uint8ClampedArray, b: Uint8ClampedArray): number {
+  return a.reduce((most, value, i) => Math.max(most, Math.abs(value - b[i]!)), 0)
+}
+
+describe('on a canvas of a page', () => {
+  it('agrees with double precision', () => {
+    const engine = engineOn(pageCanvas().canvas)
+    const difference = joined([...randomStacks()].map(({ kit, ask }) => differenceOf(engine.light(kit, ask), doubleLight(ask))))
+    engine.close()
+    expect(difference.samples).toBeGreaterThan(1000)
+    expect(difference.most).toBeLessThan(0.5)
+    expect(difference.mean).toBeLessThan(0.1)
+  })
+  it('is not offered where nothing can be drawn into 32-bit numbers', () => {
+    const { canvas, gl } = pageCanvas()
+    const { getExtension } = gl
+    gl.getExtension = ((name: string) => name === 'EXT_color_buffer_float' ? null : getExtension.call(gl, name) as unknown) as typeof getExtension
+    expect(webgl2Engine(canvas)).toBeUndefined()
+  })
+})
+
+describe('what it hands over', () => {
+  it('is nothing for the same picture again, and one table for one pass more', () => {
+    const { canvas, gl } = pageCanvas()
+    const { uploads } = graphicsCounts(gl)
+    const engine = engineOn(canvas)
+    const bench = pictureBench('edits', engine)
+    const draw = (look: Look) => void [...bench.stages(look, { ...SIZE, quality: 'coarse' })]
+    draw(perch)
+    expect(uploads()).toBeGreaterThan(10)
+    draw(perch)
+    expect(uploads()).toBe(0)
+    draw(onePassMore(perch))
+    // R, Q and what a ray keeps; for flakes their two besides.
+    expect([3, 5]).toContain(uploads())
+    engine.close()
+  })
+  it('is let go of with the views drawn longest ago, and all of it in the end', () => {
+    const { canvas, gl } = pageCanvas()
+    const { textures } = graphicsCounts(gl)
+    const engine = engineOn(canvas, THREE_VIEWS)
+    const bench = pictureBench('orders', engine)
+    const counts = Array.from({ length: 8 }, (_, turn) => {
+      bench.draw(perch, { width: 120, height: 60, roll: 45 * turn, quality: 'coarse' })
+      return textures()
+    })
+    expect(counts[7]).toBe(counts[4])
+    expect(counts[4]).toBeGreaterThan(counts[0]!)
+    engine.close()
+    expect(textures()).toBe(0)
+  })
+})
+
+describe('when the machine takes the graphics processor away', () => {
+  it('the next engine paints, and when it comes back it paints again', async () => {
+    const { canvas, gl } = pageCanvas()
+    const taken = gl.getExtension('WEBGL_lose_context')!
+    const engine = sparedEngine(engineOn(canvas), plainEngine())
+    const [bench, plain] = [pictureBench('edits', engine), pictureBench()]
+    const wish = { ...SIZE, quality: 'screen' } as const
+    const edited = onePassMore(perch)
+
+    expect(apart(bench.draw(perch, wish).rgba, plain.draw(perch, wish).rgba)).toBeLessThanOrEqual(1)
+    expect(engine.name).toBe('webgl2')
+
+    const lost = heard(canvas, 'webglcontextlost')
+    taken.loseContext()
+    // At once, before the page has heard of it.
+    expect(apart(bench.draw(edited, wish).rgba, plain.draw(edited, wish).rgba)).toBe(0)
+    await lost
+    await breath()
+    expect(apart(bench.draw(perch, wish).rgba, plain.draw(perch, wish).rgba)).toBe(0)
+    expect(engine.name).toBe('plain')
+
+    const back = heard(canvas, 'webglcontextrestored')
+    taken.restoreContext()
+    await back
+    expect(apart(bench.draw(edited, wish).rgba, plain.draw(edited, wish).rgba)).toBeLessThanOrEqual(1)
+    expect(engine.name).toBe('webgl2')
+    engine.close()
+  })
+})
