@@ -9,6 +9,7 @@ import type { SchemeDraft } from '~/composables/scheme/use-scheme-draft'
 import { type PreparedBlank, prepareBlank } from '#shared/blank/prepared-blank'
 import type { ZoneName } from '#shared/blank/zone-names'
 import type { Look } from '#shared/picture/look'
+import type { PictureSide } from '#shared/picture/picture-sides'
 import type { ZoneColour } from '#shared/picture/zone-colours'
 import type { Coat } from '#shared/scheme/coat'
 import type { SchemeEdit } from '#shared/scheme/edits'
@@ -18,10 +19,10 @@ import type { SchemeView } from '#shared/scheme/scheme-view'
 import { coatsOf } from '#shared/scheme/stack-order'
 import type { PaintListItem } from '#shared/shelf/paint-view'
 
-/** The side a blank shows, by its roll in degrees. */
-export const SIDES = [
-  { value: 0, label: 'left' }, { value: 180, label: 'right' }, { value: 90, label: 'back' }, { value: 270, label: 'belly' },
-] as const
+/** The sides a blank shows. */
+export const SIDES: readonly { value: PictureSide, label: string }[] = [
+  { value: 'left flank', label: 'left' }, { value: 'right flank', label: 'right' }, { value: 'back', label: 'back' }, { value: 'belly', label: 'belly' },
+]
 
 /** The tilt at which the promise is read: a lamp at 45° from the gloss. */
 const PROMISE_TILT = 45
@@ -48,7 +49,7 @@ export interface Build {
   zones: ShallowRef<ZoneColour[] | null>
   upTo: Ref<string>
   clear: Ref<boolean>
-  roll: Ref<number>
+  side: Ref<PictureSide>
   tilt: Ref<number>
   /** The light it is seen in, and the water it swims in. */
   seen: UseSeen
@@ -104,7 +105,7 @@ export function provideBuild(given: Pick<Build, 'scheme' | 'draft' | 'whyNot' | 
     zones: useZoneColours(() => import.meta.client ? look.value : null, () => ({ upTo: upTo.value, clear: clear.value, light: { tilt: tilt.value } })),
     upTo, clear, tilt,
     seen: useSeen(),
-    roll: ref(0),
+    side: ref<PictureSide>('left flank'),
     isSheetOpen: ref(false),
     act(edit) {
       const because = given.whyNot.value ?? draft.do(edit)

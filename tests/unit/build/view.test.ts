@@ -57,11 +57,11 @@ describe('the lamp on its arc', () => {
 describe('the ring of a zone', () => {
   const blank = prepareBlank(BUILT_IN_BLANKS[0]!)
   it('lies on the flank from the side, and is gone where the zone is turned away', () => {
-    const ring = zoneRing(blank, 'upper-flank', 0, 0.4)
+    const ring = zoneRing(blank, 'upper-flank', 'left flank', 0.4)
     expect(ring?.x).toBeGreaterThan(0.2)
     expect(ring?.y).toBeLessThan(0.6)
-    expect(zoneRing(blank, 'belly', 90, 0.4)).toBeNull()
-    expect(zoneRing(blank, 'back', 90, 0.4)).not.toBeNull()
+    expect(zoneRing(blank, 'belly', 'back', 0.4)).toBeNull()
+    expect(zoneRing(blank, 'back', 'back', 0.4)).not.toBeNull()
   })
 })
 
