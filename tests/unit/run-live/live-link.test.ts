@@ -27,7 +27,9 @@ function world() {
     later: (ms, run) => {
       const timer = { ms, run }
       seen.timers.push(timer)
-      return () => { seen.timers = seen.timers.filter(each => each !== timer) }
+      return () => {
+        seen.timers = seen.timers.filter(each => each !== timer)
+      }
     },
   })
   return { seen, link, ring: () => seen.timers.splice(0).forEach(timer => timer.run()) }
