@@ -1,6 +1,6 @@
 import { BufferAttribute, BufferGeometry, GLSL3, Matrix3, Mesh, RawShaderMaterial, Vector2, Vector3, Vector4, type IUniform, type Texture } from 'three'
-import { STRIPS_MOST } from '~/workers/webgl2/tent-source'
 import { EYE_FRAGMENT, LIP_FRAGMENT, PAINT_FRAGMENT, PART_VERTEX, WIRE_FRAGMENT } from './part-shaders'
+import { STRIPS_MOST } from './tent-source'
 import type { TurnMesh } from '#shared/picture/turn/mesh'
 
 export type Uniforms = Record<string, IUniform>
@@ -13,7 +13,7 @@ export function sharedUniforms(none: Texture) {
     cloth: { value: new Vector4() }, stripCount: { value: 0 }, tentGain: { value: 1 },
     stripPlaces: { value: Array.from({ length: STRIPS_MOST }, () => new Vector4()) },
     stripLights: { value: Array.from({ length: STRIPS_MOST }, () => new Vector2()) },
-    mattShare: { value: 0 }, glossy: { value: 1 }, groups: { value: 0 },
+    mattShare: { value: 0 }, glossy: { value: 1 }, groups: { value: 0 }, white: { value: new Vector3(1, 1, 1) },
   }
 }
 

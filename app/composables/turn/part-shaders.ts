@@ -1,8 +1,8 @@
 import { FORM } from '#shared/picture/paint-light'
 import { SHEET_COSINES } from '#shared/picture/turn/flake-groups'
-import { TENT_SOURCE } from '~/workers/webgl2/tent-source'
 import { TONE_SOURCE } from '~/workers/webgl2/tone-source'
 import { glsl } from '~/workers/webgl2/glsl-number'
+import { TENT_SOURCE } from './tent-source'
 
 /** GLSL: turns corners and normals of every part to the viewer, without perspective, as the side view sees them. */
 export const PART_VERTEX = /* glsl */ `
@@ -37,6 +37,7 @@ uniform mat3 turn;
 uniform sampler2D lightFirst;
 uniform sampler2D lightSecond;
 uniform float lightSide;
+uniform vec3 white;
 in vec3 vNormal;
 in vec2 vUv;
 in float vKept;
@@ -88,10 +89,10 @@ void main() {
     vec4 second = texture(lightSecond, tablePlace(n));
     light += second.x * form.a * rowAt(texture(near1, vUv).rgb, texture(between1, vUv).rgb, texture(far1, vUv).rgb, second.y);
   }
-  light += mattShare * (1.0 - glossy) * first.y * form.a;
+  light += white * (mattShare * (1.0 - glossy) * first.y * form.a);
   vec3 toned = tonedPaint(light);
   // Inner faces are dark and dull.
-  if (glossy > 0.5 && vKept > 0.99) toned = withGloss(toned, gloss.a * glossLight(g));
+  if (glossy > 0.5 && vKept > 0.99) toned = withGloss(toned, white * (gloss.a * glossLight(g)));
   shown = vec4(toned * vKept, 1.0);
 }
 `
@@ -107,7 +108,7 @@ void main() {
   vec3 n = normalize(vNormal);
   float light = 1.0 + ${glsl(EYE.form)} * (texture(lightFirst, tablePlace(n)).x - 1.0);
   vec3 toned = tonedPaint(texture(eye, vUv).rgb * light);
-  shown = vec4(withGloss(toned, ${glsl(EYE.shine)} * glossLight(n)), 1.0);
+  shown = vec4(white * withGloss(toned, vec3(${glsl(EYE.shine)} * glossLight(n))), 1.0);
 }
 `
 
@@ -123,14 +124,14 @@ void main() {
   float off = n.y - ${glsl(STEEL.at)};
   float light = ${glsl(STEEL.dark)} + ${glsl(STEEL.body)} * facing * (0.55 + 0.45 * n.y)
     + ${glsl(STEEL.shine)} * facing * exp(-off * off / ${glsl(STEEL.narrow)});
-  shown = vec4(vec3(light * (0.35 + 0.65 * facing)), 1.0);
+  shown = vec4(white * (light * (0.35 + 0.65 * facing)), 1.0);
 }
 `
 
 /** A clear plate darkens what lies behind it; its cut edges collect light, and it mirrors the tent. */
-const PLATE = { behind: 0.75, haze: 0.07, edge: 0.5, sheen: 0.16, cut: 0.2, mirrors: 0.35 }
+const PLATE = { behind: 0.75, haze: 0.07, edge: 0.5, sheen: 0.16, mirrors: 0.3 }
 
-/** GLSL: the lip. `uv` holds mm to the nearest edge, and 1 on the edge itself. */
+/** GLSL: the lip. `uv` holds the mm to the nearest edge, and 1 on the cut. */
 export const LIP_FRAGMENT = /* glsl */ `
 ${HEAD}
 uniform float edgeMm;
@@ -139,10 +140,8 @@ void main() {
   float flatness = abs(n.z);
   float off = vUv.x / max(edgeMm * (0.4 + 0.5 * flatness), 1e-3);
   float rim = exp(-off * off);
-  float sheen = ${glsl(PLATE.sheen)} * flatness * (0.6 + 0.4 * abs(n.y));
-  float light = mix(${glsl(PLATE.haze)} + sheen + ${glsl(PLATE.edge)} * rim, ${glsl(PLATE.haze + PLATE.cut)} + 0.25 * max(0.0, n.y), vUv.y);
-  light += ${glsl(PLATE.mirrors)} * min(1.5, glossLight(n));
-  float hides = mix(${glsl(1 - PLATE.behind)} + 0.5 * rim, 0.6, vUv.y);
-  shown = vec4(vec3(min(1.0, light)), min(1.0, hides));
+  float sheen = ${glsl(PLATE.sheen)} * flatness * (0.6 + 0.4 * abs(n.y)) * (1.0 - vUv.y);
+  float light = ${glsl(PLATE.haze)} + sheen + ${glsl(PLATE.edge)} * rim + ${glsl(PLATE.mirrors)} * min(1.5, glossLight(n));
+  shown = vec4(white * min(1.0, light), ${glsl(1 - PLATE.behind)} + 0.5 * rim);
 }
 `

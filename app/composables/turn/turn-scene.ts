@@ -26,7 +26,7 @@ export interface TurnScene {
 
 /** Goes that make a picture as fine as it gets. */
 export const GOES_MOST = 8
-/** Room before and behind the blank that is drawn, in blank lengths. */
+/** Room before and behind the blank that is drawn, in half lengths of it. */
 const DEPTH = 1.6
 
 /**
@@ -82,8 +82,7 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
         const mesh = next[name]
         if (mesh) shapeMesh(parts[name], mesh)
       }
-      const { left, right, low, high } = next.box
-      shared.pivot.value.set((left + right) / 2, (low + high) / 2, 0)
+      shared.pivot.value.set(...next.reach.pivot, 0)
       // Another blank's sheets do not fit.
       has.sheets = has.paint = false
       showParts()
@@ -113,6 +112,7 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
       shared.groups.value = paint.sigmas.length
       shared.glossy.value = paint.isGlossy ? 1 : 0
       shared.mattShare.value = paint.mattShare
+      shared.white.value.set(...paint.white)
       has.eye = paint.eye !== undefined
       has.paint = true
       showParts()
@@ -136,9 +136,9 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
       if (!form) return
       if (canvas.width !== width || canvas.height !== height) renderer.setSize(width, height, false)
       passes.resize(width, height)
-      const scale = turnScale(form.box, form.halfWidth, angles, width, height)
+      const scale = turnScale(form.reach, angles, width, height)
       shared.turn.value.set(...turnMatrix(angles))
-      shared.perMm.value.set(2 * scale / width, 2 * scale / height, 1 / (DEPTH * (form.box.right - form.box.left)))
+      shared.perMm.value.set(2 * scale / width, 2 * scale / height, 1 / (DEPTH * form.reach.long))
       shared.nudge.value.set(2 * nudge(go, 2) / width, 2 * nudge(go, 3) / height)
       parts.lip.material.uniforms.edgeMm!.value = Math.max(0.9 / scale, 0.3)
       passes.add(scene, go === 0)

@@ -1,16 +1,18 @@
-import { GAP_LIGHT } from '#shared/blank/body-sample'
 import type { Joint } from '#shared/blank/blank-shape'
 import { jointDip, jointPlace, type JointPlace } from '#shared/blank/joint-place'
 import type { PreparedBlank } from '#shared/blank/prepared-blank'
 import { newSection } from '#shared/blank/profile'
 import { newSurfacePoint, surfacePoint } from '#shared/blank/surface-point'
 import { fillSurfaceRow, newSurfaceRow, rowV, shareOfV } from '#shared/blank/surface-table'
+import { GAP_LIGHT } from '../paint-light'
 import { sheetPlace } from './body-sheet'
 import { addCorner, addQuad, finishMesh, meshDraft, type MeshDraft, type TurnMesh } from './mesh'
 
 /** Steps along a whole body, even in t, and round it. */
 const STEPS_ALONG = 150
 const STEPS_ROUND = 96
+/** Between two parts a dark web is seen in the mid-plane, this deep under the skin: in radii of the rounded edge; half as thick, mm. */
+const WEB = { deep: 1.25, kept: 0.06, half: 0.05 }
 /** Rows beside a joint, in radii of its rounded edge. */
 const EDGE_ROWS = [0.03, 0.1, 0.2, 0.35, 0.55, 0.8, 1.1] as const
 /** The meridians meet at closed ends; a hair before, each still has its direction. */
@@ -28,13 +30,15 @@ export function bodyMesh(blank: PreparedBlank): TurnMesh {
   const mesh = meshDraft()
   const joints = [...blank.shape.joints].sort((a, b) => a.x - b.x)
   const ends: End[] = [{ joint: null, t: END }, ...joints.map(joint => ({ joint, t: 0 })), { joint: null, t: 1 - END }]
-  for (let i = 0; i + 1 < ends.length; i++) addPart(blank, mesh, ends[i]!, ends[i + 1]!)
+  const rings = ends.slice(1).map((to, i) => addPart(blank, mesh, ends[i]!, to))
+  joints.forEach((joint, i) => addWeb(mesh, rings[i]!.last, rings[i + 1]!.first, WEB.deep * joint.round))
   return finishMesh(mesh)
 }
 
 interface Pen { section: ReturnType<typeof newSection>, point: ReturnType<typeof newSurfacePoint>, row: ReturnType<typeof newSurfaceRow>, joint: JointPlace }
 
-function addPart(blank: PreparedBlank, mesh: MeshDraft, from: End, to: End): void {
+/** Adds one part. @returns the first corners of its first and its last ring */
+function addPart(blank: PreparedBlank, mesh: MeshDraft, from: End, to: End): { first: number, last: number } {
   const pen: Pen = { section: newSection(), point: newSurfacePoint(), row: newSurfaceRow(), joint: { distance: Infinity, round: 1, towardX: 0, towardY: 0 } }
   const angles = Array.from({ length: STEPS_ROUND + 1 }, (_, k) => 2 * Math.PI * k / STEPS_ROUND)
   const starts = angles.map(phi => edgeAt(blank, pen, from, phi, 1))
@@ -52,7 +56,9 @@ function addPart(blank: PreparedBlank, mesh: MeshDraft, from: End, to: End): voi
     }
   }
   addEnd(mesh, first, -1, from.joint ? GAP_LIGHT : 1)
-  addEnd(mesh, first + (rows.length - 1) * width, 1, to.joint ? GAP_LIGHT : 1)
+  const last = first + (rows.length - 1) * width
+  addEnd(mesh, last, 1, to.joint ? GAP_LIGHT : 1)
+  return { first, last }
 }
 
 /** Where a part ends on the meridian of φ; `way` 1 for its end toward the nose. */
@@ -103,12 +109,39 @@ function addSkin({ profile, table, shape }: PreparedBlank, mesh: MeshDraft, { se
   })
 }
 
+const placeOf = ({ position }: MeshDraft, corner: number) => [0, 1, 2].map(c => position[3 * corner + c]!) as [number, number, number] // three by the list
+
+function middleOf(mesh: MeshDraft, ring: number): [number, number, number] {
+  const middle: [number, number, number] = [0, 0, 0]
+  for (let k = 0; k < STEPS_ROUND; k++) placeOf(mesh, ring + k).forEach((value, c) => middle[c]! += value / STEPS_ROUND)
+  return middle
+}
+
+/** Joins the rings on both sides of a gap by a thin web that ends `deep` mm under the skin, so that one does not look through. */
+function addWeb(mesh: MeshDraft, from: number, to: number, deep: number): void {
+  const middles = [from, to].map(ring => middleOf(mesh, ring)) as [number[], number[]] // two by the list
+  const inner = [from, to].map((ring, end) => {
+    const first = mesh.kept.length
+    for (let k = 0; k <= STEPS_ROUND; k++) {
+      const at = placeOf(mesh, ring + k), out = at.map((value, c) => value - middles[end]![c]!)
+      const size = Math.hypot(...out)
+      const share = 1 - Math.min(0.6, deep / Math.max(1e-6, size))
+      const side = Math.sign(out[2]!)
+      addCorner(mesh, {
+        at: [at[0], middles[end]![1]! + share * out[1]!, side * WEB.half],
+        normal: [0, side === 0 ? Math.sign(out[1]!) : 0, side], uv: [mesh.uv[2 * (ring + k)]!, mesh.uv[2 * (ring + k) + 1]!], kept: WEB.kept, own: 1,
+      })
+    }
+    return first
+  }) as [number, number]
+  for (let k = 0; k < STEPS_ROUND; k++) addQuad(mesh, inner[0] + k, inner[0] + k + 1, inner[1] + k + 1, inner[1] + k)
+}
+
 /** Closes a ring of skin with a flat face; it keeps the paint of the ring. */
 function addEnd(mesh: MeshDraft, ring: number, way: 1 | -1, kept: number): void {
-  const at = (k: number) => [0, 1, 2].map(c => mesh.position[3 * (ring + k) + c]!) as [number, number, number] // three by the list
+  const at = (k: number) => placeOf(mesh, ring + k)
   const uvOf = (k: number) => [mesh.uv[2 * (ring + k)]!, mesh.uv[2 * (ring + k) + 1]!] as const
-  const middle = [0, 0, 0] as [number, number, number]
-  for (let k = 0; k < STEPS_ROUND; k++) at(k).forEach((value, c) => middle[c]! += value / STEPS_ROUND)
+  const middle = middleOf(mesh, ring)
   for (let k = 0; k < STEPS_ROUND; k++) {
     const corners = [[middle, uvOf(k)], [at(k), uvOf(k)], [at(k + 1), uvOf(k + 1)]] as const
     const [a, b, c] = corners.map(([place, uv]) => addCorner(mesh, { at: place, normal: [way, 0, 0], uv, kept, own: 1 })) as [number, number, number] // three by the list

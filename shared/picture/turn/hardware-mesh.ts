@@ -75,7 +75,7 @@ function joinRings(mesh: MeshDraft, first: number, rings: number, round: number)
   }
 }
 
-/** A diving lip: a plate with rounded corners. `uv` holds the mm to its nearest edge, and 1 on the cut edge itself. */
+/** A diving lip: a plate with rounded corners. `uv` holds the mm to the nearest edge of the face, or of the cut, which it marks with 1. */
 export function lipMesh(lip: Lip): TurnMesh {
   const mesh = meshDraft()
   const angle = radians(lip.angle)
@@ -111,8 +111,8 @@ export function lipMesh(lip: Lip): TurnMesh {
     if (size === 0) return
     const out = [ez / size, -ex / size] as const
     const normal: Vector = [out[0] * along[0], out[0] * along[1], out[1]]
-    const corner = (p: readonly [number, number], way: number) => addCorner(mesh, { at: at(p, way), normal, uv: [0, 1] })
-    addQuad(mesh, corner(place, 1), corner(next, 1), corner(next, -1), corner(place, -1))
+    const corner = (p: readonly [number, number], way: number) => addCorner(mesh, { at: at(p, way), normal, uv: [(1 - Math.abs(way)) * lip.thickness / 2, 1] })
+    for (const way of [1, 0]) addQuad(mesh, corner(place, way), corner(next, way), corner(next, way - 1), corner(place, way - 1))
   })
   return finishMesh(mesh)
 }

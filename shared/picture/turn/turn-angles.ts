@@ -1,4 +1,4 @@
-import type { SideBox } from '#shared/blank/fit-view'
+import type { TurnReach } from './turn-form'
 
 /** How far a blank is turned from its side view, degrees. */
 export interface TurnAngles {
@@ -44,12 +44,15 @@ function cosine(degrees: number): number {
 const BORDER = 0.06
 
 /** Pixels for each mm at which a turned blank fills a picture and never leaves it: at no turn exactly the side view's. */
-export function turnScale(box: SideBox, halfWidth: number, { turn, tip }: TurnAngles, width: number, height: number): number {
+export function turnScale({ long, tall, wide, tips }: TurnReach, angles: TurnAngles, width: number, height: number): number {
   const border = 2 * BORDER * Math.min(width, height)
-  const [long, tall] = [(box.right - box.left) / 2, (box.high - box.low) / 2]
-  const [c, s, d, e] = [turn, turn - 90, tip, tip - 90].map(angle => Math.abs(cosine(angle))) as [number, number, number, number] // four in the list
-  const across = long * c + halfWidth * s
-  const up = tall * d + (long * s + halfWidth * c) * e
-  const most = Math.max(1e-3, Math.min((width - border) / (2 * long), (height - border) / (2 * Math.max(tall, halfWidth))))
-  return Math.min(most, (width - border) / (2 * across), (height - border) / (2 * up))
+  const [xx, xy, xz, yx, yy, yz] = turnMatrix(angles)
+  let [across, up] = [0, 0]
+  for (let i = 0; i < tips.length; i += 3) {
+    const x = tips[i]!, y = tips[i + 1]!, z = tips[i + 2]!
+    across = Math.max(across, Math.abs(xx * x + xy * y + xz * z))
+    up = Math.max(up, Math.abs(yx * x + yy * y + yz * z))
+  }
+  const most = Math.min((width - border) / (2 * long), (height - border) / (2 * Math.max(tall, wide)))
+  return Math.max(1e-3, Math.min(most, (width - border) / (2 * across), (height - border) / (2 * up)))
 }

@@ -1,12 +1,12 @@
 import { prepareBlank, type PreparedBlank } from '#shared/blank/prepared-blank'
 import type { ViewSamples } from '#shared/blank/view-sample-lists'
 import { groundFromLab } from '#shared/optics/known-film'
+import { seenKey, seenLight, type SeenLight } from '#shared/optics/seen-light'
 import { VEIL } from '#shared/optics/surface'
 import { toPictureBands } from '#shared/optics/to-picture-bands'
 import { canonicalJson } from '#shared/scheme/canonical'
 import { coatTable, type CoatTable } from '../coat-table'
 import { depositKeep, depositMap, type DepositKeep, type DepositMap } from '../deposit-map'
-import type { SeenLight } from '../engine/seen-daylight'
 import { keepSome } from '../keep-some'
 import { lightKey } from '../light-rig'
 import { lightTables, type LightTables } from '../light-tables'
@@ -24,7 +24,7 @@ import { paintSheet, type HalfSheet, type PaintSheet } from './paint-sheet'
 import { turnForm, type TurnForm } from './turn-form'
 
 /** What of a look is shown. */
-export type TurnWish = Pick<PictureOptions, 'upTo' | 'clear'> & { seen: SeenLight }
+export type TurnWish = Pick<PictureOptions, 'upTo' | 'clear' | 'seen'>
 
 /** A sheet ready for a graphics card. */
 export interface PaintedSheet extends SheetSize { paint: PaintSheet }
@@ -41,6 +41,8 @@ export interface TurnPaint {
   isGlossy: boolean
   /** Share of the matt reflection when it is not. */
   mattShare: number
+  /** What a perfect white looks like in the light it is seen by, linear sRGB. */
+  white: readonly [number, number, number]
 }
 
 /** A body sheet never has more texels than this, whatever is asked for: graphics cards of phones hold it. */
@@ -67,7 +69,7 @@ export function turnBench(): TurnBench {
   const blanks = keepSome<BlankKit>(KEPT.blanks)
   const kits = keepSome<{ body: SheetKit, fins: SheetKit | undefined }>(KEPT.sheets)
   const tables = keepSome<CoatTable>(KEPT.tables)
-  const lights = keepSome<LightTables>(KEPT.lights)
+  const lights = keepSome<LightTables>(KEPT.lights), seens = keepSome<SeenLight>(KEPT.lights)
 
   function blankOf({ materials: { blank: { shape } } }: Look): BlankKit {
     const key = canonicalJson(shape)
@@ -86,7 +88,7 @@ export function turnBench(): TurnBench {
     }))
   }
 
-  function* paintOn(kit: SheetKit, look: Look, wish: TurnWish, shown: readonly ShownCoat[]): Generator<undefined, PaintedSheet, undefined> {
+  function* paintOn(kit: SheetKit, look: Look, seen: SeenLight, shown: readonly ShownCoat[]): Generator<undefined, PaintedSheet, undefined> {
     const coats = []
     for (const coat of shown) {
       const { codes, peak } = kit.maps(coat.placeKey, () => depositMap(kit.keep, coat.laid))
@@ -96,7 +98,7 @@ export function turnBench(): TurnBench {
     }
     const { colour, finish } = look.body.ground
     const { width, height, count } = kit.samples
-    const paint = yield* paintSheet(count, { coats, ground: toPictureBands(groundFromLab(colour, finish)), sparkle: kit.sparkle, seen: wish.seen })
+    const paint = yield* paintSheet(count, { coats, ground: toPictureBands(groundFromLab(colour, finish)), sparkle: kit.sparkle, seen })
     return { width, height, paint }
   }
 
@@ -115,15 +117,16 @@ export function turnBench(): TurnBench {
       const shown = shownCoats(look, wish)
       const { body, fins } = kitOf(look, scale)
       yield undefined
-      const onBody = yield* paintOn(body, look, wish, shown)
-      const onFins = fins && (yield* paintOn(fins, look, wish, shown))
+      const seen = seens(seenKey(wish.seen), () => seenLight(wish.seen))
+      const onBody = yield* paintOn(body, look, seen, shown)
+      const onFins = fins && (yield* paintOn(fins, look, seen, shown))
       const finish = finishShown(look, wish)
       const { eyes } = look.body
       return {
         body: onBody, fins: onFins,
         eye: eyes && eyesAreFitted(look, wish.upTo) ? eyeSheet(eyes, lights('bench', () => lightTables('bench'))) : undefined,
         sigmas: onBody.paint.flakes.map(({ sigma }) => sigma),
-        isGlossy: finish === 'gloss', mattShare: MATT_SHARE * VEIL[finish] / VEIL.matt,
+        isGlossy: finish === 'gloss', mattShare: MATT_SHARE * VEIL[finish] / VEIL.matt, white: seen.white,
       }
     },
     light: (light, sigmas) => lightSheet(lights(lightKey(light), () => lightTables(light)), sigmas),
