@@ -1,5 +1,5 @@
 import type { FinOutline } from './fin-outline'
-import { jointDip, jointPlace, jointShade, jointTilt, type JointPlace } from './joint-place'
+import { gapLight, jointDip, jointPlace, jointShade, jointTilt, type JointPlace } from './joint-place'
 import type { PreparedBlank } from './prepared-blank'
 import { reliefOf, reliefPlace, type Relief, type ReliefPlace } from './relief'
 import { newSurfacePoint, surfacePoint, type SurfacePoint } from './surface-point'
@@ -117,14 +117,14 @@ export function writeBodySample(sampler: BodySampler, height: number, samples: V
     light *= 1 - jointShade(joint)
     if (joint.distance < 0) {
       samples.part[i] = PART_GAP
-      light = GAP_LIGHT
+      light = gapLight(joint)
     }
   }
   samples.occlusion[i] = light
 
   // Rounded joint edges are part of the body's form; carving is filled by the clear.
-  const jx = point.nx + tilt * joint.towardX * (tilt > 0 ? 1 : 0)
-  const jy = point.ny + tilt * joint.towardY * (tilt > 0 ? 1 : 0)
+  const jx = point.nx + tilt * joint.towardX
+  const jy = point.ny + tilt * joint.towardY
   const along = 1 / Math.sqrt(section.xt * section.xt + point.yt * point.yt + point.zt * point.zt)
   const cx = relief.slopeTail * section.xt * along + relief.slopeX
   const cy = relief.slopeTail * point.yt * along + relief.slopeY

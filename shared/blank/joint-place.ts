@@ -41,11 +41,22 @@ export function jointDip(place: JointPlace): number {
   return DIP * place.round * (1 - Math.sqrt(1 - s * s))
 }
 
-/** Tilt of the normal toward the gap on the rounded edge; 0 away from it. */
+/** The walls of a gap stand across the body: how far they tilt the normal. */
+const WALL_TILT = 2.4
+/** Light deep in a gap and at its edges, against the gap's own, and how deep light reaches, mm. Chosen by eye. */
+const GAP = { deep: 0.2, edge: 0.9, reach: 0.16 }
+
+/** Tilt of the normal toward the gap on the rounded edge and on the walls inside; 0 away from it. */
 export function jointTilt(place: JointPlace): number {
-  if (place.distance >= place.round || place.distance < 0) return 0
+  if (place.distance >= place.round) return 0
+  if (place.distance < 0) return WALL_TILT
   const s = Math.min(0.96, 1 - place.distance / place.round)
   return s / Math.sqrt(1 - s * s)
+}
+
+/** Light that still reaches the walls of a gap: most at its edges, so that it ends softly and not like a drawn line. */
+export function gapLight(place: JointPlace): number {
+  return GAP.deep + (GAP.edge - GAP.deep) * Math.exp(Math.min(0, place.distance) / GAP.reach)
 }
 
 /** Share of the light from all round that the gap takes away beside it. */

@@ -26,9 +26,11 @@ export interface ReliefPlace {
 
 const STEP_SLOPE = 0.75
 const GROOVE_SLOPE = 0.5
-const GILL_SHADE = 0.5
-const SECOND_SHADE = 0.42
-const MOUTH_SHADE = 0.5
+/** Light a carved line loses: in the crease itself, and softly round it. How wide both are, in half widths of the line. */
+const CREASE = { width: 0.34, round: 1.15 }
+const GILL_SHADE = { crease: 0.5, round: 0.3 }
+const SECOND_SHADE = { crease: 0.3, round: 0.22 }
+const MOUTH_SHADE = { crease: 0.55, round: 0.28 }
 const SOCKET_SHADE = 0.5
 /** The second line lies this far before the gill edge, share of the length, and is shorter at both ends. */
 const SECOND_BEFORE = 0.068
@@ -55,6 +57,12 @@ function fadedEnds(k: number): number {
   return f * f * (3 - 2 * f)
 }
 
+/** Light kept at a distance from a crease, in half widths of the line; `deep` is how much of it is carved here. */
+function kept(shade: { crease: number, round: number }, deep: number, off: number): number {
+  const narrow = off / CREASE.width, wide = off / CREASE.round
+  return (1 - shade.crease * deep * Math.exp(-narrow * narrow)) * (1 - shade.round * deep * Math.exp(-wide * wide))
+}
+
 function addGill(relief: Relief, u: number, v: number, out: ReliefPlace): void {
   const { gill, length } = relief.shape
   const edge = gillEdge(gill, v)
@@ -64,15 +72,14 @@ function addGill(relief: Relief, u: number, v: number, out: ReliefPlace): void {
     const d = (u - edge) * length / relief.line
     out.slopeTail += STEP_SLOPE * step * Math.exp(-d * d / 2)
     // The shade lies at the foot of the step, just behind it.
-    const foot = d - 0.7
-    out.light *= 1 - GILL_SHADE * step * Math.exp(-foot * foot / 1.2)
+    out.light *= kept(GILL_SHADE, step, d - 0.62)
   }
   const second = fadedEnds((k - SECOND_SHORTER) / (1 - 2 * SECOND_SHORTER))
   if (second > 0) {
     const d = (u - edge + SECOND_BEFORE) * length / (0.8 * relief.line)
     const bell = Math.exp(-d * d / 2)
     out.slopeTail -= GROOVE_SLOPE * second * d * bell * 1.6
-    out.light *= 1 - SECOND_SHADE * second * bell
+    out.light *= kept(SECOND_SHADE, second, d)
   }
 }
 
@@ -97,7 +104,7 @@ function addMouth(relief: Relief, x: number, y: number, out: ReliefPlace): void 
   const bell = Math.exp(-q / 2)
   out.slopeX -= GROOVE_SLOPE * fade * bell * 1.6 * dx / width
   out.slopeY -= GROOVE_SLOPE * fade * bell * 1.6 * dy / width
-  out.light *= 1 - MOUTH_SHADE * fade * bell
+  out.light *= kept(MOUTH_SHADE, fade, Math.sqrt(q))
 }
 
 /** What carving does at a place of the skin: (x, y, z) mm with z ≥ 0, and its shares (u, v). */

@@ -3,7 +3,7 @@ import type { DepositKeep } from './deposit/keep'
 import { layCoat } from './deposit/lay-coat'
 import { rootCoded, type DepositMap } from './deposit/root-code'
 
-export { depositKeep, type DepositKeep } from './deposit/keep'
+export { depositKeep, grazingBlur, type DepositKeep } from './deposit/keep'
 export { depositOf, type DepositMap } from './deposit/root-code'
 
 /**

@@ -12,11 +12,17 @@ import { addGloss, tonePaint } from './tone'
 const FINE = 4
 /** Where the pupil ends and the dark rim begins, shares of the radius; how much longer the pupil is toward the nose. */
 const PUPIL = 0.47
-const RIM = 0.8
+const RIM = 0.87
 const TOWARD_NOSE = 0.06
 /** The lens throws light through the iris to its far side: darker above, brighter below. */
-const LENS = 0.42
-const STREAKS = 0.28
+const LENS = 0.34
+/** Fibres of the foil: how many stand round the pupil, how strong, and how much farther out they vary. Chosen by eye. */
+const FIBRES = [{ around: 7, strength: 0.10 }, { around: 19, strength: 0.13 }, { around: 44, strength: 0.10 }] as const
+/** Foil drawn out from the pupil shines in a bow across the lamp. */
+const BOW = { strength: 0.3, toward: 1.15 }
+/** Light gathered by the lens on the side away from the lamp, and the shade of the socket's brow on the other. */
+const GATHERED = { strength: 0.55, at: 0.68, width: 0.13 }
+const BROW = { strength: 0.5, from: 0.35 }
 /** Foil behind a dome sees less of the tent than paint does. */
 const FOIL = 0.78
 /** An eye is polished: its highlight outshines the clear round it. */
@@ -72,16 +78,22 @@ function eyeLight(eye: DrawnEye, colours: EyeColours, a: number, b: number, soft
   const size = Math.hypot(x, y, z)
   const light = plain ? 1 : 1 + 0.5 * (atNormal(tables.irradiance, x / size, y / size) - 1)
 
-  const angle = Math.atan2(b, a)
-  const streak = 1 + STREAKS * noise2(9 * Math.cos(angle), 9 * Math.sin(angle), 5) * 0.5
-    + STREAKS * noise2(22 * Math.cos(angle), 22 * Math.sin(angle) + 3 * q, 9) * 0.4
+  const [ca, cb] = q > 0 ? [a / q, b / q] : [1, 0]
+  let streak = 1
+  FIBRES.forEach(({ around, strength }, k) => {
+    // Fibres end at different lengths: the pattern drifts as it runs out.
+    streak += strength * noise2(around * ca + 2.2 * q, around * cb - 1.6 * q, 5 + 4 * k)
+  })
+  streak *= 1 + BOW.strength * ((ca * Math.cos(BOW.toward) + cb * Math.sin(BOW.toward)) ** 2 - 0.5)
   const along = a < 0 ? a / (1 + TOWARD_NOSE) : a
   const toPupil = smooth(PUPIL + soft, PUPIL - soft, Math.hypot(along, b))
-  const toRim = smooth(RIM - 0.02, RIM + 0.13, q)
+  const toRim = smooth(RIM - 0.05, RIM + 0.11, q)
   // A fine bright ring where the foil turns in to the pupil, and a dark seat round the whole eye.
   const ring = 1 + 0.35 * Math.exp(-(((q - PUPIL - 0.05) / 0.05) ** 2))
-  const seat = 1 - 0.75 * smooth(0.93, 1, q)
-  const foil = FOIL * streak * ring * (1 - LENS * b) * (0.9 + 0.3 * smooth(0.5, 0.75, q))
+  const seat = 1 - 0.6 * smooth(0.94, 1, q)
+  const gathered = GATHERED.strength * Math.exp(-(((q - GATHERED.at) / GATHERED.width) ** 2)) * Math.max(0, -cb) ** 2
+  const brow = 1 - BROW.strength * smooth(BROW.from, 1, b) * smooth(PUPIL, 1, q)
+  const foil = FOIL * streak * ring * brow * (1 - LENS * b + gathered) * (0.88 + 0.24 * smooth(0.5, 0.75, q))
   for (let c = 0; c < 3; c++) {
     const iris = colours.iris[c]! * foil
     const ringed = iris + (colours.rim[c]! - iris) * toRim

@@ -6,7 +6,7 @@ type Put = typeof layOver
 /** Bright wire against the light of a white surface, and the one highlight it carries. Chosen by eye. */
 const STEEL = { dark: 0.045, body: 0.36, shine: 0.85, narrow: 0.055 }
 /** A clear plate darkens what lies behind it; its cut edges collect light. */
-const PLATE = { behind: 0.75, haze: 0.07, edge: 0.5, sheen: 0.16, round: 0.07 }
+const PLATE = { behind: 0.7, haze: 0.055, edge: 0.62, shade: 0.16, sheen: 0.16, round: 0.07, across: 0.075, inner: 0.35 }
 /** Wire is drawn stouter than it is, or it would vanish beside the body. */
 const STOUT = 1.7
 
@@ -85,11 +85,31 @@ function drawLip(canvas: Canvas, { corners, edge, flatness, facing, isInFront }:
     const inside = insideOf(ring, x, y, PLATE.round * narrow)
     const share = Math.min(1, Math.max(0, inside + 0.5))
     if (share <= 0) return
-    const rim = Math.exp(-((inside / Math.max(0.9, (0.4 + 0.5 * flatness) * edge)) ** 2))
-    const hidden = 1 - PLATE.behind + 0.5 * rim
-    const light = share * (PLATE.haze + sheen + PLATE.edge * rim)
+    const wide = Math.max(0.9, (0.4 + 0.5 * flatness) * edge)
+    const rim = Math.exp(-((inside / wide) ** 2))
+    const up = upwardOf(ring, x, y)
+    // Just inside an edge the plate shows what lies beside it, darker; across it the tent's cloth runs from floor to sky.
+    const inner = PLATE.inner * Math.exp(-(((inside - 2.2 * wide) / (1.3 * wide)) ** 2)) * (1 - flatness)
+    const cloth = PLATE.haze + sheen + PLATE.across * (0.5 + 0.5 * up) * Math.min(1, inside / (4 * wide))
+    const hidden = Math.min(1, 1 - PLATE.behind + 0.5 * rim + 0.4 * inner)
+    const light = share * (cloth * (1 - inner) + rim * (PLATE.shade + (PLATE.edge - PLATE.shade) * (0.5 + 0.5 * up) ** 2))
     put(canvas, pixel, share * hidden, light, light, light)
   })
+}
+
+/** How far up the nearest side of a convex outline looks, -1 down to 1 up; sides change over softly toward the middle. */
+function upwardOf(ring: readonly PicturePoint[], x: number, y: number): number {
+  let [sum, weight] = [0, 0]
+  ring.forEach((from, i) => {
+    const to = ring[(i + 1) % ring.length]!
+    const length = Math.max(1e-6, Math.hypot(to[0] - from[0], to[1] - from[1]))
+    const side = Math.max(0.5, ((to[0] - from[0]) * (y - from[1]) - (to[1] - from[1]) * (x - from[0])) / length)
+    // Outward of a side that runs clockwise, down being +.
+    const share = 1 / (side * side)
+    sum += share * (to[0] - from[0]) / length
+    weight += share
+  })
+  return sum / weight
 }
 
 /** Distance to the sides of a convex outline, + inside; `round` pixels soften its corners. */

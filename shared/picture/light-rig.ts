@@ -24,26 +24,32 @@ export interface LightRig {
 }
 
 /** Centre, radius and softness of the hole the camera looks through, degrees; and the light it leaves. */
-export const HOLE = { elevation: 15, radius: 9, edge: 4, left: 0.4 }
+export const HOLE = { elevation: 15, radius: 9, edge: 6, left: 0.7 }
 
-const RIM = { elevation: 108, azimuth: 0, halfHeight: 5, halfWidth: 48, edge: 3 }
-const CARD: Strip = { elevation: -40, azimuth: 0, halfHeight: 10, halfWidth: 60, edge: 7, radiance: 0.95 }
+// Light from behind is a breath along the back: a second hard line beside the key's would look ruled.
+const RIM = { elevation: 108, azimuth: 0, halfHeight: 6, halfWidth: 40, edge: 6 }
+const CARD: Strip = { elevation: -40, azimuth: 0, halfHeight: 11, halfWidth: 60, edge: 11, radiance: 0.55 }
 /** A lamp behind cloth is seen with a soft glow round it, at this share of its radiance. Chosen by eye. */
 const GLOW = { halfHeight: 12, edge: 10, share: 0.055 }
+/**
+ * The lit cloth is brightest before the tube itself: share of the key's radiance that lies in this core, how much smaller it is
+ * across and along, and how far above the middle it hangs, as a share of the key's own height. Chosen by eye.
+ */
+const CORE = { share: 0.5, across: 0.4, along: 0.8, edge: 1.3, up: 0.18 }
 
 interface Setting { overhead: number, horizon: number, floor: number, key: Strip, glow: number, rim: number, card: number }
 
 // Narrow and bright looks like epoxy; twice as high and half as bright looked like a drawing.
 const BENCH: Setting = {
-  overhead: 0.36, horizon: 0.26, floor: 0.62, glow: 1, rim: 7, card: 1,
+  overhead: 0.36, horizon: 0.26, floor: 0.62, glow: 1, rim: 3.4, card: 1,
   key: { elevation: 47, azimuth: -8, halfHeight: 3.4, halfWidth: 50, edge: 1.7, radiance: 19 },
 }
 const FACE: Setting = {
-  overhead: 0.20, horizon: 0.15, floor: 0.30, glow: 0, rim: 5, card: 0,
+  overhead: 0.20, horizon: 0.15, floor: 0.30, glow: 0, rim: 2.4, card: 0,
   key: { elevation: 20, azimuth: -8, halfHeight: 5, halfWidth: 40, edge: 1.7, radiance: 15 },
 }
 const FLOP: Setting = {
-  overhead: 0.13, horizon: 0.10, floor: 0.10, glow: 0, rim: 5, card: 0,
+  overhead: 0.13, horizon: 0.10, floor: 0.10, glow: 0, rim: 2.4, card: 0,
   key: { elevation: 34, azimuth: 70, halfHeight: 40, halfWidth: 6.5, edge: 1.7, radiance: 17 },
 }
 /** The tilt at which the arc passes the bench lamp, degrees. */
@@ -104,10 +110,23 @@ function between(a: Setting, b: Setting, share: number): Setting {
 }
 
 function rigOf({ overhead, horizon, floor, key, glow, rim, card }: Setting): LightRig {
-  const strips = [key, { ...RIM, radiance: rim }]
+  const strips = [...keyStrips(key), { ...RIM, radiance: rim }]
   if (glow > 0) strips.push({ ...key, halfHeight: GLOW.halfHeight, edge: GLOW.edge, radiance: GLOW.share * glow * key.radiance })
   if (card > 0) strips.push({ ...CARD, radiance: CARD.radiance * card })
   return { overhead, horizon, floor, strips, hole: HOLE.left }
+}
+
+/** The key as it is seen: its cloth, and the brighter core in it. Together they send what the key's radiance says. */
+function keyStrips(key: Strip): Strip[] {
+  // A strip that turns upright is narrow the other way.
+  const lying = key.halfWidth / (key.halfWidth + key.halfHeight)
+  const shrunk = (isAcross: number) => CORE.along + (CORE.across - CORE.along) * isAcross
+  const [high, wide] = [shrunk(lying), shrunk(1 - lying)]
+  const core: Strip = {
+    ...key, edge: CORE.edge, halfHeight: key.halfHeight * high, halfWidth: key.halfWidth * wide,
+    elevation: key.elevation + CORE.up * key.halfHeight * lying, radiance: CORE.share * key.radiance / (high * wide),
+  }
+  return [{ ...key, radiance: (1 - CORE.share) * key.radiance }, core]
 }
 
 function smooth(from: number, to: number, x: number): number {

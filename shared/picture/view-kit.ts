@@ -4,7 +4,7 @@ import { drawnParts, type DrawnEye, type DrawnParts } from '#shared/blank/draw-p
 import type { View } from '#shared/blank/view'
 import type { CoatTable } from './coat-table'
 import type { LaidTable } from './compose'
-import { depositKeep, type DepositKeep } from './deposit/keep'
+import { depositKeep, grazingBlur, type DepositKeep } from './deposit/keep'
 import { depositMap, type DepositMap } from './deposit-map'
 import type { SampleForm } from './paint-light'
 import type { ShownCoat } from './shown-coats'
@@ -29,7 +29,7 @@ export function viewKit(blank: PreparedBlank, view: View, samples: ViewSamples):
   const parts = drawnParts(blank, view)
   const form: SampleForm = { samples, normal: samples.normal, glossNormal: wavyNormals(samples), sparkle: sparkleNoise(samples) }
   const blindForm = { ...form, normal: domed(samples, parts.eyes, samples.normal), glossNormal: domed(samples, parts.eyes, form.glossNormal) }
-  return { samples, parts, form, blindForm, keep: depositKeep(samples, blank), maps: new Map() }
+  return { samples, parts, form, blindForm, keep: depositKeep(samples, blank, grazingBlur(samples)), maps: new Map() }
 }
 
 /** Normals with the domes of the eyes standing out of the flank. */

@@ -30,6 +30,8 @@ export interface DepositKeep {
   readonly onFins: Uint32Array
   /** mm of one pixel. */
   readonly pixel: number
+  /** Reach of a sample beyond what it would cover of skin that faces the viewer, mm: what is finer blurs. */
+  readonly blur: Float32Array
   /** Work space, one value per sample. */
   readonly deposit: Float32Array
   readonly zone: Float32Array
@@ -40,8 +42,12 @@ export interface DepositKeep {
   specks: Specks | null
 }
 
-/** Prepares a list of samples of a prepared blank: a whole view, or a few pixels of it four times over. */
-export function depositKeep(samples: ViewSamples, blank: PreparedBlank): DepositKeep {
+/**
+ * Prepares a list of samples of a prepared blank: a whole view, or a few pixels of it four times over.
+ *
+ * @param blur reach of each sample over skin that turns away, `grazingBlur` for a view; absent, samples lie straight on the skin
+ */
+export function depositKeep(samples: ViewSamples, blank: PreparedBlank, blur: Float32Array = new Float32Array(samples.count)): DepositKeep {
   const { count, part, u, v, U, V, side } = samples
   const { gill, length } = blank.shape
   const [girth, ahead, toBack, dither] = [0, 1, 2, 3].map(() => new Float32Array(count)) as [Float32Array, Float32Array, Float32Array, Float32Array] // four made above
@@ -66,10 +72,24 @@ export function depositKeep(samples: ViewSamples, blank: PreparedBlank): Deposit
   return {
     samples, blank, girth, ahead, toBack, dither,
     onBody: Uint32Array.from(body), onFins: Uint32Array.from(fins),
-    pixel: 1 / samples.view.scale,
+    pixel: 1 / samples.view.scale, blur,
     deposit: new Float32Array(count), zone: new Float32Array(count), wideZone: new Float32Array(count),
     maskMaps: new Map(), markMaps: new Map(), noise: null, specks: null,
   }
+}
+
+/** Turned farther from the viewer than this, skin is a line: its blur grows no more. */
+const GRAZING = 0.06
+
+/** How far the samples of a view reach round skin that turns away from the viewer, beyond what they cover of a facing one, mm. */
+export function grazingBlur({ normal, pixel, part, count, view }: ViewSamples): Float32Array {
+  const out = new Float32Array(count)
+  // Several samples of a pixel follow each other and share it.
+  let each = 1
+  while (each < count && pixel[each] === pixel[0]) each++
+  const spread = 1 / (view.scale * Math.sqrt(12 * each))
+  for (let i = 0; i < count; i++) if ((part[i] ?? 0) < PART_FIN) out[i] = spread * (1 / Math.max(GRAZING, normal[3 * i + 2] ?? 1) - 1)
+  return out
 }
 
 /** V of the back ridge, mm, at places even in u. */

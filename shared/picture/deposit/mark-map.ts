@@ -12,7 +12,9 @@ import { strokeField, type PlaneStroke } from './stroke-field'
 /** Strokes of a fan run together at its root; a hand flicks them off lightly there. 0: they add up in full; 1: no more than one. */
 const FLICK = 0.75
 /** No two strokes of a hand are as long. */
-const FAN_VARIES = 0.07
+const FAN_VARIES = 0.035
+/** The two flanks are drawn one after the other: no hand does the same twice. */
+const HANDS = 733
 
 /**
  * How much the marks of a coat lay at every sample of the body, as shares of the coat, into `out`. Marks of one coat come one
@@ -42,12 +44,12 @@ function drawMark(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
   const bothSides = (field: (side: 1 | -1) => PlaneField) => fieldMap(keep, field(1), field(-1))
   switch (mark.kind) {
     case 'strokes': {
-      const field = strokeField(mark.strokes.map(stroke => ({ ...stroke, points: draped(table, stroke.points, false) })), mark.with)
-      return fieldMap(keep, field, field)
+      const strokes = mark.strokes.map(stroke => ({ ...stroke, points: draped(table, stroke.points, false) }))
+      return bothSides(side => strokeField(strokes, mark.with, HANDS + side))
     }
     case 'fan': {
-      const field = fanField(planePlace(table, ...mark.root), mark, keep.blank.shape.length)
-      return fieldMap(keep, field, field)
+      const root = planePlace(table, ...mark.root)
+      return bothSides(side => fanField(root, mark, keep.blank.shape.length, HANDS + side))
     }
     case 'dots': return bothSides(side => dotField(placedDots(table, mark, side), mark.soft))
     case 'scatter': return bothSides(side => dotField(scatteredDots(table, mark, side), mark.soft))
@@ -66,8 +68,8 @@ function drawMark(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
 type Fan = Extract<Mark, { kind: 'fan' }>
 
 /** A fan of strokes whose paint, near the root where they lie over each other, is spread as a hand would. */
-export function fanField(root: PlanePoint, fan: Fan, length: number): PlaneField {
-  const strokes = strokeField(fanStrokes(root, fan, length), 'airbrush')
+export function fanField(root: PlanePoint, fan: Fan, length: number, hand?: number): PlaneField {
+  const strokes = strokeField(fanStrokes(root, fan, length), 'airbrush', hand)
   const gap = Math.abs(fan.angle[1] - fan.angle[0]) * Math.PI / 180 / (fan.count - 1)
   const breadth = Math.sqrt(2 * Math.PI) * length / 100 * fan.width[0]
   const at = (U: number, V: number) => {

@@ -1,13 +1,13 @@
 import type { Mark } from '#shared/scheme/mark'
 import type { DepositKeep } from './keep'
-import { fbm, gradientNoise, hash2, newSlope, noise2 } from './noise'
+import { fbm, gradientNoise, hash2, newSlope, noise2, SWING } from './noise'
 import { normalShare, smoothStep } from './normal-share'
 
 type Worms = Extract<Mark, { kind: 'worm tracks' }>
 type Sponge = Extract<Mark, { kind: 'torn sponge' }>
 
 /** Tracks run longer along the body, wander, and break off. Sizes in wavelengths. */
-const WORM = { stretch: 1.25, finer: 1.25, wander: 0.3, wanderSize: 1.5, soft: 0.06, breakFrom: -1.0, breakTo: -0.45, breakSize: 3.5, leastSlope: 0.35 }
+const WORM = { stretch: 1.25, finer: 1.25, wander: 0.3, wanderSize: 1.5, soft: 0.06, breakFrom: -1.0, breakTo: -0.45, breakSize: 3.5, leastSlope: 0.35, swells: 0.3, swellSize: 0.7 }
 /** Standard deviation of a sponge's relief: thresholds between -1 and 1 are heights of it. */
 const RELIEF = 0.18
 const SPONGE = { coarser: 1.35, stretch: 1.3, slant: 0.35, octaves: 4, tear: 0.12, tearSize: 0.4 }
@@ -37,9 +37,13 @@ export function wormMap(keep: DepositKeep, mark: Worms): Float32Array {
     const dy = slope.dx * turn * pullX.dy + slope.dy * (1 + turn * pullY.dy)
     const steep = Math.sqrt(dx * dx + dy * dy)
     const d = Math.abs(slope.value) / Math.max(WORM.leastSlope, steep) * size
-    if (d > half + 4 * WORM.soft) continue
+    const soft = Math.hypot(WORM.soft, keep.blur[i] ?? 0)
+    if (d > half * 1.5 + 4 * soft) continue
     const unbroken = smoothStep(WORM.breakFrom, WORM.breakTo, noise2(x / WORM.breakSize, y / WORM.breakSize, seed + 3))
-    if (unbroken > 0) out[i] = unbroken * normalShare((half * (0.7 + 0.3 * unbroken) - d) / WORM.soft)
+    if (unbroken <= 0) continue
+    // A tip of a brush swells and thins, and runs out to nothing before it breaks off.
+    const swell = 1 + WORM.swells * SWING * noise2(x / WORM.swellSize, y / WORM.swellSize, seed + 4)
+    out[i] = Math.sqrt(unbroken) * normalShare((half * swell * unbroken - d) / soft)
   }
   return out
 }

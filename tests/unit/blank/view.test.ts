@@ -152,7 +152,11 @@ describe('carving, fins and joints', () => {
     const [px, py] = projectPoint(view, 160, 92 + (line - 3) * (0.1 + 0.0016 * (line - 3)), line - 3, 0)
     const through = subpixelSamples(glide, view, Uint32Array.of(Math.floor(py) * 640 + Math.floor(px)), Float32Array.of(px % 1, py % 1))
     expect(through.part[0]).toBe(PART_NONE)
-    expect(gap.every(i => Math.abs((samples.occlusion[i] ?? 0) - 0.12) < 1e-6)).toBe(true)
+    // Hardly any light comes out of the gap's middle; toward its edges it does not end like a drawn line.
+    const kept = gap.map(i => samples.occlusion[i] ?? 0).sort((a, b) => a - b)
+    expect(kept[0]).toBeLessThan(0.27)
+    expect(kept.at(-1)).toBeGreaterThan(0.6)
+    expect(kept.at(-1)).toBeLessThan(1)
   })
 })
 
