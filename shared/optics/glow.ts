@@ -1,6 +1,6 @@
 import { assertBands, type Bands, type Spectrum } from './bands'
 import { coefficientsIn } from './coat-layer'
-import { type CoatLayer, filmLayer } from './film'
+import { type CoatLayer, filmLayer, layOver } from './film'
 import { flakeCoat } from './flake-coat'
 import { emissionPhotons, type Glow, glowOf } from './fluorescence'
 import { type ChainLayer, type Glower, solveGlow } from './glow-chain'
@@ -16,12 +16,12 @@ export const SUBLAYERS = 8
 export interface GlowingCoat { layers: ChainLayer[], glowers: Glower[] }
 
 /** Cuts a coat that glows into sublayers with edges passes·(j/8)³, each split in two halves with its glow between them. */
-export function glowingCoat(paint: PaintOptics, glow: Glow, passes: number, bands: Bands = 'exact36'): GlowingCoat {
+export function glowingCoat(paint: PaintOptics, glow: Glow, passes: number, bands: Bands = 'exact36', sublayers: number = SUBLAYERS): GlowingCoat {
   const emission = inBands(emissionPhotons(glow), bands)
   const share = glowShare(paint, glow, bands)
   const layers: ChainLayer[] = [], glowers: Glower[] = []
-  for (let j = 0; j < SUBLAYERS; j++) {
-    const thick = passes * (((j + 1) / SUBLAYERS) ** 3 - (j / SUBLAYERS) ** 3)
+  for (let j = 0; j < sublayers; j++) {
+    const thick = passes * (((j + 1) / sublayers) ** 3 - (j / sublayers) ** 3)
     const half = sliceOf(paint, thick / 2, bands)
     glowers.push({ at: layers.length, share, emission, quantumYield: glow.quantumYield })
     layers.push(half, half)
@@ -63,24 +63,32 @@ export function hasGlow(coats: readonly { optics: PaintOptics }[]): boolean {
  *
  * Light below 380 nm is left out: it feeds a glow too, a little more in the sun than this says.
  *
- * @param coats   the first sprayed first
- * @param ground  reflectance inside the ground, 36 bands
- * @param falling photons that fall on the stack, 36 bands (`fallingLight`)
+ * @param coats     the first sprayed first
+ * @param ground    reflectance inside the ground, 36 bands
+ * @param falling   photons that fall on the stack, 36 bands (`fallingLight`)
+ * @param surface   against what the film ends
+ * @param sublayers into how many a coat that glows is cut
  */
-export function glowPhotons(coats: readonly CoatForGlow[], ground: Spectrum, falling: Spectrum, { outside, inside }: SurfaceLoss = AIR_SURFACE): Float64Array {
+export function glowPhotons(
+  coats: readonly CoatForGlow[], ground: Spectrum, falling: Spectrum, { outside, inside }: Pick<SurfaceLoss, 'outside' | 'inside'> = AIR_SURFACE, sublayers: number = SUBLAYERS,
+): Float64Array {
+  const lowest = coats.findIndex(({ optics, passes }) => passes > 0 && glowOf(optics) !== undefined)
+  if (lowest < 0) return new Float64Array(36)
+  assertBands('glowPhotons', 36, falling)
+  // What lies under the lowest glow is one ground to it.
+  const under = Float64Array.from(ground)
+  for (const { layer } of coats.slice(0, lowest)) layOver(layer, under, under)
   const layers: ChainLayer[] = [], glowers: Glower[] = []
-  for (const { optics, passes, layer } of [...coats].reverse()) {
+  for (const { optics, passes, layer } of coats.slice(lowest).reverse()) {
     const glow = glowOf(optics)
     if (!glow || passes === 0) {
       layers.push(layer)
       continue
     }
-    const cut = glowingCoat(optics, glow, passes)
+    const cut = glowingCoat(optics, glow, passes, 'exact36', sublayers)
     for (const glower of cut.glowers) glowers.push({ ...glower, at: glower.at + layers.length })
     layers.push(...cut.layers)
   }
-  if (glowers.length === 0) return new Float64Array(36)
-  assertBands('glowPhotons', 36, falling)
   const entering = Float64Array.from(falling, photons => (1 - outside) * photons)
-  return solveGlow({ layers, glowers, ground, inside }, entering).out
+  return solveGlow({ layers, glowers, ground: under, inside }, entering).out
 }

@@ -1,6 +1,7 @@
-import { labFromXyz, type Lab, type Xyz } from '#shared/optics/colorimetry'
+import type { Lab, Light, Xyz } from '#shared/optics/colorimetry'
 import { colourWords } from '#shared/optics/colour-words'
 import { hexFromSrgb } from '#shared/optics/screen-colour'
+import { type ExactSeen, resolveSeen } from '#shared/optics/seen-exact'
 import { ASPECULAR } from '#shared/optics/flake-angles'
 import { type Promised, screenOf } from '#shared/optics/stack'
 
@@ -19,8 +20,8 @@ export function colourShown({ lab, srgb, outOfGamut }: { lab: Lab, srgb: readonl
   return { lab, hex: hexFromSrgb([...srgb]), outOfGamut, words: colourWords(lab) }
 }
 
-/** A promise at an angle from the gloss; between two of the five angles read by ratio. A stack without flakes has one colour. */
-export function colourAtAngle(promised: Promised, angle: number): ColourShown {
+/** A promise at an angle from the gloss; between two of the five angles read by ratio. A stack without flakes has one colour. `by` is what the promise is seen by. */
+export function colourAtAngle(promised: Promised, angle: number, by: Light | ExactSeen = 'D65'): ColourShown {
   const { angles } = promised
   if (!angles) return colourShown(promised)
   const high = ASPECULAR.find(each => each >= angle) ?? 110
@@ -29,5 +30,5 @@ export function colourAtAngle(promised: Promised, angle: number): ColourShown {
   const share = (angle - low) / (high - low)
   const [from, to] = [angles[low].xyz, angles[high].xyz]
   const xyz = from.map((value, i) => Math.max(1e-9, value) ** (1 - share) * Math.max(1e-9, to[i]!) ** share) as Xyz // three of three
-  return colourShown({ lab: labFromXyz(xyz), ...screenOf(xyz, promised.brightness) })
+  return colourShown({ lab: resolveSeen(by).lab(xyz), ...screenOf(xyz, promised.brightness, by) })
 }

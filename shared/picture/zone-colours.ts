@@ -1,5 +1,8 @@
 import { deltaE2000 } from '#shared/optics/delta-e'
 import { groundFromLab } from '#shared/optics/known-film'
+import { exactSeen } from '#shared/optics/seen-exact'
+import { DAYLIGHT_IN_AIR, type SeenWish } from '#shared/optics/seen-wish'
+import { type PromiseSpread, promiseSpread } from '#shared/optics/spread'
 import { coloursOnTheWayUp, promise, type Coat } from '#shared/optics/stack'
 import type { ZoneName } from '#shared/blank/zone-names'
 import { colourAtAngle, colourShown, type ColourShown } from './colour-shown'
@@ -23,8 +26,10 @@ export interface CoatColour extends ColourShown {
 export interface ZoneColour {
   zone: ZoneName
   label: string
-  /** The promise: seen straight on, lit from 45°, gloss excluded, daylight. With flakes as the chosen light shows them. */
+  /** The promise: seen straight on, lit from 45°, gloss excluded, in daylight unless wished otherwise. With flakes as the chosen light shows them. */
   promised: ColourShown
+  /** How sure it is: at 45° where flakes lie. Its words call coats by their numbers in the scheme. */
+  spread: PromiseSpread
   /** Only where flakes lie: toward the gloss, and far from it. */
   face?: ColourShown
   flop?: ColourShown
@@ -36,7 +41,10 @@ export interface ZoneColour {
 const TRACE = 0.01
 
 /** What of a look decides its promised colours. */
-export type ZoneWish = Pick<PictureOptions, 'upTo' | 'clear' | 'light'>
+export type ZoneWish = Pick<PictureOptions, 'upTo' | 'clear' | 'light'> & {
+  /** What it is seen by; daylight in air when left out. */
+  seen?: SeenWish | undefined
+}
 
 /**
  * The promised colour of every zone: numbers of the engine, not pixels of a picture.
@@ -48,13 +56,14 @@ export function zoneColours(look: Look, wish: ZoneWish, bench: ZoneBench = zoneB
   const ground = groundFromLab(colour, look.body.ground.finish)
   const finish = finishShown(look, wish)
   const coats = shownCoats(look, wish)
+  const seen = exactSeen(wish.seen ?? DAYLIGHT_IN_AIR)
   return bench.zones(look).map(({ zone, label }): ZoneColour => {
     const here = coats
       .map(coat => ({ coat, passes: coat.passes * bench.share(look, coat, zone) }))
       .filter(({ passes }) => passes > TRACE)
     const stack = { ground, finish, coats: here.map(({ coat, passes }): Coat => ({ optics: coat.paint, passes })) }
-    const promised = promise(stack)
-    const wayUp = coloursOnTheWayUp(stack).map((shown, i, all): CoatColour => ({
+    const promised = promise(stack, seen)
+    const wayUp = coloursOnTheWayUp(stack, seen).map((shown, i, all): CoatColour => ({
       ...colourShown(shown),
       coatId: here[i - 1]?.coat.laid.coat.id ?? null,
       passes: here[i - 1]?.passes ?? 0,
@@ -62,7 +71,8 @@ export function zoneColours(look: Look, wish: ZoneWish, bench: ZoneBench = zoneB
     }))
     return {
       zone, label, wayUp,
-      promised: colourAtAngle(promised, aspecularOf(wish.light)),
+      promised: colourAtAngle(promised, aspecularOf(wish.light), seen),
+      spread: promiseSpread(stack, seen, here.map(({ coat }) => coat.laid.number)),
       ...(promised.face && promised.flop ? { face: colourShown(promised.face), flop: colourShown(promised.flop) } : {}),
     }
   })
