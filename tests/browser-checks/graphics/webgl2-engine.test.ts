@@ -59,7 +59,7 @@ describe('on a canvas of a page', () => {
   it('is not offered where nothing can be drawn into 32-bit numbers', () => {
     const { canvas, gl } = pageCanvas()
     const { getExtension } = gl
-    gl.getExtension = ((name: string) => name === 'EXT_color_buffer_float' ? null : getExtension.call(gl, name) as unknown) as typeof getExtension
+    gl.getExtension = ((name: 'WEBGL_debug_renderer_info') => `${name}` === 'EXT_color_buffer_float' ? null : getExtension.call(gl, name)) as typeof getExtension
     expect(webgl2Engine(canvas)).toBeUndefined()
   })
 })
