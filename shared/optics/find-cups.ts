@@ -38,7 +38,7 @@ export function* nearestCups<P extends { optics: PaintOptics, cup?: string }>(pa
     for (const [i, one] of order.entries()) {
       for (const drops of one.mixes) {
         const count = drops.reduce((sum, each) => sum + each, 0)
-        if (count <= FEW_DROPS !== isFew) continue
+        if ((count <= FEW_DROPS) !== isFew) continue
         const cutoff = Math.min(distanceOf(one), nearest[answers - 1] ? distanceOf(nearest[answers - 1]!) : Infinity)
         if (one.least >= cutoff) break
         mixInto(one.set, drops, count, K, S)

@@ -191,7 +191,7 @@ export function filmSearch(scene: FindScene, target: Lab, light: Light, { most, 
       const there = distanceAt(place) ** 2
       const isNearer = there < atMiddle
       const [left, atLeft, right, atRight] = next < middle ? [next, there, middle, atMiddle] : [middle, atMiddle, next, there]
-      if (isNearer === next < middle) [high, atHigh, middle, atMiddle] = [right, atRight, left, atLeft]
+      if (isNearer === (next < middle)) [high, atHigh, middle, atMiddle] = [right, atRight, left, atLeft]
       else [low, atLow, middle, atMiddle] = [left, atLeft, right, atRight]
     }
     free = place
