@@ -48,10 +48,15 @@ export function isReady(step: RunStep, piece: number, state: RunState, now: numb
   switch (step.kind) {
     case 'lay': return passesOn(step.coat.id, piece, state) >= step.coat.passes
     case 'rest':
+    case 'cure':
     case 'turn': return waitLeft(step, piece, state, now) === 0
     case 'inspect': return state.inspected.has(piece)
     case 'prepare':
+    case 'warm':
     case 'mix':
+    case 'set':
+    case 'test':
+    case 'look-over':
     case 'fit':
     case 'heat':
     case 'lift':

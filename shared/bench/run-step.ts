@@ -1,4 +1,4 @@
-import type { Coat } from '#shared/scheme/coat'
+import type { Coat, Tool } from '#shared/scheme/coat'
 import type { Mask } from '#shared/scheme/mask'
 import type { Caution } from '#shared/shelf/hazards'
 
@@ -17,25 +17,36 @@ interface CoatStep extends StepBase { coat: Coat, number: number, coatName: stri
 export type RunStep
   /** What protects whom, before anything is opened. */
   = | StepBase & { kind: 'prepare' }
+    /** Paint, blanks and room come to one warmth. */
+    | StepBase & { kind: 'warm' }
     /** Fill the cup: for this coat and those after it that are laid from the same cup. */
     | CoatStep & { kind: 'mix', coats: readonly Coat[], advice: readonly MixAdvice[], potLifeMinutes: number | null }
+    /** Needle and nozzle, pressure while air is flowing, distance. */
+    | CoatStep & { kind: 'set', tool: Extract<Tool, { kind: 'airbrush' }> }
     | StepBase & { kind: 'fit', mask: Mask }
+    /** One pass on a card before one on a piece. */
+    | CoatStep & { kind: 'test' }
     /** Spray, brush or dip one coat, piece by piece. */
     | CoatStep & { kind: 'lay', through: readonly Mask[] }
     /** Wait; minutes from the coat. */
     | CoatStep & { kind: 'rest', minutes: number }
-    | CoatStep & { kind: 'heat', seconds: number, distance: number }
+    /** Warm it; `limit` is what the body bears, °C, null where nobody said what it is made of. */
+    | CoatStep & { kind: 'heat', seconds: number, distance: number, limit: number | null }
     | StepBase & { kind: 'lift', mask: Mask }
     /** Empty and rinse; `next` is the coat the airbrush is wanted for, null when it is done for this run. */
     | CoatStep & { kind: 'clean', next: string | null }
     | StepBase & { kind: 'eyes' }
+    /** What is under the clear stays under it: dust, prints and missed spots go now. */
+    | StepBase & { kind: 'look-over' }
     /** On the turner until it no longer runs. */
     | CoatStep & { kind: 'turn', minutes: number }
+    /** Hard all the way, before it is handled and fitted out; minutes. */
+    | CoatStep & { kind: 'cure', minutes: number }
     | StepBase & { kind: 'inspect' }
 
 export type RunStepKind = RunStep['kind']
 /** A step that takes time by itself. */
-export type WaitStep = Extract<RunStep, { kind: 'rest' | 'heat' | 'turn' }>
+export type WaitStep = Extract<RunStep, { kind: 'rest' | 'heat' | 'turn' | 'cure' }>
 /** A step that fills the cup. */
 export type MixStep = Extract<RunStep, { kind: 'mix' }>
 /** A step that lays a coat. */
@@ -51,7 +62,7 @@ export function waitSeconds(step: WaitStep): number {
 
 /** Whether a step takes time by itself. */
 export function isWait(step: RunStep): step is WaitStep {
-  return step.kind === 'rest' || step.kind === 'heat' || step.kind === 'turn'
+  return step.kind === 'rest' || step.kind === 'heat' || step.kind === 'turn' || step.kind === 'cure'
 }
 
 /** Whether a step is for a piece at all. */

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { PIECES_MAX, RunEvent } from './run-event'
+import { BodyMaterial } from './body-material'
 import { PageQuery } from '#shared/api/page'
 import { SchemeBody } from '#shared/scheme/body'
 import { Materials } from '#shared/scheme/materials'
@@ -30,6 +31,8 @@ export const RunStart = z.object({
   bottleIds: z.array(z.uuid()).max(RUN_BOTTLES_MAX).default([]),
   /** Colleagues who paint; none: whoever starts it. */
   painterIds: z.array(z.uuid()).max(PAINTERS_MAX).default([]),
+  /** What the bodies are made of: it limits the heat. */
+  madeOf: BodyMaterial.nullable().default(null),
 }).refine(start => start.names.length === 0 || start.names.length === start.pieces, { path: ['names'], message: 'Name every piece, or none.' })
 export type RunStart = z.output<typeof RunStart>
 /** The same as somebody sends it: what is not written down is left out. */
@@ -108,6 +111,10 @@ export const RunView = RunBase.extend({
   materials: Materials,
   headNumber: z.number().int(),
   room: RoomAir.nullable(),
+  /** What the bodies are made of; null where nobody said. */
+  madeOf: BodyMaterial.nullable().default(null),
+  /** In which form its steps are worked out: the one of the day it began. */
+  stepsForm: z.union([z.literal(1), z.literal(2)]).default(1),
   painters: z.array(Painter),
   /** Which bottle each paint comes out of from the start, by the paint's id. */
   startBottles: z.record(z.uuid(), z.uuid()),

@@ -6,7 +6,7 @@ import { goingOn, leavingEarly, type LeavingEarly, type Readiness, readiness } f
 import type { RunAct } from '#shared/bench/run-event'
 import { type Part, partsOf, partToDo, stepAfter } from '#shared/bench/run-parts'
 import type { RunStep } from '#shared/bench/run-step'
-import { runSteps } from '#shared/bench/run-steps'
+import { runPlan } from '#shared/bench/run-plan'
 import { type RunPlan, runState, type RunState } from '#shared/bench/run-state'
 import { type CupNow, cupNow, type RunTimer, runTimers } from '#shared/bench/run-timers'
 import type { Look } from '#shared/picture/look'
@@ -44,7 +44,7 @@ export interface Follow {
 export function useFollow(here: RunHere): Follow {
   const { run } = here
   const look: Look = { body: run.body, materials: run.materials }
-  const plan: RunPlan = { steps: runSteps(look, run.pieces), pieces: run.pieces }
+  const plan: RunPlan = runPlan(run)
   const acts = useRunActs(here)
   const { now, read } = useBenchClock()
 

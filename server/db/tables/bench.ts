@@ -2,7 +2,9 @@ import { bigserial, boolean, doublePrecision, index, integer, jsonb, pgTable, pr
 import { persons, workshops } from './people'
 import { revisions, schemes } from './scheme'
 import { bottles, paints } from './shelf'
+import { BODY_MATERIALS } from '#shared/bench/body-material'
 import type { ZoneMeasure } from '#shared/bench/run-measure'
+import type { StepsForm } from '#shared/bench/run-steps'
 import type { RoomAir } from '#shared/bench/run-view'
 
 const at = (name: string) => timestamp(name, { withTimezone: true, mode: 'date' })
@@ -18,6 +20,9 @@ export const runs = pgTable('runs', {
   /** A name for each piece; empty: they are numbered. */
   names: jsonb().$type<string[]>().notNull().default([]),
   room: jsonb().$type<RoomAir>(),
+  madeOf: text('made_of', { enum: BODY_MATERIALS }),
+  /** In which form its steps are worked out. */
+  stepsForm: integer('steps_form').$type<StepsForm>().notNull().default(1),
   startedBy: uuid('started_by').references(() => persons.id, { onDelete: 'set null' }),
   startedAt: at('started_at').notNull().defaultNow(),
   finishedAt: at('finished_at'),

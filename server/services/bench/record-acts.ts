@@ -6,11 +6,10 @@ import { bottles, paints, runEvents, runs } from '#server/db/tables'
 import type { RunAct, RunEvent, RunEventAnswer } from '#shared/bench/run-event'
 import type { RunEventView } from '#shared/bench/run-view'
 import { refusalOf, runState } from '#shared/bench/run-state'
-import { runSteps } from '#shared/bench/run-steps'
 import { sameValue } from '#shared/scheme/canonical'
 import { RUN_CHANNEL, runNews } from './run-news'
 import { eventsOfRun } from './run-events'
-import { holdRun, runInWorkshop } from './run-in-workshop'
+import { holdRun, planOfRow, runInWorkshop } from './run-in-workshop'
 import { settleStock } from './settle-stock'
 
 /** A tablet's clock that differs by less, ms, is right: the way to the server takes time too. */
@@ -28,7 +27,7 @@ export async function recordActs(ctx: Ctx, runId: string, events: readonly RunEv
     // Held before the first act is written: whoever reads by `since` then never passes over an act that arrived earlier.
     await holdRun(tx, runId)
     const row = await runInWorkshop(tx, runId)
-    const plan = { steps: runSteps({ body: row.body, materials: row.materials }, row.run.pieces), pieces: row.run.pieces }
+    const plan = planOfRow(row)
     const isThere = await shelfOf(tx, events)
     const refused = new Map(events.flatMap(event => reasonFor(refusalOf(plan, event.act) ?? isThere(event.act), event.id)))
     const wanted = events.filter(event => !refused.has(event.id))

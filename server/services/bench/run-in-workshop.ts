@@ -2,6 +2,8 @@ import { and, eq } from 'drizzle-orm'
 import type { Ctx } from '#server/services/ctx'
 import { persons, revisions, runs, schemes } from '#server/db/tables'
 import { Problem } from '#shared/errors/problem'
+import { runPlan } from '#shared/bench/run-plan'
+import type { RunPlan } from '#shared/bench/run-state'
 
 export type RunRow = typeof runs.$inferSelect
 
@@ -34,4 +36,9 @@ export type RunWithFinish = Awaited<ReturnType<typeof runInWorkshop>>
 export async function holdRun(tx: Ctx, runId: string): Promise<void> {
   const [held] = await tx.db.select({ id: runs.id }).from(runs).where(and(eq(runs.id, runId), eq(runs.workshopId, tx.workshopId))).for('update')
   if (!held) throw new Problem({ code: 'run/not-found' })
+}
+
+/** What a run is made of: its steps, as they were worked out on the day it began. */
+export function planOfRow({ body, materials, run }: Pick<RunWithFinish, 'body' | 'materials' | 'run'>): RunPlan {
+  return runPlan({ body, materials, pieces: run.pieces, stepsForm: run.stepsForm, madeOf: run.madeOf })
 }

@@ -1,8 +1,7 @@
 import type { RunDay } from './run-day'
-import type { RunWithFinish } from './run-in-workshop'
+import { planOfRow, type RunWithFinish } from './run-in-workshop'
 import { partsOf, partToDo } from '#shared/bench/run-parts'
 import { runState } from '#shared/bench/run-state'
-import { runSteps } from '#shared/bench/run-steps'
 import { stepName } from '#shared/bench/step-words'
 import type { RunEventView, RunListItem, RunView } from '#shared/bench/run-view'
 
@@ -22,8 +21,8 @@ function runBase({ run, schemeName, revision, startedByName }: RunWithFinish) {
 
 /** A run in a list, with where its acts have brought it. */
 export function runListItem(row: RunWithFinish, events: readonly RunEventView[], now: number): RunListItem {
-  const { body, materials, run } = row
-  const plan = { steps: runSteps({ body, materials }, run.pieces), pieces: run.pieces }
+  const { run } = row
+  const plan = planOfRow(row)
   const state = runState(events)
   const step = partToDo(plan, state, now)?.step
   const looks = [...state.inspected].filter(([piece]) => !state.aside.has(piece))
@@ -40,5 +39,5 @@ export function runListItem(row: RunWithFinish, events: readonly RunEventView[],
 
 /** A run as the bench follows it, at a moment of the server's clock. */
 export function runView(row: RunWithFinish, day: RunDay, events: RunEventView[], now: Date): RunView {
-  return { ...runBase(row), body: row.body, materials: row.materials, headNumber: row.headNumber, room: row.run.room, ...day, events, now: now.toISOString() }
+  return { ...runBase(row), body: row.body, materials: row.materials, headNumber: row.headNumber, room: row.run.room, madeOf: row.run.madeOf, stepsForm: row.run.stepsForm, ...day, events, now: now.toISOString() }
 }

@@ -6,6 +6,7 @@ import { revisionInWorkshop, schemeInWorkshop } from '#server/services/scheme/sc
 import { bottlesByIds, bottlesInUse } from '#server/services/shelf/bottle-rows'
 import { memberships, runBottles, runPainters, runs, workshops } from '#server/db/tables'
 import { Problem } from '#shared/errors/problem'
+import { STEPS_FORM_NOW } from '#shared/bench/run-steps'
 import type { RunListItem, RunStartInput } from '#shared/bench/run-view'
 import { coatsOf } from '#shared/scheme/stack-order'
 import type { SchemeBody } from '#shared/scheme/body'
@@ -19,7 +20,7 @@ import { runListItem } from './run-view'
  */
 export async function startRun(ctx: Ctx, start: RunStartInput): Promise<RunListItem> {
   assertMay(ctx, 'run:record')
-  const { schemeId, revision: number, pieces, names = [], room = null, bottleIds = [], painterIds = [] } = start
+  const { schemeId, revision: number, pieces, names = [], room = null, bottleIds = [], painterIds = [], madeOf = null } = start
   return inTransaction(ctx, async (tx) => {
     const scheme = await schemeInWorkshop(tx, schemeId)
     if (scheme.headNumber === 0) throw new Problem({ code: 'scheme/never-published' })
@@ -27,7 +28,7 @@ export async function startRun(ctx: Ctx, start: RunStartInput): Promise<RunListI
     const taken = await bottlesFor(tx, revision.body, bottleIds)
     const painters = await paintersFrom(tx, painterIds.length > 0 ? painterIds : [tx.personId])
     const [run] = await tx.db.insert(runs)
-      .values({ workshopId: tx.workshopId, number: await nextNumber(tx), schemeId, revisionId: revision.id, pieces, names, room, startedBy: tx.personId })
+      .values({ workshopId: tx.workshopId, number: await nextNumber(tx), schemeId, revisionId: revision.id, pieces, names, room, madeOf, stepsForm: STEPS_FORM_NOW, startedBy: tx.personId })
       .returning({ id: runs.id })
     const own = { workshopId: tx.workshopId, runId: run!.id }
     await tx.db.insert(runPainters).values(painters.map(personId => ({ ...own, personId })))

@@ -46,9 +46,9 @@ export const PERCH = finish([
   coatOf(4, EPOXY, { passes: 1, rest: 480, tool: { kind: 'brush' } }),
 ], { eyes: true })
 
-/** A run of that finish. */
+/** A run of that finish, with the few steps of the first form: what is tried on it is not about the others. */
 export function planOf(look: Look, pieces: number): RunPlan {
-  return { steps: runSteps(look, pieces), pieces }
+  return { steps: runSteps(look, pieces, { form: 1, madeOf: null }), pieces }
 }
 
 /** A moment of the day, minutes past nine. */

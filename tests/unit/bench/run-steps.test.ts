@@ -15,6 +15,18 @@ const only = <K extends RunStep['kind']>(steps: readonly RunStep[], kind: K) => 
 describe('the steps of a finish', () => {
   it('follow the stack from the ground to the turner', () => {
     expect(short(runSteps(PERCH, 6))).toEqual([
+      'prepare', 'warm',
+      'mix 1', 'set 1', 'test 1', 'lay 1', 'rest 1', 'clean 1',
+      'mix 2', 'fit', 'test 2', 'lay 2', 'rest 2', 'clean 2', 'lift',
+      'mix 3', 'test 3', 'lay 3', 'rest 3', 'heat 3', 'clean 3',
+      'eyes', 'look-over', 'mix 4', 'lay 4', 'turn 4', 'cure 4',
+      'inspect',
+    ])
+  })
+
+  it('are those of the day a run began: one of before is not sent back to what was added since', () => {
+    const old = runSteps(PERCH, 6, { form: 1, madeOf: null })
+    expect(short(old)).toEqual([
       'prepare',
       'mix 1', 'lay 1', 'rest 1', 'clean 1',
       'fit', 'mix 2', 'lay 2', 'rest 2', 'clean 2', 'lift',
@@ -22,6 +34,20 @@ describe('the steps of a finish', () => {
       'eyes', 'mix 4', 'lay 4', 'turn 4',
       'inspect',
     ])
+    const ids = new Set(runSteps(PERCH, 6).map(step => step.id))
+    expect(old.filter(step => !ids.has(step.id))).toEqual([])
+  })
+
+  it('set the airbrush anew where nozzle, pressure or distance change, and test it then', () => {
+    const fine = { kind: 'airbrush', nozzle: 0.2, pressure: 0.7, distance: 3 } as const
+    const steps = runSteps(finish([coatOf(1, paint(1)), coatOf(2, paint(1), { tool: fine }), coatOf(3, paint(2), { tool: fine })]), 2)
+    expect(short(steps).filter(word => /^(?:mix|set|test)/.test(word))).toEqual(['mix 1', 'set 1', 'test 1', 'set 2', 'test 2', 'mix 3', 'test 3'])
+    expect(only(steps, 'set').map(step => step.tool.pressure)).toEqual([1.5, 0.7])
+  })
+
+  it('say how warm a body may get, where it is known what it is made of', () => {
+    const limit = (madeOf: 'foam' | null) => only(runSteps(PERCH, 2, { form: 2, madeOf }), 'heat')[0]?.limit
+    expect([limit('foam'), limit(null)]).toEqual([43, null])
   })
 
   it('are the same, with the same names, on every tablet', () => {
@@ -44,7 +70,7 @@ describe('the steps of a finish', () => {
 
   it('clean out when the cup changes, and mix once for coats from one cup', () => {
     const same = finish([coatOf(1, paint(1)), coatOf(2, paint(1)), coatOf(3, paint(2))])
-    expect(short(runSteps(same, 4)).filter(word => !word.startsWith('rest'))).toEqual(['prepare', 'mix 1', 'lay 1', 'lay 2', 'clean 2', 'mix 3', 'lay 3', 'clean 3', 'inspect'])
+    expect(short(runSteps(same, 4)).filter(word => !/^(?:rest|warm|set|test|cure)/.test(word))).toEqual(['prepare', 'mix 1', 'lay 1', 'lay 2', 'clean 2', 'mix 3', 'lay 3', 'clean 3', 'inspect'])
     expect(only(runSteps(same, 4), 'mix').map(step => step.coats.length)).toEqual([2, 1])
     expect(only(runSteps(same, 4), 'clean').map(step => step.next)).toEqual(['Coat 3', null])
   })
@@ -55,7 +81,7 @@ describe('the steps of a finish', () => {
   })
 
   it('set the eyes before the first clear, at the end without one, never without eyes', () => {
-    expect(short(runSteps(finish([coatOf(1, paint(1))], { eyes: true }), 1)).slice(-2)).toEqual(['eyes', 'inspect'])
+    expect(short(runSteps(finish([coatOf(1, paint(1))], { eyes: true }), 1)).slice(-3)).toEqual(['eyes', 'cure 1', 'inspect'])
     expect(short(runSteps(finish([coatOf(1, paint(1)), coatOf(4, EPOXY)]), 1))).not.toContain('eyes')
   })
 })
@@ -66,7 +92,7 @@ describe('a clear that sets in its cup', () => {
     expect(piecesPerMix(30, 1)).toBe(10)
     const clear = runSteps(PERCH, 24).filter(step => step.id.includes(id('coat', 4)))
     expect(clear.map(step => [step.kind, step.only])).toEqual([
-      ['mix', [1, 8]], ['lay', [1, 8]], ['mix', [9, 16]], ['lay', [9, 16]], ['mix', [17, 24]], ['lay', [17, 24]], ['turn', null],
+      ['mix', [1, 8]], ['lay', [1, 8]], ['mix', [9, 16]], ['lay', [9, 16]], ['mix', [17, 24]], ['lay', [17, 24]], ['turn', null], ['cure', null],
     ])
   })
 
