@@ -29,8 +29,13 @@ export function differentTopics(step: RunStep): Different[] {
     case 'mix': return ['thinning', 'paint', 'other', 'photo']
     case 'rest':
     case 'heat':
+    case 'cure':
     case 'turn': return ['wait', 'other', 'photo']
     case 'prepare':
+    case 'warm':
+    case 'set':
+    case 'test':
+    case 'look-over':
     case 'fit':
     case 'lift':
     case 'clean':

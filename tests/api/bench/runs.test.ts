@@ -90,7 +90,7 @@ describe('the list of runs', () => {
       act({ v: 1, kind: 'inspected', pieces: [1, 2], passed: true, note: '' }),
       act({ v: 1, kind: 'inspected', pieces: [3], passed: false, note: 'dust' }),
     ])
-    expect(await listRuns(ctx, RunQuery.parse({}), null)).toMatchObject([{ stands: 'Mix coat 1, base', stepsDone: 1, passed: 2, failed: 1, setAside: 1 }])
+    expect(await listRuns(ctx, RunQuery.parse({}), null)).toMatchObject([{ stands: 'Warm up', stepsDone: 1, passed: 2, failed: 1, setAside: 1 }])
     expect(coatIds).toHaveLength(2)
   })
 })
