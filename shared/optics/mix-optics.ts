@@ -1,5 +1,5 @@
 import { assertBands } from './bands'
-import { ENGINE_VERSION } from './engine-version'
+import { ENGINE_VERSION, ONE_PEARL_VERSIONS } from './engine-version'
 import type { Flake, FlakeKind } from './flake'
 import { emissionPhotons, type Fluorescence, glowOf } from './fluorescence'
 import type { PaintOptics } from './paint-optics'
@@ -55,7 +55,7 @@ function mainPart(used: readonly DropPart[]): DropPart {
 
 /**
  * The flakes of the cup: their numbers add up by volume. Their tilt and their edges are the mean by number, and every kind keeps
- * its own colour (`mean-flake.ts`).
+ * its own colour (`mean-flake.ts`), unless the paints are of a version that did not know how.
  */
 function mixedFlake(used: readonly DropPart[], total: number): Flake | undefined {
   const flaked = used.flatMap(({ optics: { flake }, drops }) => flake ? [{ flake, count: flake.flakesPerPass * drops }] : [])
@@ -70,8 +70,13 @@ function mixedFlake(used: readonly DropPart[], total: number): Flake | undefined
   return {
     oxide: main.oxide, thickness: main.thickness, flakesPerPass: flakes / total,
     sigma: mean(flake => flake.sigma), edge: mean(flake => flake.edge),
-    ...(kinds.length > 1 ? { kinds } : {}),
+    ...(kinds.length > 1 && !isOfOldLook(used) ? { kinds } : {}),
   }
+}
+
+/** A look frozen when a cup showed one pearl keeps that look. */
+function isOfOldLook(used: readonly DropPart[]): boolean {
+  return used.some(({ optics: { engineVersion, flake } }) => flake !== undefined && ONE_PEARL_VERSIONS.includes(engineVersion))
 }
 
 /** Every kind there are flakes of, once, and its share of their number. */

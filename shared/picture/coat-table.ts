@@ -1,9 +1,10 @@
 import { coefficientsIn } from '#shared/optics/coat-layer'
 import { filmInto } from '#shared/optics/film'
 import { glowOf } from '#shared/optics/fluorescence'
-import { diffuseFlake, singleFlake, type Flake, type SingleFlake } from '#shared/optics/flake'
+import type { Flake, SingleFlake } from '#shared/optics/flake'
 import { flakeCoat } from '#shared/optics/flake-coat'
 import { FLAKE_TABLE_COSINES } from '#shared/optics/flake-table'
+import { meanFlake, meanFlakeInDiffuse } from '#shared/optics/mean-flake'
 import type { PaintOptics } from '#shared/optics/paint-optics'
 import { SURFACE_INSIDE, SURFACE_OUTSIDE } from '#shared/optics/surface'
 import { glowLevels, type GlowLevels } from './glow-levels'
@@ -84,11 +85,11 @@ function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64A
   const { R, T, Q, through } = table
   const rows = FLAKE_TABLE_COSINES.length
   const mirrored = new Float32Array(LEVELS * rows * BANDS), diffuse = new Float32Array(LEVELS * BANDS)
-  const all = singleFlake(flake.oxide, flake.thickness, FLAKE_TABLE_COSINES, 'picture16')
+  const all = meanFlake(flake, FLAKE_TABLE_COSINES, 'picture16')
   const angled = FLAKE_TABLE_COSINES.map((_, c): SingleFlake => ({
     R: all.R.subarray(c * BANDS, (c + 1) * BANDS), T: all.T.subarray(c * BANDS, (c + 1) * BANDS),
   }))
-  const even = diffuseFlake(flake.oxide, flake.thickness, 'picture16')
+  const even = meanFlakeInDiffuse(flake, 'picture16')
   const surface = (1 - SURFACE_OUTSIDE) * (1 - SURFACE_INSIDE)
 
   for (let step = 0; step * FLAKE_STEP < LEVELS; step++) {

@@ -56,6 +56,11 @@ describe('two pearls in one cup', () => {
     const lab = (R: Float64Array) => labFromReflectance(measuredSpectrum(R, 'gloss'))
     expect(deltaE2000(lab(coatLayer(mix, 1).R), lab(exact))).toBeLessThan(0.7)
   })
+  it('show the commonest alone in a look that was frozen when they did', () => {
+    const old = (optics: PaintOptics): PaintOptics => ({ ...optics, engineVersion: '2' })
+    const mix = mixOptics([{ optics: old(gold), drops: 3 }, { optics: old(blue), drops: 2 }])
+    expect(apart(mix, gold)).toBeLessThan(1e-9)
+  })
   it('lie between the two on the way from gold to blue', () => {
     const face = (drops: number) => seen(mixOptics([{ optics: gold, drops: 10 - drops }, { optics: blue, drops }])).face!.lab
     const yellowness = [0, 2, 5, 8, 10].map(drops => face(drops)[2])
