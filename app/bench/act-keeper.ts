@@ -73,7 +73,7 @@ export function createActKeeper(box: ActBox, ports: ActKeeperPorts): ActKeeper {
       const batch = nextBatch(waiting.filter(act => !held.has(act.runId)), most)
       const [first] = batch
       if (!first) {
-        say({ network: 'online', waiting: waiting.length, because: trouble, isSignedOut: false })
+        say({ waiting: waiting.length, because: trouble, ...trouble === null && waiting.length === 0 ? {} : { network: 'online' } })
         if (waiting.length > 0) tryLater()
         return
       }
@@ -81,6 +81,7 @@ export function createActKeeper(box: ActBox, ports: ActKeeperPorts): ActKeeper {
         await take(first.runId, batch, await ports.send(first.runId, batch.map(act => act.event)))
         retryMs = RETRY_FIRST_MS
         most = EVENTS_MAX
+        // Whoever answers is there: nothing is known of the network before.
         say({ network: 'online', waiting: waiting.length - batch.length, because: trouble, isSignedOut: false })
       }
       catch (error) {
