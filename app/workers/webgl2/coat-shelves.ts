@@ -1,4 +1,6 @@
 import { LEVELS, type CoatTable, type FlakeLevels } from '#shared/picture/coat-table'
+import type { GlowLevels } from '#shared/picture/glow-levels'
+import { GLOW_COLUMNS } from './glow-source'
 import { layerShelf, type LayerShelf } from './layer-shelf'
 import { FILM_COLUMNS, FLAKE_COLUMNS } from './stack-source'
 
@@ -6,6 +8,7 @@ import { FILM_COLUMNS, FLAKE_COLUMNS } from './stack-source'
 export interface CoatShelves {
   films: LayerShelf<CoatTable>
   flakes: LayerShelf<FlakeLevels>
+  glows: LayerShelf<GlowLevels>
 }
 
 /** Puts up empty shelves. */
@@ -15,10 +18,11 @@ export function coatShelves(gl: WebGL2RenderingContext): CoatShelves {
   return {
     films: layerShelf(gl, {
       format: gl.RGBA32F, width: FILM_COLUMNS.width, height: LEVELS, least: 32,
-      fill({ R, Q, through }, layer) {
+      fill({ R, Q, through, T }, layer) {
         put(layer, FILM_COLUMNS.R, 4, R)
         put(layer, FILM_COLUMNS.Q, 4, Q)
         put(layer, FILM_COLUMNS.through, 4, through)
+        put(layer, FILM_COLUMNS.T, 4, T)
       },
     }),
     flakes: layerShelf(gl, {
@@ -26,6 +30,14 @@ export function coatShelves(gl: WebGL2RenderingContext): CoatShelves {
       fill({ diffuse, mirrored }, layer) {
         put(layer, FLAKE_COLUMNS.diffuse, 4, diffuse)
         put(layer, FLAKE_COLUMNS.mirrored, FLAKE_COLUMNS.width - FLAKE_COLUMNS.mirrored, mirrored)
+      },
+    }),
+    glows: layerShelf(gl, {
+      format: gl.RGBA32F, width: GLOW_COLUMNS.width, height: LEVELS, least: 8,
+      fill({ takes, back, onward }, layer) {
+        put(layer, GLOW_COLUMNS.takes, 4, takes)
+        put(layer, GLOW_COLUMNS.back, 4, back)
+        put(layer, GLOW_COLUMNS.onward, 4, onward)
       },
     }),
   }

@@ -11,8 +11,6 @@ export interface ViewStore {
   mirrorings: LayerShelf<Mirroring>
   /** What a light does at every sample, handed over when it is another than last time. */
   lights: (light: SampleLight, form: SampleForm) => WebGLTexture
-  /** The glow, likewise. */
-  glow: (light: Float32Array) => WebGLTexture
   /** Where the light is drawn, and room to read it into, four numbers for each sample. */
   target: WebGLFramebuffer
   readings: Float32Array
@@ -28,7 +26,6 @@ export interface ViewStore {
  */
 export function viewStore(gl: WebGL2RenderingContext, count: number): ViewStore {
   const FOUR: SampleFormat = { internal: gl.RGBA32F, format: gl.RGBA, type: gl.FLOAT, each: 4 }
-  const THREE: SampleFormat = { internal: gl.RGB32F, format: gl.RGB, type: gl.FLOAT, each: 3 }
   const TWO: SampleFormat = { internal: gl.RG32F, format: gl.RG, type: gl.FLOAT, each: 2 }
   const CODE: SampleFormat = { internal: gl.R8UI, format: gl.RED_INTEGER, type: gl.UNSIGNED_BYTE, each: 1 }
   const rows = rowsOf(count)
@@ -43,19 +40,18 @@ export function viewStore(gl: WebGL2RenderingContext, count: number): ViewStore 
   const size = { width: ROW, height: rows }
   const codes = layerShelf<Uint8Array>(gl, { ...size, format: CODE.internal, least: 8, fill: (item, layer) => putSamples(gl, CODE, item, layer) })
   const mirrorings = layerShelf<Mirroring>(gl, { ...size, format: TWO.internal, least: 1, fill: (item, layer) => putSamples(gl, TWO, pairsOf(item), layer) })
-  const lights = keptTexture(gl, FOUR, rows), glow = keptTexture(gl, THREE, rows)
+  const lights = keptTexture(gl, FOUR, rows)
 
   return {
     rows, codes, mirrorings, target,
     readings: new Float32Array(4 * ROW * rows),
-    // What is drawn, its readings, light and glow, two kinds of flakes, and codes of some twenty coats.
-    bytes: ROW * rows * (16 + 16 + 16 + 12 + 2 * 8 + 20),
+    // What is drawn, its readings, the light, two kinds of flakes, and codes of some twenty coats.
+    bytes: ROW * rows * (16 + 16 + 16 + 2 * 8 + 20),
     lights: (light, form) => lights.of(light, () => fourOf(light, form)),
-    glow: light => glow.of(light, () => light),
     free() {
       gl.deleteFramebuffer(target)
       gl.deleteTexture(drawn)
-      for (const held of [codes, mirrorings, lights, glow]) held.free()
+      for (const held of [codes, mirrorings, lights]) held.free()
     },
   }
 }

@@ -1,9 +1,8 @@
-import type { PictureEngine } from '#shared/picture/engine/picture-engine'
+import type { LightAsk, PictureEngine } from '#shared/picture/engine/picture-engine'
 import { sampleLightKeep } from '#shared/picture/engine/sample-light'
 import type { ViewKit } from '#shared/picture/view-kit'
 import { coatShelves, type CoatShelves } from './coat-shelves'
 import { stackProgram, type StackProgram } from './draw-stack'
-import { glowKeeper } from './glow-keeper'
 import { openContext, rendererOf, type EngineCanvas } from './open-context'
 import { ROW } from './sample-textures'
 import { viewStore, type ViewStore } from './view-store'
@@ -22,7 +21,8 @@ const VIEWS_BYTES = 256 * 2 ** 20
 
 /** All that stands on the graphics processor; gone as a whole when it is taken away. */
 interface Standing {
-  program: StackProgram
+  /** For stacks without a coat that glows, and with one; compiled at the first use. */
+  programs: { quiet?: StackProgram, glowing?: StackProgram }
   shelves: CoatShelves
   views: WeakMap<ViewKit, ViewStore>
   /** Stores by last use, the longest ago first. */
@@ -32,8 +32,8 @@ interface Standing {
 }
 
 /**
- * Light worked out on the graphics processor: the whole stack of every sample in one go, with its flakes, finish and tone. Codes,
- * tables, what the tent does at every sample, and glow are worked out beside it and handed over once for as long as they stand.
+ * Light worked out on the graphics processor: the whole stack of every sample in one go, with its flakes, glow, finish and tone.
+ * Codes, tables and what the tent does at every sample are worked out beside it and handed over once for as long as they stand.
  *
  * @param canvas     of this engine's own, on a page or in a thread
  * @param viewsBytes what views may take on the graphics processor
@@ -42,7 +42,7 @@ interface Standing {
 export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1), viewsBytes: number = VIEWS_BYTES): Webgl2Engine | undefined {
   const gl = openContext(canvas)
   if (!gl) return undefined
-  const glow = glowKeeper(), samplesLit = sampleLightKeep()
+  const samplesLit = sampleLightKeep()
   let standing: Standing | undefined
 
   const losing = (event: Event) => {
@@ -57,7 +57,7 @@ export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1), v
     context.pixelStorei(context.UNPACK_ALIGNMENT, 1)
     const stores = new Set<ViewStore>()
     return {
-      program: stackProgram(context), shelves: coatShelves(context), views: new WeakMap(), stores,
+      programs: {}, shelves: coatShelves(context), views: new WeakMap(), stores,
       gone: new FinalizationRegistry((store) => {
         if (stores.delete(store)) store.free()
       }),
@@ -74,7 +74,7 @@ export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1), v
         standing ??= standUp(gl)
         const view = storeOf(gl, standing, kit, ask.form.samples.count)
         letGo(standing, viewsBytes)
-        standing.program.draw({ view, shelves: standing.shelves, ask, sample: samplesLit(ask.form, ask.lighting), glow: glow(kit, ask) })
+        programFor(gl, standing, ask).draw({ view, shelves: standing.shelves, ask, sample: samplesLit(ask.form, ask.lighting) })
         return readLight(gl, view, ask.form.samples.count)
       }
       catch (error) {
@@ -85,7 +85,7 @@ export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1), v
     },
     close() {
       canvas.removeEventListener('webglcontextlost', losing)
-      if (standing) for (const held of [...standing.stores, standing.shelves.films, standing.shelves.flakes, standing.program]) held.free()
+      if (standing) for (const held of [...standing.stores, ...Object.values(standing.shelves), ...Object.values(standing.programs)]) held.free()
       standing = undefined
       gl.getExtension('WEBGL_lose_context')?.loseContext()
     },
@@ -94,6 +94,10 @@ export function webgl2Engine(canvas: EngineCanvas = new OffscreenCanvas(1, 1), v
 
 function assertThere(gl: WebGL2RenderingContext): void {
   if (gl.isContextLost()) throw new Error('the graphics processor was taken away')
+}
+
+function programFor(gl: WebGL2RenderingContext, { programs }: Standing, { coats }: LightAsk): StackProgram {
+  return coats.some(({ table }) => table.glow) ? programs.glowing ??= stackProgram(gl, true) : programs.quiet ??= stackProgram(gl, false)
 }
 
 /** The store of a view, made at its first use. */
