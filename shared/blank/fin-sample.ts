@@ -8,6 +8,8 @@ import { PART_FIN, type ViewSamples } from './view-sample-lists'
 export const RIM_ROUND_MM = 0.6
 /** Share of the ray slopes that still tilts the gloss: more would break it into dashes. */
 export const GLOSS_RAYS = 0.3
+/** Share of the rim's rounding that still tilts the gloss: more would thread a dotted highlight along it. */
+export const GLOSS_RIM = 0.3
 const ROOT_DARKER = 0.28
 const ROOT_SHADE = 0.3
 
@@ -77,7 +79,8 @@ export function writeFinSample(
   const ax = -Math.sin(angle) * slope
   const ay = Math.cos(angle) * slope
   writeTurned(turn, round * place.rimX - ax, round * place.rimY - ay, facing, samples.normal, i)
-  writeTurned(turn, round * place.rimX - GLOSS_RAYS * ax, round * place.rimY - GLOSS_RAYS * ay, facing, samples.glossNormal, i)
+  const gloss = GLOSS_RIM * round
+  writeTurned(turn, gloss * place.rimX - GLOSS_RAYS * ax, gloss * place.rimY - GLOSS_RAYS * ay, facing, samples.glossNormal, i)
 }
 
 /**

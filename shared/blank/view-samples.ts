@@ -1,5 +1,6 @@
 import { goToColumn, heightAtPixel, newBodySampler, writeBodySample, xAtPixel, type BodySampler } from './body-sample'
 import { FIN_EDGE_ON, newFinScratch, rimDistance, standsOut, writeFinSample, type FinScratch } from './fin-sample'
+import { columnEdges, goToPixelColumn, STEEP, stripShare, stripsOf } from './outline-strips'
 import type { PreparedBlank } from './prepared-blank'
 import { newSection, tOfShare } from './profile'
 import { outlineSlope } from './view-column'
@@ -24,10 +25,15 @@ function roomNeeded(sampler: BodySampler): number {
   const section = newSection()
   let room = 0
   for (let px = 0; px < view.width; px++) {
-    const x = xAtPixel(sampler, px + 0.5)
-    if (x <= 0 || x >= blank.shape.length) continue
-    blank.profile.section(tOfShare(x / blank.shape.length), section)
-    room += Math.ceil(2 * view.scale * ((section.h + Math.abs(section.g)) * Math.abs(turn.cos) + section.w * Math.abs(turn.sin))) + 4
+    // Where the outline is steep, a column is as tall as its tallest strip.
+    let most = 0
+    for (const place of [0, 0.5, 1]) {
+      const x = xAtPixel(sampler, px + place)
+      if (x <= 0 || x >= blank.shape.length) continue
+      blank.profile.section(tOfShare(x / blank.shape.length), section)
+      most = Math.max(most, (section.h + Math.abs(section.g)) * Math.abs(turn.cos) + section.w * Math.abs(turn.sin))
+    }
+    if (most > 0) room += Math.ceil(2 * view.scale * most) + 6
   }
   for (const fin of blank.fins) {
     room += (Math.ceil((fin.right - fin.left) * view.scale) + 5) * (Math.ceil((fin.high - fin.low) * view.scale) + 5)
@@ -66,13 +72,16 @@ function addBody(sampler: BodySampler, samples: ViewSamples, { covered, bodyAt }
   const pixel = 1 / view.scale
   let count = 0
   for (let px = 0; px < view.width; px++) {
-    if (!goToColumn(sampler, xAtPixel(sampler, px + 0.5))) continue
+    const ends = goToPixelColumn(sampler, px)
+    if (!ends) continue
     const { high, low, phiHigh, phiLow } = sampler.column
-    const edges = [view.centreY - turn.way * view.scale * high, view.centreY - turn.way * view.scale * low]
-    const first = Math.max(0, Math.floor(Math.min(...edges)))
-    const last = Math.min(view.height - 1, Math.floor(Math.max(...edges)))
     const acrossHigh = across(outlineSlope(sampler.column, turn, phiHigh, sampler.point))
     const acrossLow = across(outlineSlope(sampler.column, turn, phiLow, sampler.point))
+    const strips = ends.isCut || Math.min(acrossHigh, acrossLow) < STEEP ? stripsOf(sampler, px) : null
+    if (strips) goToColumn(sampler, ends.x)
+    const edges = strips?.flat() ?? columnEdges(sampler)
+    const first = Math.max(0, Math.floor(Math.min(...edges)))
+    const last = Math.min(view.height - 1, Math.floor(Math.max(...edges)))
     // A pixel cut by the outline is sampled a little inside it, where most of what shows of it lies.
     const inset = Math.min(0.25 * pixel, 0.25 * (high - low))
     for (let py = first; py <= last; py++) {
@@ -80,7 +89,9 @@ function addBody(sampler: BodySampler, samples: ViewSamples, { covered, bodyAt }
       const seen = Math.min(high - inset, Math.max(low + inset, height))
       const kept = writeBodySample(sampler, seen, samples, count) - Math.min(high - seen, seen - low)
       const cosine = high - height < height - low ? acrossHigh : acrossLow
-      const share = clamp(0.5 + (Math.min(high - height, height - low) + kept) * cosine * view.scale)
+      const share = clamp(strips
+        ? stripShare(strips, py) + kept * cosine * view.scale
+        : 0.5 + (Math.min(high - height, height - low) + kept) * cosine * view.scale)
       if (share <= 0.004) continue
       const index = py * view.width + px
       samples.pixel[count] = index

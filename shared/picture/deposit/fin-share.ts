@@ -2,20 +2,23 @@ import { rayAngle, type FinOutline } from '#shared/blank/fin-outline'
 import { PART_FIN } from '#shared/blank/view-sample-lists'
 import type { Where } from '#shared/scheme/coat'
 import { keptMap, type DepositKeep } from './keep'
-import { hashShare } from './noise'
-import { normalShare } from './normal-share'
+import { hashShare, noise2, SWING } from './noise'
+import { normalShare, smoothStep } from './normal-share'
 
 type FinPaint = Where['fins'][number]
 
 /** Widths nobody gave, mm at a body of 100 mm. */
 const WIDTH = { 'rays': 0.45, 'leading edge': 0.9, 'rim': 0.9, 'spots': 0.55 }
 const EDGE_SOFT = 0.08
-/** How much thinner a ray's line is at the tip. */
-const RAY_THINS = 0.5
+/**
+ * A ray's line: how much thinner it is at the tip, how far its two branches part there (share of the way to the next ray) and from
+ * where, how far it sways, how unlike rays are, and from where it runs out before the rim. Chosen by eye.
+ */
+const RAY = { thins: 0.5, parts: 0.13, from: 0.35, fromVaries: 0.6, sways: 0.05 * SWING, swaysOver: 4, varies: 0.35, endsFrom: 0.78, ends: 0.5 }
 /** A rim is misted on: how soft, as a share of its width. */
 const RIM_SOFT = 0.35
 /** Spots stand in bows across the rays: rows and gaps in widths of a spot, and their length along the ray. */
-const SPOT = { row: 5.2, gap: 4.2, long: 2.4, missing: 0.12, strays: 0.5 }
+const SPOT = { row: 5.2, gap: 4.2, long: 2.4, missing: 0.14, strays: 0.9, smallest: 0.6 }
 
 /** How much of a coat lies on the fins at each fin sample, 0 to 1, into `out`; where entries meet, the stronger counts. */
 export function layFinShare(keep: DepositKeep, fins: Where['fins'], out: Float32Array): void {
@@ -45,7 +48,7 @@ function finMap(keep: DepositKeep, on: Exclude<FinPaint['on'], 'whole'>, width: 
       const y = fin.rootY + (V[i] ?? 0)
       switch (on) {
         case 'rays':
-          out[i] = rayShare(fin, x, y, width * (1 - RAY_THINS * (rootToTip[i] ?? 0)))
+          out[i] = rayShare(fin, x, y, width, rootToTip[i] ?? 0)
           break
         case 'leading edge':
           out[i] = normalShare((width - distanceTo(fin, edges[index] ?? [], x, y)) / EDGE_SOFT)
@@ -62,13 +65,18 @@ function finMap(keep: DepositKeep, on: Exclude<FinPaint['on'], 'whole'>, width: 
   })
 }
 
-/** A soft line `width` mm wide in the valley beside each ray; nothing on a smooth fin. */
-function rayShare(fin: FinOutline, x: number, y: number, width: number): number {
+/** A soft line `width` mm wide in the valley beside each ray, parting in two toward the tip; nothing on a smooth fin. */
+function rayShare(fin: FinOutline, x: number, y: number, width: number, toTip: number): number {
   if (fin.raysPerRadian === 0) return 0
   const ray = (rayAngle(fin, x, y) - fin.firstRay) * fin.raysPerRadian
-  const d = (ray - Math.round(ray)) / fin.raysPerRadian * Math.hypot(x - fin.originX, y - fin.originY)
-  const q = 2 * d / width
-  return Math.exp(-q * q / 2)
+  const own = Math.round(ray)
+  const radius = Math.hypot(x - fin.originX, y - fin.originY)
+  const from = RAY.from + RAY.fromVaries * hashShare(own, 5, 719)
+  const off = Math.abs(ray - own + RAY.sways * noise2(radius / RAY.swaysOver, 3 * own, 709))
+  const parted = Math.abs(off - RAY.parts * smoothStep(from, from + 1 - RAY.from, toTip))
+  const q = 2 * parted / fin.raysPerRadian * radius / (width * (1 - RAY.thins * toTip))
+  const strength = (1 - RAY.varies * hashShare(own, 3, 719)) * (1 - RAY.ends * smoothStep(RAY.endsFrom, 1, toTip))
+  return strength * Math.exp(-q * q / 2)
 }
 
 type Run = readonly [from: number, to: number]
@@ -118,10 +126,10 @@ function spotShare(fin: FinOutline, x: number, y: number, width: number, seed: n
   const column = Math.floor(across)
   const draw = (use: number) => hashShare(row, column * 8 + use, 701 + seed)
   if (draw(0) < SPOT.missing) return 0
-  const size = 0.75 + 0.25 * draw(1)
+  const size = SPOT.smallest + (1 - SPOT.smallest) * draw(1)
   const stray = (use: number, room: number) => 0.5 + SPOT.strays * room * (draw(use) - 0.5)
   const dx = (across - column - stray(2, 0.5)) * SPOT.gap * width
-  const dy = (height - row - stray(3, 0.4)) * SPOT.row * width
+  const dy = (height - row - stray(3, 0.17)) * SPOT.row * width
   const d = Math.hypot(dx, dy / SPOT.long)
   return normalShare((size * width * 0.9 - d) / EDGE_SOFT)
 }

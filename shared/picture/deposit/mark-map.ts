@@ -13,6 +13,8 @@ import { strokeField, type PlaneStroke } from './stroke-field'
 const FLICK = 0.75
 /** No two strokes of a hand are as long. */
 const FAN_VARIES = 0.035
+/** The outermost strokes of a fan are lifted sooner, so that it ends round. */
+const FAN_ROUND = 0.16
 /** The two flanks are drawn one after the other: no hand does the same twice. */
 const HANDS = 733
 
@@ -90,7 +92,7 @@ export function fanStrokes(root: PlanePoint, fan: Fan, length: number): PlaneStr
   return Array.from({ length: fan.count }, (_, k) => {
     const share = k / (fan.count - 1)
     const even = scale * (fan.length[0] + (fan.length[1] - fan.length[0]) * share)
-    const reach = even * (1 + FAN_VARIES * (2 * hashShare(k, fan.count, 811) - 1))
+    const reach = even * (1 - FAN_ROUND * (2 * share - 1) ** 4) * (1 + FAN_VARIES * (2 * hashShare(k, fan.count, 811) - 1))
     const angle = (fan.angle[0] + (fan.angle[1] - fan.angle[0]) * share) * Math.PI / 180
     const tip: PlanePoint = [root[0] + reach * Math.cos(angle), root[1] - reach * Math.sin(angle)]
     return { points: [root, tip], width: [scale * fan.width[0], scale * fan.width[1]], amount: fan.amount }
