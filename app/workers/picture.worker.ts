@@ -1,22 +1,24 @@
-import { z } from 'zod'
+import { chosenEngine } from './chosen-engine'
 import { letDown } from '#shared/picture/let-down'
+import type { Look } from '#shared/picture/look'
 import { pictureBench } from '#shared/picture/picture-bench'
-import { PictureAsk, type PictureAnswer } from '#shared/picture/picture-messages'
+import type { PictureAnswer, PictureAsk, PictureQuestion } from '#shared/picture/picture-messages'
 import { zoneBench } from '#shared/picture/zone-bench'
 import { zoneColours } from '#shared/picture/zone-colours'
+import type { SchemeBody } from '#shared/scheme/body'
+import type { Materials } from '#shared/scheme/materials'
 
 /** Paints the pictures of a page and works out its promised colours, away from the page. The latest request of a name wins. */
 
 /** A whole picture that takes no longer than this needs no coarse one before it, ms: going back to coarse would flicker. */
-const AT_ONCE_MS = 120
+const AT_ONCE_MS = 40
 
-type Work = Exclude<PictureAsk, { ask: 'forget' }>
+type Work = Exclude<PictureQuestion, { ask: 'forget' }>
 
-// The content policy lets nothing be compiled here; without this zod would try, and be told off in the console.
-z.config({ jitless: true })
-
-const bench = pictureBench()
+const { engine, tryGraphics } = chosenEngine()
+const bench = pictureBench('edits', engine)
 const measured = zoneBench()
+const known = new Map<number, Materials>()
 /** One request per name. */
 const wanted = new Map<string, Work>()
 let isAtWork = false
@@ -27,23 +29,39 @@ function post(answer: PictureAnswer, transfer: Transferable[] = []): void {
   self.postMessage(answer, { transfer })
 }
 
-self.addEventListener('message', (event: MessageEvent<unknown>) => {
-  const ask = PictureAsk.parse(event.data)
-  wanted.delete(ask.picture)
-  if (ask.ask === 'forget') return
-  wanted.set(ask.picture, ask)
-  void workAll()
+self.addEventListener('message', ({ data: ask }: MessageEvent<PictureAsk>) => {
+  switch (ask.ask) {
+    case 'know': return void known.set(ask.materials, ask.given)
+    case 'unlearn': return void known.delete(ask.materials)
+    case 'forget': return void wanted.delete(ask.picture)
+    default:
+      wanted.delete(ask.picture)
+      wanted.set(ask.picture, { ...ask, look: lookOf(ask.look) })
+      void workAll()
+  }
 })
+
+/** A look with the materials it is made with, as they were told. */
+function lookOf({ body, materials }: { body: SchemeBody, materials: number }): Look {
+  const given = known.get(materials)
+  if (!given) throw new RangeError(`materials ${materials} were never told`)
+  return { body, materials: given }
+}
 
 /** Lets messages that came meanwhile be heard. */
 function breath(): Promise<void> {
   return new Promise(resolve => setTimeout(resolve))
 }
 
-/** Quick answers first, then the picture that was asked for last. */
+/** What somebody points at first, then the picture that was asked for last, then what is said about it. */
 function next(): Work | undefined {
   const all = [...wanted.values()]
-  return all.find(({ ask }) => ask !== 'paint') ?? all.at(-1)
+  return all.find(({ ask }) => ask === 'pick') ?? all.findLast(({ ask }) => ask === 'paint') ?? all.at(0)
+}
+
+/** What is said about a look, and can be between the stages of its picture. */
+function aside(): Work | undefined {
+  return [...wanted.values()].find(({ ask }) => ask !== 'paint')
 }
 
 async function workAll(): Promise<void> {
@@ -52,6 +70,7 @@ async function workAll(): Promise<void> {
   for (let work = next(); work; work = next()) {
     await attempt(work)
     await breath()
+    if (wanted.size === 0 && work.ask === 'paint') tryGraphics()
   }
   isAtWork = false
 }
@@ -80,11 +99,17 @@ async function answer(work: Work): Promise<void> {
 /** Between the stages of a picture, whoever asks something else is answered and a newer request takes over. */
 async function paint({ picture, request, look, options }: Extract<Work, { ask: 'paint' }>): Promise<void> {
   const since = performance.now()
+  let asides = 0
   for (const { stage, picture: painted } of bench.stages(look, options, lastWhole < AT_ONCE_MS ? 'full' : 'coarse')) {
-    if (stage === 'full') lastWhole = performance.now() - since
-    post({ answer: 'painted', picture, request, stage, painted }, [painted.rgba.buffer])
+    if (stage === 'full') lastWhole = performance.now() - since - asides
+    post({ answer: 'painted', picture, request, stage, painted, engine: engine.name }, [painted.rgba.buffer])
     await breath()
-    if (wanted.has(picture)) return
-    for (let quick = next(); quick && quick.ask !== 'paint'; quick = next()) await attempt(quick)
+    // The whole picture comes before what is said about it, unless the next edit is there already.
+    const isEdited = wanted.has(picture)
+    const talk = stage === 'coarse' && !isEdited ? undefined : aside()
+    const before = performance.now()
+    if (talk) await attempt(talk)
+    asides += performance.now() - before
+    if (isEdited || wanted.has(picture)) return
   }
 }

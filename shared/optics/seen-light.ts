@@ -7,7 +7,8 @@ import type { SeenWish } from './seen-wish'
 import type { SurfaceLoss } from './surface'
 import { perTen, PICTURE_XYZ_WEIGHTS } from './to-picture-bands'
 
-export { SeenLamp, SeenWater, SeenWish, seenKey, DAYLIGHT_IN_AIR } from './seen-wish'
+export { DAYLIGHT_IN_AIR, seenKey } from './seen-key'
+export type { SeenLamp, SeenWater, SeenWish } from './seen-wish'
 
 /** What a picture is seen by, in the 16 bands of pictures. Water, lamps and what an eye is used to are all in these numbers. */
 export interface SeenLight {

@@ -1,4 +1,5 @@
-import { TILT_MAX, TILT_MIN, type PictureLight } from './picture-options'
+import { TILT_MAX, TILT_MIN } from './option-defaults'
+import type { PictureLight } from './picture-options'
 
 const DEGREE = Math.PI / 180
 

@@ -7,19 +7,21 @@ import { toPictureBands } from '#shared/optics/to-picture-bands'
 import { canonicalJson } from '#shared/scheme/canonical'
 import { canvasOf, copyCanvas, encodeCanvas, type Canvas } from './canvas'
 import { coatTable, type CoatTable } from './coat-table'
-import { drawEye } from './draw-eye'
 import { drawHardware } from './draw-hardware'
 import type { PictureEngine } from './engine/picture-engine'
 import { plainEngine } from './engine/plain-engine'
+import { eyeLayer, layEyes, type EyeLayer } from './eye-layer'
 import { keepSome } from './keep-some'
 import { aspecularOf, lightKey } from './light-rig'
 import { lightTables, type LightTables } from './light-tables'
 import type { Look } from './look'
 import type { Lighting } from './paint-light'
-import { pictureOptions, type Picture, type PictureLight, type PictureOptions, type PictureWish } from './picture-options'
+import { fullOptions } from './option-defaults'
+import type { Picture, PictureLight, PictureOptions, PictureWish } from './picture-options'
 import { pickPlace, type PickedPlace } from './pick-place'
 import { FOUR_PLACES, jumpingPixels, NINE_PLACES, putRefined, shownPixels } from './refine'
-import { eyesAreFitted, finishShown, shownCoats } from './shown-coats'
+import { eyesAreFitted, finishShown, shownCoats, type ShownCoat } from './shown-coats'
+import { valueKeys } from './value-key'
 import { keptMap, tidyMaps, viewKit, type KeyedCoat, type ViewKit } from './view-kit'
 
 /** A coarse picture is this much smaller in each direction. */
@@ -66,17 +68,22 @@ export interface PictureBench {
 export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: PictureEngine = plainEngine()): PictureBench {
   const most = KEPT[work]
   const blanks = keepSome<PreparedBlank>(most.blanks), lights = keepSome<LightTables>(most.lights)
+  const eyeLayers = keepSome<EyeLayer>(most.views)
+  const keyOf = valueKeys()
+  let shown: { look: Look, upTo: string, clear: boolean, coats: ShownCoat[] } | undefined
   const views = keepSome<ViewKit>(most.views), refinedViews = keepSome<RefinedView>(most.refinedViews)
   const tables = keepSome<CoatTable>(most.tables), seens = keepSome<SeenLight>(most.lights)
 
   return {
     draw(look, wish) {
-      const options = pictureOptions(wish)
+      shown = undefined
+      const options = fullOptions(wish)
       if (options.quality === 'coarse') return finish(look, coarser(options), drawFull(look, coarser(options)))
       return finish(look, options, refine(look, options, drawFull(look, options)))
     },
     * stages(look, wish, from = 'coarse') {
-      const options = pictureOptions(wish)
+      shown = undefined
+      const options = fullOptions(wish)
       const isCoarse = options.quality === 'coarse'
       if (from === 'coarse' || isCoarse) yield { stage: 'coarse', picture: finish(look, coarser(options), drawFull(look, coarser(options))) }
       if (isCoarse) return
@@ -85,12 +92,12 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
       yield { stage: 'refined', picture: finish(look, options, refine(look, options, full)) }
     },
     pick(look, wish, x, y) {
-      return pickPlace(kitOf(look, pictureOptions(wish)).kit.samples, look.materials.blank.shape, x, y)
+      return pickPlace(kitOf(look, fullOptions(wish)).kit.samples, look.materials.blank.shape, x, y)
     },
   }
 
   function blankOf({ materials: { blank: { shape } } }: Look): { key: string, blank: PreparedBlank } {
-    const key = canonicalJson(shape)
+    const key = keyOf(shape)
     return { key, blank: blanks(key, () => prepareBlank(shape)) }
   }
 
@@ -109,15 +116,21 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
     return lights(lightKey(light), () => lightTables(light))
   }
 
+  /** The coats a picture shows: the stages of one picture ask again and again. */
+  function shownOf(look: Look, { upTo, clear }: PictureOptions): ShownCoat[] {
+    if (shown?.look !== look || shown.upTo !== upTo || shown.clear !== clear) shown = { look, upTo, clear, coats: shownCoats(look, { upTo, clear }) }
+    return shown.coats
+  }
+
   function seenBy({ seen }: PictureOptions): SeenLight {
     return seens(seenKey(seen), () => seenLight(seen))
   }
 
   /** Light of every sample of a kit. */
   function lit(kit: ViewKit, look: Look, options: PictureOptions): Float32Array {
-    const coats = shownCoats(look, options).map((coat): KeyedCoat => {
+    const coats = shownOf(look, options).map((coat): KeyedCoat => {
       const { codes, peak } = keptMap(kit, coat)
-      const paintKey = canonicalJson([coat.paint, coat.passes * peak])
+      const paintKey = `${coat.passes * peak} ${keyOf(coat.paint)}`
       return { codes, key: `${coat.placeKey}${paintKey}`, table: tables(paintKey, () => coatTable(coat.paint, coat.passes * peak)) }
     })
     tidyMaps(kit, coats.length)
@@ -154,14 +167,15 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
 
   /** Adds eyes, lip and wire, and encodes for the screen. */
   function finish(look: Look, options: PictureOptions, painted: Canvas): Picture {
-    const { kit, view } = kitOf(look, options)
+    const { key, kit, view } = kitOf(look, options)
     const canvas = copyCanvas(painted)
     const { eyes } = look.body
     const { white } = seenBy(options)
     // Eyes and wire are drawn as a white lamp shows them, so for as long everything is counted against the white there.
     tint(canvas, white.map(channel => 1 / Math.max(DARKEST, channel)))
     if (eyes && eyesAreFitted(look, options.upTo)) {
-      for (const eye of kit.parts.eyes) drawEye(canvas, eye, eyes, lightOf(options.light), options.plain)
+      const eyesKey = `${key} ${lightKey(options.light)} ${options.plain} ${canonicalJson(eyes)}`
+      layEyes(canvas, eyeLayers(eyesKey, () => eyeLayer(canvas, kit.parts.eyes, eyes, lightOf(options.light), options.plain)))
     }
     drawHardware(canvas, kit.parts)
     tint(canvas, white.map(channel => Math.max(DARKEST, channel)))

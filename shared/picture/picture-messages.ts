@@ -1,44 +1,51 @@
-import { z } from 'zod'
 import type { ZoneName } from '#shared/blank/zone-names'
-import { PASSES_MAX } from '#shared/scheme/coat'
-import { SchemeBody } from '#shared/scheme/body'
-import { Materials } from '#shared/scheme/materials'
+import type { SchemeBody } from '#shared/scheme/body'
+import type { Materials } from '#shared/scheme/materials'
+import type { EngineName } from './engine/picture-engine'
 import type { LetDownStep } from './let-down'
+import type { Look } from './look'
 import type { PickedPlace } from './pick-place'
 import type { PictureStage } from './picture-bench'
-import type { Picture } from './picture-options'
-import { PictureOptions } from './picture-options'
-import type { ZoneColour } from './zone-colours'
+import type { Picture, PictureOptions } from './picture-options'
+import type { ZoneColour, ZoneWish } from './zone-colours'
 
-const Asked = z.object({
+// A page and its thread are one program, so what they say to one another is held by its types alone: a check at the border would cost
+// every edit some milliseconds, and every page the download of the checker.
+
+interface Asked<L> {
   /** Which picture, or which question, of the page. A later request for the same makes an earlier one pointless. */
-  picture: z.string().min(1),
+  picture: string
   /** Rises with every request. */
-  request: z.number().int(),
-  look: z.object({ body: SchemeBody, materials: Materials }),
-})
+  request: number
+  look: L
+}
 
-/** What a page asks of the painting thread. */
-export const PictureAsk = z.discriminatedUnion('ask', [
-  Asked.extend({ ask: z.literal('paint'), options: PictureOptions }),
+type About<L> = Asked<L> & (
+  | { ask: 'paint', options: PictureOptions }
   /** What lies at a place of the picture, pixels. */
-  Asked.extend({ ask: z.literal('pick'), options: PictureOptions, x: z.number(), y: z.number() }),
+  | { ask: 'pick', options: PictureOptions, x: number, y: number }
   /** The promised colours of every zone. */
-  Asked.extend({ ask: z.literal('zones'), wish: PictureOptions.pick({ upTo: true, clear: true, light: true }) }),
+  | { ask: 'zones', wish: ZoneWish }
   /** Colours of one coat over its ground, pass by pass. */
-  Asked.extend({
-    ask: z.literal('let-down'), coatId: z.uuid(), zone: z.string().transform(zone => zone as ZoneName), passesMost: z.number().int().min(0).max(PASSES_MAX), clear: z.boolean(),
-  }),
-  /** The page no longer shows this picture. */
-  z.object({ ask: z.literal('forget'), picture: z.string().min(1) }),
-])
-export type PictureAsk = z.output<typeof PictureAsk>
+  | { ask: 'let-down', coatId: string, zone: ZoneName, passesMost: number, clear: boolean }
+)
+
+/** The page no longer shows this picture. */
+interface Forget { ask: 'forget', picture: string }
+
+/** What a page wants to know, with the whole look: how it travels is the thread's own business. */
+export type PictureQuestion = About<Look> | Forget
+
+/** What a page tells and asks the painting thread. Materials are many times a body, and the same from edit to edit: they travel once. */
+export type PictureAsk = About<{ body: SchemeBody, materials: number }> | Forget
+  /** Materials that looks are made with from now on, and that none is made with any more. */
+  | { ask: 'know', materials: number, given: Materials } | { ask: 'unlearn', materials: number }
 
 export type { PictureStage } from './picture-bench'
 
 /** What the painting thread answers. */
 export type PictureAnswer
-  = | { answer: 'painted', picture: string, request: number, stage: PictureStage, painted: Picture }
+  = | { answer: 'painted', picture: string, request: number, stage: PictureStage, painted: Picture, engine: EngineName }
     | { answer: 'picked', picture: string, request: number, place: PickedPlace | undefined }
     | { answer: 'zones', picture: string, request: number, zones: ZoneColour[] }
     | { answer: 'let-down', picture: string, request: number, steps: LetDownStep[] }

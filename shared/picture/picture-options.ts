@@ -1,13 +1,12 @@
 import { z } from 'zod'
-import { DAYLIGHT_IN_AIR, SeenWish } from '#shared/optics/seen-wish'
+import { SeenWish } from '#shared/optics/seen-wish'
+import { OPTION_DEFAULTS, TILT_MAX, TILT_MIN } from './option-defaults'
+
+export { TILT_MAX, TILT_MIN } from './option-defaults'
 
 /** Widest and highest picture, pixels. */
 export const PICTURE_SIDE_MAX = 4096
 export const PICTURE_SIDE_MIN = 16
-
-/** The lamp travels an arc from face to flop: degrees from the gloss direction of a flank that faces the viewer. */
-export const TILT_MIN = 15
-export const TILT_MAX = 110
 
 /** Where the light stands: the tent of the bench, one of its two extremes, or a lamp on the arc between them. */
 export const PictureLight = z.union([
@@ -30,22 +29,22 @@ export const PictureOptions = z.object({
   width: side,
   height: side,
   /** Degrees about the long axis: 0 left flank, 90 back, 180 right flank (belly up), 270 belly. */
-  roll: z.number().min(-360).max(360).default(0),
+  roll: z.number().min(-360).max(360).default(OPTION_DEFAULTS.roll),
   /** Which way the nose points: to the right turns the picture half round, so roll 180 shows the right flank with its back up. */
-  nose: z.enum(['left', 'right']).default('left'),
-  light: PictureLight.default('bench'),
+  nose: z.enum(['left', 'right']).default(OPTION_DEFAULTS.nose),
+  light: PictureLight.default(OPTION_DEFAULTS.light),
   /** The lamp, the water in between and whose eye. */
-  seen: SeenWish.default(DAYLIGHT_IN_AIR),
-  upTo: UpTo.default('all'),
+  seen: SeenWish.default(OPTION_DEFAULTS.seen),
+  upTo: UpTo.default(OPTION_DEFAULTS.upTo),
   /** Seen under a gloss clear; without it, as it stands before clear: matt, and clear coats left out. */
-  clear: z.boolean().default(true),
+  clear: z.boolean().default(OPTION_DEFAULTS.clear),
   /** Grey around the blank, 0-255, exactly; null leaves it transparent. */
-  surround: z.number().int().min(0).max(255).nullable().default(119),
+  surround: z.number().int().min(0).max(255).nullable().default(OPTION_DEFAULTS.surround),
   /** A soft shadow in the surround: for cards and walls, off where colours are judged. */
-  shadow: z.boolean().default(false),
+  shadow: z.boolean().default(OPTION_DEFAULTS.shadow),
   /** The promised colours only: no form, no gloss. */
-  plain: z.boolean().default(false),
-  quality: z.enum(PICTURE_QUALITIES).default('screen'),
+  plain: z.boolean().default(OPTION_DEFAULTS.plain),
+  quality: z.enum(PICTURE_QUALITIES).default(OPTION_DEFAULTS.quality),
   /** Scale; absent, the blank fills the picture. */
   mmPerPixel: z.number().min(0.005).max(10).optional(),
 })

@@ -3,7 +3,8 @@ import { paintingThread, type PaintingThread } from './painting-thread'
 import type { Look } from '#shared/picture/look'
 import type { PickedPlace } from '#shared/picture/pick-place'
 import type { PictureAnswer, PictureStage } from '#shared/picture/picture-messages'
-import { pictureOptions, type Picture, type PictureWish } from '#shared/picture/picture-options'
+import { fullOptions } from '#shared/picture/option-defaults'
+import type { Picture, PictureWish } from '#shared/picture/picture-options'
 
 /** A picture that follows its look. */
 export interface UsePicture {
@@ -17,7 +18,8 @@ export interface UsePicture {
 }
 
 /**
- * Paints a look away from the page, and again whenever the look or the wish changes: coarse first, then finer.
+ * Paints a look away from the page, and again whenever the look or the wish changes: coarse first, then finer. Bodies, materials and
+ * wishes are values: they are replaced by others, never changed in themselves, so nobody has to search them for changes.
  * Nothing is painted while either is null. Only in a browser.
  */
 export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOrGetter<PictureWish | null>): UsePicture {
@@ -60,10 +62,11 @@ export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOr
     return thread
   }
 
-  watch([() => toValue(look), () => toValue(wish)], ([newLook, newWish]) => {
+  watch([() => toValue(look)?.body, () => toValue(look)?.materials, () => toValue(wish)], () => {
+    const [newLook, newWish] = [toValue(look), toValue(wish)]
     if (!newLook || !newWish) return
-    onThread().ask({ ask: 'paint', picture: name, request: ++latest, look: newLook, options: pictureOptions(newWish) })
-  }, { immediate: true, deep: true })
+    onThread().ask({ ask: 'paint', picture: name, request: ++latest, look: newLook, options: fullOptions(newWish) })
+  }, { immediate: true })
 
   onScopeDispose(() => {
     thread?.ask({ ask: 'forget', picture: name })
@@ -75,7 +78,7 @@ export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOr
     pick(right, down) {
       const [nowLook, nowWish] = [toValue(look), toValue(wish)]
       if (!nowLook || !nowWish) return Promise.resolve(undefined)
-      const options = pictureOptions(nowWish)
+      const options = fullOptions(nowWish)
       const request = ++picked
       return new Promise((resolve) => {
         picks.set(request, resolve)

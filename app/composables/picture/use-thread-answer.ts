@@ -1,10 +1,10 @@
 import { onScopeDispose, useId, watch } from 'vue'
 import { paintingThread } from './painting-thread'
-import type { PictureAnswer, PictureAsk } from '#shared/picture/picture-messages'
+import type { PictureAnswer, PictureQuestion } from '#shared/picture/picture-messages'
 
 type Without<T, Keys extends string> = T extends unknown ? Omit<T, Keys> : never
 /** A question for the painting thread, without the name and number it travels under. */
-export type ThreadQuestion = Without<Exclude<PictureAsk, { ask: 'forget' | 'paint' | 'pick' }>, 'picture' | 'request'>
+export type ThreadQuestion = Without<Exclude<PictureQuestion, { ask: 'forget' | 'paint' | 'pick' }>, 'picture' | 'request'>
 
 /** Asks the painting thread whenever the question changes, and hears the newest answer. Asks nothing while there is no question. */
 export function useThreadAnswer(question: () => ThreadQuestion | null, hear: (answer: PictureAnswer) => void): void {
@@ -20,7 +20,7 @@ export function useThreadAnswer(question: () => ThreadQuestion | null, hear: (an
       if (answer.request === latest) hear(answer)
     })
     thread.ask({ ...asked, picture: name, request: ++latest })
-  }, { immediate: true, deep: true })
+  }, { immediate: true })
 
   onScopeDispose(() => {
     if (hush) paintingThread().ask({ ask: 'forget', picture: name })

@@ -21,7 +21,7 @@ const simd = (): PictureEngine => simdEngine()!
 const apart = (a: Float32Array, b: Float32Array) => Math.max(...a.map((value, i) => Math.abs(value - b[i]!)))
 const freshKit = ({ kit }: Asked): ViewKit => ({ ...kit })
 
-describe('the vector engine', () => {
+describe('the vector engine', { timeout: 60_000 }, () => {
   it('agrees with double precision on random stacks', () => {
     const engine = simd()
     const { samples, most, mean } = joined(ASKS.map(({ kit, ask }) => differenceOf(engine.light(kit, ask), doubleLight(ask))))
