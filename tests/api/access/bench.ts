@@ -23,6 +23,15 @@ export const BENCH_ACCESS: AccessRow[] = [
   },
   { method: 'GET', path: '/api/runs/[runId]', who: atBench(200), make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}`, secret: SECRET }) },
   { method: 'GET', path: '/api/runs/[runId]/events', who: atBench(200), make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/events?since=0`, secret: SECRET }) },
+  { method: 'GET', path: '/api/runs/[runId]/report', who: atBench(200), make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/report`, secret: SECRET }) },
+  {
+    method: 'POST', path: '/api/runs/[runId]/measures', who: atBench(201),
+    make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/measures`, body: { piece: 1, card: [118, 118, 118], zones: [{ zone: 'back', rgb: [90, 80, 60] }] } }),
+  },
+  {
+    method: 'POST', path: '/api/runs/[runId]/take-in', who: { ...atBench(200), bench: 403 },
+    make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/take-in`, headers: { 'if-match': '"v1"' } }),
+  },
   {
     method: 'GET', path: '/api/runs/[runId]/live', who: atBench(200),
     make: async (ground) => {
