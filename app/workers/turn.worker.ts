@@ -39,7 +39,7 @@ async function workAll(): Promise<void> {
     const ask = wanted
     wanted = undefined
     try {
-      await lay(ask)
+      if (await lay(ask)) post({ answer: 'done', request: ask.request })
     }
     catch (error) {
       post({ answer: 'failed', request: ask.request, reason: error instanceof Error ? error.message : String(error) })
@@ -49,7 +49,8 @@ async function workAll(): Promise<void> {
   isAtWork = false
 }
 
-async function lay(ask: TurnAsk): Promise<void> {
+/** Sends all that a request asks for. @returns false when something newer is wanted */
+async function lay(ask: TurnAsk): Promise<boolean> {
   const { look, request, scale } = ask
   const blankKey = bench.blankKey(look)
   if (sent.form !== blankKey) {
@@ -57,7 +58,10 @@ async function lay(ask: TurnAsk): Promise<void> {
     Object.assign(sent, { form: blankKey, sheets: '', paint: '' })
   }
   const paintKey = canonicalJson([blankKey, scale, look.body, look.materials, ask.upTo, ask.clear, ask.seen])
-  if (sent.paint === paintKey) return sendLight(ask, lastSigmas)
+  if (sent.paint === paintKey) {
+    sendLight(ask, lastSigmas)
+    return true
+  }
   // Finer form sheets stay when only the paint has changed.
   const fineKey = `${blankKey} ${scale}`
   for (const stage of ['coarse', 'fine'] as const) {
@@ -65,11 +69,12 @@ async function lay(ask: TurnAsk): Promise<void> {
       post({ answer: 'sheets', request, ...bench.sheets(look, scaleOf(scale, stage)) })
       sent.sheets = stage === 'fine' ? fineKey : 'coarse'
       await breath()
-      if (wanted) return
+      if (wanted) return false
     }
-    if (!await layStage(ask, stage)) return
+    if (!await layStage(ask, stage)) return false
   }
   sent.paint = paintKey
+  return true
 }
 
 const scaleOf = (scale: number, stage: TurnStage) => stage === 'fine' ? scale : scale / COARSER

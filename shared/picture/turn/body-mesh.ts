@@ -119,7 +119,7 @@ function middleOf(mesh: MeshDraft, ring: number): [number, number, number] {
 
 /** Joins the rings on both sides of a gap by a thin web that ends `deep` mm under the skin, so that one does not look through. */
 function addWeb(mesh: MeshDraft, from: number, to: number, deep: number): void {
-  const middles = [from, to].map(ring => middleOf(mesh, ring)) as [number[], number[]] // two by the list
+  const middles = [middleOf(mesh, from), middleOf(mesh, to)] as const
   const inner = [from, to].map((ring, end) => {
     const first = mesh.kept.length
     for (let k = 0; k <= STEPS_ROUND; k++) {

@@ -27,6 +27,8 @@ export type TurnAnswer
     | { answer: 'sheets', request: number, body: FormedSheet, fins: FormedSheet | undefined }
     | { answer: 'light', request: number, light: LightSheet }
     | { answer: 'paint', request: number, stage: TurnStage, paint: TurnPaint }
+    /** All that this request asked for has been sent. */
+    | { answer: 'done', request: number }
     | { answer: 'failed', request: number, reason: string }
 
 /** The buffers of an answer that are handed over and not copied. */

@@ -63,14 +63,15 @@ function faces(mesh: TurnMesh): TurnMesh {
 }
 
 /** Triangles that face against the normals of their corners. */
-function turnedInward({ position, normal, index }: TurnMesh): number {
+function turnedInward({ position, normal, index, kept }: TurnMesh): number {
   let count = 0
   for (let i = 0; i < index.length; i += 3) {
     const [a, b, c] = [index[i]!, index[i + 1]!, index[i + 2]!].map(k => [...position.subarray(3 * k, 3 * k + 3)]) as [number[], number[], number[]]
     const [u, v] = [b.map((value, k) => value - a[k]!), c.map((value, k) => value - a[k]!)] as [number[], number[]]
     const cross = [u[1]! * v[2]! - u[2]! * v[1]!, u[2]! * v[0]! - u[0]! * v[2]!, u[0]! * v[1]! - u[1]! * v[0]!]
     const size = Math.hypot(...cross)
-    if (size < 1e-7) continue
+    // The web in a joint is too thin to have an outside along its edge.
+    if (size < 1e-7 || kept[index[i]!]! < 0.1) continue
     const mean = [0, 1, 2].map(k => [i, i + 1, i + 2].reduce((sum, at) => sum + normal[3 * index[at]! + k]!, 0))
     if (cross.reduce((sum, value, k) => sum + value * mean[k]!, 0) / size < -0.05) count++
   }
