@@ -80,6 +80,6 @@ test.describe('engines of pictures', () => {
   })
 
   test('on the graphics processor hand over what changed, let go, and live through its loss', async ({ page }) => {
-    expectAllHeld(await reportOf<TestReport>('graphics-page', address => page.goto(address)), graphicsFiles(), 12)
+    expectAllHeld(await reportOf<TestReport>('graphics-page', address => page.goto(address)), graphicsFiles(), 18)
   })
 })

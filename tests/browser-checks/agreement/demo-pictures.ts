@@ -5,7 +5,7 @@ import type { PictureWish } from '#shared/picture/picture-options'
 import { demoWall } from '../../fixtures/demo-looks'
 import type { Asked } from './random-stacks'
 
-const SIZE = { width: 320, height: 160 }
+const SIZE = { width: 240, height: 120 }
 /** How one finish is looked at beside the plain way: other sides, other lights, before the clear, without form. */
 const WISHES: readonly PictureWish[] = [
   { ...SIZE, roll: 90, light: 'face' },

@@ -1,18 +1,20 @@
 import { describe, expect, it } from 'vitest'
-import { perch } from '../../fixtures/demo-looks'
+import { demoOptics, ember, perch } from '../../fixtures/demo-looks'
 import { differenceOf, joined } from '../agreement/compare-light'
 import { doubleLight } from '../agreement/double-light'
-import { randomStacks } from '../agreement/random-stacks'
+import { randomStacks, type Asked } from '../agreement/random-stacks'
 import { graphicsCounts } from './graphics-counts'
 import { sparedEngine } from '~/workers/webgl2/spared-engine'
 import { webgl2Engine, type Webgl2Engine } from '~/workers/webgl2/webgl2-engine'
+import { seenLight } from '#shared/optics/seen-light'
+import { coatTable } from '#shared/picture/coat-table'
 import { plainEngine } from '#shared/picture/engine/plain-engine'
 import type { Look } from '#shared/picture/look'
 import { pictureBench } from '#shared/picture/picture-bench'
 
 /** Bytes: room for three views of one row of samples each, and not for four. */
 const THREE_VIEWS = 3.5 * 2048 * 96
-const SIZE = { width: 320, height: 160 }
+const WISH = { width: 480, height: 240, quality: 'coarse' } as const
 
 function pageCanvas(): { canvas: HTMLCanvasElement, gl: WebGL2RenderingContext } {
   const canvas = document.createElement('canvas')
@@ -56,6 +58,45 @@ describe('on a canvas of a page', () => {
     expect(difference.most).toBeLessThan(0.5)
     expect(difference.mean).toBeLessThan(0.1)
   })
+  it('holds sixty thick whites over one another', () => {
+    const { kit, ask } = randomStacks().next().value as Asked
+    const table = coatTable(demoOptics('Opaque white'), 30)
+    const coats = Array.from({ length: 60 }, (_, c) => ({ key: `${c}`, table, codes: Uint8Array.from({ length: 32 }, (_, i) => 200 + i) }))
+    const asked = { ...ask, coats }
+    const engine = engineOn(pageCanvas().canvas)
+    expect(differenceOf(engine.light(kit, asked), doubleLight(asked)).most).toBeLessThan(0.1)
+    engine.close()
+  })
+  it('sees what is seen under water and by any lamp', () => {
+    const engine = engineOn(pageCanvas().canvas)
+    const asks = [...randomStacks()].slice(0, 12)
+    for (const wish of [{ light: 'A' }, { light: { kelvin: 4200 } }, { light: 'D65', water: { type: '5C', depth: 5, distance: 2, adapted: true } }] as const) {
+      const seen = seenLight(wish)
+      const all = asks.map(({ kit, ask }) => {
+        const asked = { ...ask, lighting: { ...ask.lighting, seen } }
+        return differenceOf(engine.light(kit, asked), doubleLight(asked))
+      })
+      expect(joined(all).most).toBeLessThan(0.5)
+    }
+    engine.close()
+  })
+  it('paints an edit as it would paint all afresh', () => {
+    const engine = engineOn(pageCanvas().canvas), fresh = engineOn(pageCanvas().canvas)
+    const [edited, other] = [pictureBench('edits', engine), pictureBench('edits', fresh)]
+    for (const look of [perch, onePassMore(perch), ember, perch]) edited.draw(look, WISH)
+    expect(apart(edited.draw(onePassMore(ember), WISH).rgba, other.draw(onePassMore(ember), WISH).rgba)).toBe(0)
+    engine.close()
+    fresh.close()
+  })
+  it('leaves more glowing coats than it has room for to the next engine', () => {
+    const { kit, ask } = randomStacks().next().value as Asked
+    const table = coatTable(demoOptics('Fluorescent orange'), 1)
+    const coats = Array.from({ length: 9 }, (_, c) => ({ key: `${c}`, table, codes: new Uint8Array(32).fill(60 + c) }))
+    const engine = sparedEngine(engineOn(pageCanvas().canvas), plainEngine())
+    expect(differenceOf(engine.light(kit, { ...ask, coats }), doubleLight({ ...ask, coats })).most).toBeLessThan(0.01)
+    expect(engine.name).toBe('webgl2')
+    engine.close()
+  })
   it('is not offered where nothing can be drawn into 32-bit numbers', () => {
     const { canvas, gl } = pageCanvas()
     const { getExtension } = gl
@@ -70,7 +111,7 @@ describe('what it hands over', () => {
     const { uploads } = graphicsCounts(gl)
     const engine = engineOn(canvas)
     const bench = pictureBench('edits', engine)
-    const draw = (look: Look) => void [...bench.stages(look, { ...SIZE, quality: 'coarse' })]
+    const draw = (look: Look) => void bench.draw(look, WISH)
     draw(perch)
     expect(uploads()).toBeGreaterThan(10)
     draw(perch)
@@ -102,25 +143,24 @@ describe('when the machine takes the graphics processor away', () => {
     const taken = gl.getExtension('WEBGL_lose_context')!
     const engine = sparedEngine(engineOn(canvas), plainEngine())
     const [bench, plain] = [pictureBench('edits', engine), pictureBench()]
-    const wish = { ...SIZE, quality: 'screen' } as const
     const edited = onePassMore(perch)
 
-    expect(apart(bench.draw(perch, wish).rgba, plain.draw(perch, wish).rgba)).toBeLessThanOrEqual(1)
+    expect(apart(bench.draw(perch, WISH).rgba, plain.draw(perch, WISH).rgba)).toBeLessThanOrEqual(1)
     expect(engine.name).toBe('webgl2')
 
     const lost = heard(canvas, 'webglcontextlost')
     taken.loseContext()
     // At once, before the page has heard of it.
-    expect(apart(bench.draw(edited, wish).rgba, plain.draw(edited, wish).rgba)).toBe(0)
+    expect(apart(bench.draw(edited, WISH).rgba, plain.draw(edited, WISH).rgba)).toBe(0)
     await lost
     await breath()
-    expect(apart(bench.draw(perch, wish).rgba, plain.draw(perch, wish).rgba)).toBe(0)
+    expect(apart(bench.draw(perch, WISH).rgba, plain.draw(perch, WISH).rgba)).toBe(0)
     expect(engine.name).toBe('plain')
 
     const back = heard(canvas, 'webglcontextrestored')
     taken.restoreContext()
     await back
-    expect(apart(bench.draw(edited, wish).rgba, plain.draw(edited, wish).rgba)).toBeLessThanOrEqual(1)
+    expect(apart(bench.draw(edited, WISH).rgba, plain.draw(edited, WISH).rgba)).toBeLessThanOrEqual(1)
     expect(engine.name).toBe('webgl2')
     engine.close()
   })
