@@ -1,4 +1,4 @@
-// Answers one colour question, written as JSON on standard input or as the first argument. See docs/optics/README.md.
+// Answers one colour question, written as JSON on standard input or as the first argument. See docs/optics.md.
 import { fileURLToPath } from 'node:url'
 import { readFileSync } from 'node:fs'
 import { build } from 'esbuild'

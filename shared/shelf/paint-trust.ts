@@ -4,7 +4,7 @@ import type { StoredOptics } from './stored-optics'
 
 /**
  * How far a prediction with this paint can be trusted, and why.
- * The wording follows what each way of knowing was seen to give on measured pigments over several grounds (see docs/optics).
+ * The wording follows what each way of knowing was seen to give on measured pigments over several grounds (see docs/optics.md).
  */
 export function paintTrust(known: PaintKnown, optics: Pick<StoredOptics, 'clipped' | 'fluorescent'>): PaintTrust {
   const trust = byHow(known, optics)
