@@ -17,13 +17,13 @@ import { removePhotoFiles } from './remove-photo-files'
 /** What taking a photo in needs from outside: the store, and the bounded workshop where it is decoded. */
 export interface PhotoTools { store: ObjectStore, process: (bytes: Uint8Array) => Promise<ProcessedPhoto> }
 
-/** Takes a camera file in as a photo of a scheme. The same file again is the same photo. */
-export async function addPhoto(ctx: Ctx, schemeId: string, runId: string | null, bytes: Uint8Array, tools: PhotoTools): Promise<PhotoView> {
+/** Takes a camera file in as a photo of a scheme, under the id a tablet gave it if it did. The same file again, or the same id, is the same photo. */
+export async function addPhoto(ctx: Ctx, schemeId: string, runId: string | null, bytes: Uint8Array, tools: PhotoTools, ownId?: string): Promise<PhotoView> {
   assertMay(ctx, 'photo:add')
   const sha256 = createHash('sha256').update(bytes).digest('hex')
   const already = await inTransaction(ctx, async (tx) => {
     await assertSchemeHere(tx, schemeId)
-    const same = await sameFile(tx, schemeId, sha256)
+    const same = await sameFile(tx, schemeId, sha256) ?? await sameId(tx, schemeId, ownId)
     if (same) return viewOf(tx, same)
     await assertRoom(tx, schemeId)
     await assertRun(tx, schemeId, runId)
@@ -32,7 +32,7 @@ export async function addPhoto(ctx: Ctx, schemeId: string, runId: string | null,
   if (already) return already
 
   const photo = await processed(bytes, tools)
-  const id = randomUUID()
+  const id = ownId ?? randomUUID()
   // Files first, row last: a photo that can be seen is whole.
   try {
     await tools.store.put(photoKeys.original(ctx.workshopId, id), bytes, 'application/octet-stream')
@@ -54,8 +54,8 @@ export async function addPhoto(ctx: Ctx, schemeId: string, runId: string | null,
     return added
   }
   catch (error) {
-    // What cannot be taken back now is swept later: no row names it.
-    await removePhotoFiles(ctx.workshopId, id, tools.store).catch(() => undefined)
+    // What cannot be taken back now is swept later: no row names it. Under an id of the tablet's own another sending may be under way.
+    if (ownId === undefined) await removePhotoFiles(ctx.workshopId, id, tools.store).catch(() => undefined)
     throw error
   }
 }
@@ -64,6 +64,13 @@ const ofScheme = (tx: Ctx, schemeId: string) => and(eq(photos.workshopId, tx.wor
 
 async function sameFile(tx: Ctx, schemeId: string, sha256: string): Promise<PhotoRow | undefined> {
   const [row] = await tx.db.select().from(photos).where(and(ofScheme(tx, schemeId), eq(photos.sha256, sha256)))
+  return row
+}
+
+async function sameId(tx: Ctx, schemeId: string, id: string | undefined): Promise<PhotoRow | undefined> {
+  if (id === undefined) return undefined
+  const [row] = await tx.db.select().from(photos).where(and(eq(photos.workshopId, tx.workshopId), eq(photos.id, id)))
+  if (row && row.schemeId !== schemeId) throw new Problem({ code: 'photo/not-found' })
   return row
 }
 
