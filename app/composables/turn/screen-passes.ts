@@ -41,10 +41,11 @@ export function screenPasses(renderer: WebGLRenderer): ScreenPasses {
   }) as [Scene, Scene] // two in the list
   let goes = 0
   renderer.autoClear = false
-  renderer.setClearColor(0, 0)
 
   return {
     add(scene, isFirst) {
+      // Said every time: a renderer that got its context back has forgotten it.
+      renderer.setClearColor(0, 0)
       renderer.setRenderTarget(one)
       renderer.clear()
       renderer.render(scene, camera)
