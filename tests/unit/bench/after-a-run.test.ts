@@ -4,6 +4,7 @@ import { labFromPatch } from '#shared/bench/grey-card'
 import { differenceWords } from '#shared/bench/difference-words'
 import { EFFECT_IS_NOT_JUDGED, judgeZones } from '#shared/bench/judge-zones'
 import { paintUsed } from '#shared/bench/paint-used'
+import { patchMean } from '#shared/bench/patch-mean'
 import { runDifferences, takeInEdits } from '#shared/bench/run-differences'
 import type { RunAct } from '#shared/bench/run-event'
 import type { ZoneMeasure } from '#shared/bench/run-measure'
@@ -155,5 +156,22 @@ describe('a colour out of a photo', () => {
     expect(judgeZones([zone({})], [zone({ measured: [60, 20, 0] })])).toMatchObject([{ sample: [60, 20, 0], words: 'another colour' }])
     expect(judgeZones([zone({ isEffect: true })], [])).toMatchObject([{ words: EFFECT_IS_NOT_JUDGED }])
     expect(judgeZones([zone({ predicted: null })], [])).toMatchObject([{ toPredicted: null, words: 'nothing to hold it against' }])
+  })
+})
+
+describe('a patch of a photo', () => {
+  const photo = (paint: (x: number, y: number) => number) => {
+    const data = new Uint8ClampedArray(20 * 10 * 4)
+    for (let y = 0; y < 10; y++) for (let x = 0; x < 20; x++) data.fill(paint(x, y), 4 * (20 * y + x), 4 * (20 * y + x) + 3)
+    return { data, width: 20, height: 10 }
+  }
+
+  it('is the mean of its light, without what lies beside it or outside the photo', () => {
+    expect(patchMean(photo(() => 118), 10, 5, 3).map(Math.round)).toEqual([118, 118, 118])
+    expect(Math.round(patchMean(photo(x => x < 10 ? 20 : 200), 3, 5, 3)[0])).toBe(20)
+    expect(Math.round(patchMean(photo(() => 90), 0, 0, 4)[0])).toBe(90)
+    // Half black, half white sends back half the light, which a screen shows as 188.
+    expect(Math.round(patchMean(photo((x, y) => (x + y) % 2 === 0 ? 0 : 255), 9.5, 4.5, 4)[0])).toBe(188)
+    expect(() => patchMean(photo(() => 90), 50, 50, 4)).toThrow(RangeError)
   })
 })
