@@ -1,3 +1,5 @@
+import type { BassCatch } from '#shared/optics/bass-eyes'
+import { bassCatchOf } from '#shared/optics/bass-map'
 import { deltaE2000 } from '#shared/optics/delta-e'
 import { groundFromLab } from '#shared/optics/known-film'
 import { exactSeen } from '#shared/optics/seen-exact'
@@ -31,6 +33,8 @@ export interface ZoneColour {
   promised: ColourShown
   /** How sure it is: at 45° where flakes lie. Its words call coats by their numbers in the scheme. */
   spread: PromiseSpread
+  /** What a largemouth bass's two cones take of it, flakes as at 45°; `verdictOn` compares two. */
+  cones: BassCatch
   /** Only where flakes lie: toward the gloss, and far from it. */
   face?: ColourShown
   flop?: ColourShown
@@ -73,6 +77,7 @@ export function zoneColours(look: Look, wish: ZoneWish, bench: ZoneBench = zoneB
     return {
       zone, label, wayUp,
       promised: colourAtAngle(promised, aspecularOf(wish.light), seen),
+      cones: bassCatchOf(stack, seen),
       spread: promiseSpread(stack, seen, here.map(({ coat }) => coat.laid.number)),
       ...(promised.face && promised.flop ? { face: colourShown(promised.face), flop: colourShown(promised.flop) } : {}),
     }

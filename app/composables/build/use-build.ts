@@ -81,6 +81,7 @@ export function provideBuild(given: Pick<Build, 'scheme' | 'draft' | 'whyNot' | 
   const upTo = ref('all')
   const clear = ref(true)
   const tilt = ref(PROMISE_TILT)
+  const seen = useSeen()
 
   // A coat that was taken out leaves the hand on its neighbour, and the level on what is still there.
   watch(coats, (now, before) => {
@@ -102,9 +103,9 @@ export function provideBuild(given: Pick<Build, 'scheme' | 'draft' | 'whyNot' | 
     coat: computed(() => coats.value.find(coat => coat.id === coatId.value) ?? null),
     number: computed(() => coats.value.findIndex(coat => coat.id === coatId.value) + 1),
     zone: ref<ZoneName>('upper-flank'),
-    zones: useZoneColours(() => import.meta.client ? look.value : null, () => ({ upTo: upTo.value, clear: clear.value, light: { tilt: tilt.value } })),
+    zones: useZoneColours(() => import.meta.client ? look.value : null, () => ({ upTo: upTo.value, clear: clear.value, light: { tilt: tilt.value }, seen: seen.wish.value })),
     upTo, clear, tilt,
-    seen: useSeen(),
+    seen,
     side: ref<PictureSide>('left flank'),
     isSheetOpen: ref(false),
     act(edit) {

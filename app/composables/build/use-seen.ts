@@ -1,5 +1,5 @@
 import { computed, ref, type ComputedRef, type Ref } from 'vue'
-import type { SeenLamp, SeenWish } from '#shared/optics/seen-wish'
+import type { SEEN_EYES, SeenLamp, SeenWish } from '#shared/optics/seen-wish'
 import type { Water } from '#shared/optics/water'
 
 /** What a blank is seen by: the light, and the water it swims in. */
@@ -12,6 +12,8 @@ export interface UseSeen {
   distance: Ref<number>
   /** Seen by an eye used to the water; otherwise as a camera set for the light above sees it. */
   adapted: Ref<boolean>
+  /** Whose eye: a person's, or what a bass's two cones take. */
+  eye: Ref<typeof SEEN_EYES[number]>
   wish: ComputedRef<SeenWish>
 }
 
@@ -21,11 +23,13 @@ export function useSeen(): UseSeen {
   const water = ref<Water>('tea-stained')
   const depth = ref(0), distance = ref(0.5)
   const adapted = ref(true)
+  const eye = ref<typeof SEEN_EYES[number]>('person')
   return {
-    lamp, water, depth, distance, adapted,
+    lamp, water, depth, distance, adapted, eye,
     wish: computed(() => ({
       light: lamp.value,
       ...(depth.value > 0 ? { water: { type: water.value, depth: depth.value, distance: distance.value, adapted: adapted.value } } : {}),
+      ...(eye.value === 'bass' ? { eye: eye.value } : {}),
     })),
   }
 }
