@@ -39,7 +39,7 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
   'shared/shelf': ['shared/shelf', 'shared/optics', 'shared/quantities', 'shared/errors'],
   'shared/scheme': ['shared/scheme', 'shared/optics', 'shared/blank', 'shared/shelf', 'shared/api', 'shared/quantities', 'shared/errors'],
   'shared/picture': ['shared/picture', 'shared/scheme', 'shared/optics', 'shared/blank', 'shared/shelf', 'shared/quantities', 'shared/errors'],
-  'shared/bench': ['shared/bench', 'shared/scheme', 'shared/picture', 'shared/blank', 'shared/shelf', 'shared/api', 'shared/quantities', 'shared/errors'],
+  'shared/bench': ['shared/bench', 'shared/scheme', 'shared/picture', 'shared/blank', 'shared/shelf', 'shared/optics', 'shared/api', 'shared/quantities', 'shared/errors'],
   'shared/photos': ['shared/photos', 'shared/errors'],
   'shared/cards': ['shared/cards', 'shared/scheme', 'shared/picture', 'shared/blank', 'shared/photos', 'shared/people', 'shared/errors'],
 }
