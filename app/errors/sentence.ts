@@ -44,6 +44,7 @@ export function sentence(problem: ProblemData): string {
     case 'photo/not-found': return 'This photo is gone.'
     case 'photo/not-an-image': return 'This is not a photo we can read. Save it as JPEG, PNG or WebP and add it again.'
     case 'photo/too-large': return `This photo is too large: at most ${Math.floor(problem.maxBytes / 2 ** 20)} MB and ${Math.floor(problem.maxPixels / 1_000_000)} million pixels.`
+    case 'picture/too-many-waiting': return `Many pictures are being painted. Ask for this one again in ${waitWords(problem.retryAfterSeconds)}.`
     case 'photo/too-many': return `A scheme keeps at most ${problem.max} photos. Take one away first.`
     case 'photo/unreadable': return 'This photo is damaged and could not be opened. Take it again, or save it anew.'
     case 'card/not-found': return 'This card is gone, or its link was taken back.'

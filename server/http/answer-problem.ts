@@ -24,7 +24,7 @@ export async function answerProblem(event: H3Event, problem: ProblemData): Promi
   setResponseStatus(event, status, title)
   setResponseHeader(event, 'cache-control', 'no-store')
   removeResponseHeader(event, 'etag')
-  if (problem.code === 'auth/too-many-tries') setResponseHeader(event, 'retry-after', problem.retryAfterSeconds)
+  if ('retryAfterSeconds' in problem) setResponseHeader(event, 'retry-after', problem.retryAfterSeconds)
   const body = { type: `urn:countershade:problem:${problem.code.replace('/', ':')}`, title, status, ...problem }
   await send(event, JSON.stringify(body), 'application/problem+json')
 }

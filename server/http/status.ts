@@ -44,6 +44,7 @@ export const STATUS = {
   'photo/not-an-image': 415,
   'photo/too-large': 413,
   'photo/unreadable': 422,
+  'picture/too-many-waiting': 503,
   'photo/too-many': 409,
   'card/not-found': 404,
   'card/changed-meanwhile': 412,

@@ -1,6 +1,4 @@
 import type { PublishedDemo } from './finishes'
-import { encodePicture } from '#server/pictures/encode-picture'
-import { paintOnThread } from '#server/pictures/painting-threads'
 import { objectStore } from '#server/photos/object-store'
 import { takeInPhoto } from '#server/photos/photo-pool'
 import type { Ctx } from '#server/services/ctx'
@@ -24,8 +22,8 @@ const VIEWS: readonly { wish: PictureWish, side: string }[] = [
 /** Photos of the demo finishes, painted by our own renderer; `views` of each. */
 export async function photographDemo(desk: Ctx, { schemeId, revision }: PublishedDemo, views: number): Promise<void> {
   for (const { wish, side } of VIEWS.slice(0, views)) {
-    const painted = await paintOnThread({ look: { body: revision.body, materials: revision.materials }, wish })
-    const photo = await addPhoto(desk, schemeId, null, await encodePicture(painted, 'jpeg'), { store: objectStore(), process: takeInPhoto })
+    const { bytes } = await drawLook(desk, { body: revision.body, materials: revision.materials }, wish, 'jpeg')
+    const photo = await addPhoto(desk, schemeId, null, bytes, { store: objectStore(), process: takeInPhoto })
     await changePhoto(desk, photo.id, { alt: side })
   }
 }

@@ -49,6 +49,7 @@ export const ProblemData = z.discriminatedUnion('code', [
   plain('photo/not-an-image'),
   z.object({ code: z.literal('photo/too-large'), maxBytes: z.number().int(), maxPixels: z.number().int() }),
   plain('photo/unreadable'),
+  z.object({ code: z.literal('picture/too-many-waiting'), retryAfterSeconds: z.number().int() }),
   z.object({ code: z.literal('photo/too-many'), max: z.number().int() }),
   plain('card/not-found'),
   plain('card/changed-meanwhile'),
