@@ -2,6 +2,7 @@ import { readdirSync, readFileSync } from 'node:fs'
 import { createRequire } from 'node:module'
 import { join } from 'node:path'
 import { build, type Plugin } from 'esbuild'
+import { PUBLISHED } from './published-folders'
 
 const ROOT = join(import.meta.dirname, '../..')
 const HERE = join(ROOT, 'tests/browser-checks')
@@ -11,10 +12,25 @@ function testsIn(...folders: string[]): string[] {
   return folders.flatMap(folder => readdirSync(join(ROOT, folder)).filter(file => file.endsWith('.test.ts')).sort().map(file => `${folder}/${file}`))
 }
 
-/** Tests of the optics that need nothing of Node but to read a published table. */
+/** Searches are no laws, and take long. */
+const SEARCHES = /\/find-[^/]+$/
+
+/** What pages have of Node's files. */
+const READING = { existsSync: true, readFileSync: true }
+
+/** Laws of pictures: what composing, light and tone keep to, and that a plain picture shows what is promised. */
+const PICTURE_LAWS = ['compose', 'light', 'plain', 'tone'].map(name => `tests/unit/picture/${name}.test.ts`)
+
+/** Published checks and laws: tests of the optics that need nothing of Node but to read a published table, and laws of pictures. */
 export function lawFiles(): string[] {
-  return testsIn('tests/reference/optics', 'tests/unit/optics')
-    .filter(path => !/from 'node:(?!fs')/.test(readFileSync(join(ROOT, path), 'utf8')))
+  return [...testsIn('tests/browser-checks/laws', 'tests/reference/optics', 'tests/unit/optics'), ...PICTURE_LAWS].filter(path => !SEARCHES.test(path)).filter(path => isLaw(readFileSync(join(ROOT, path), 'utf8')))
+}
+
+/** Tests of commands, plots and documents are of no use in a page: they start programs, or read the repository. */
+function isLaw(source: string): boolean {
+  const ofNode = [...source.matchAll(/^import (.+) from '(?:node:(.+)|.*\/scripts\/.+)'$/gm)]
+  const onlyReads = ofNode.every(([, names, from]) => from === 'fs' && names?.replace(/[{} ]/g, '').split(',').every(name => name in READING))
+  return onlyReads && (ofNode.length === 0 || PUBLISHED.some(folder => source.includes(folder)))
 }
 
 /** Tests that need a page with a graphics processor, played or real. */

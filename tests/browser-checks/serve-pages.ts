@@ -2,9 +2,7 @@ import { readFile } from 'node:fs/promises'
 import { createServer, type IncomingMessage, type ServerResponse } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import { text } from 'node:stream/consumers'
-
-/** Folders of Debian packages with published tables. */
-const PUBLISHED = ['/usr/share/colord/', '/usr/share/color/argyll/ref/']
+import { PUBLISHED } from './published-folders'
 
 /** A server for the pages of these checks, and what they hand back. */
 export interface PageServer {
@@ -27,7 +25,7 @@ export async function servePages(files: ReadonlyMap<string, Uint8Array>): Promis
     }
     if (pathname === '/published') {
       const file = searchParams.get('file') ?? ''
-      const isPublished = PUBLISHED.some(folder => file.startsWith(folder)) && !file.includes('..')
+      const isPublished = PUBLISHED.some(folder => file.startsWith(`${folder}/`)) && !file.includes('..')
       return void response.end(isPublished ? await readFile(file) : response.writeHead(404) && '')
     }
     const script = files.get(pathname)
