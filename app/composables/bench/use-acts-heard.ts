@@ -1,15 +1,14 @@
-import { onBeforeUnmount, onMounted, ref, type Ref, shallowRef, type ShallowRef } from 'vue'
+import { ref, type Ref, shallowRef, type ShallowRef } from 'vue'
 import { useEventListener, useIntervalFn } from '@vueuse/core'
 import { fetchActs } from './bench-link'
 import { useBenchClock } from './use-bench-clock'
+import { useRunLive } from '~/composables/run-live/use-run-live'
 import type { RunShelf } from '~/bench/device/run-shelf'
 import { problemOf } from '~/errors/problem-of'
-import { RunEventsView, type RunEventView, type RunView } from '#shared/bench/run-view'
+import type { RunEventsView, RunEventView, RunView } from '#shared/bench/run-view'
 
 /** How often one asks what others did meanwhile: while the server tells by itself, and while it does not, ms. */
 const ASK_MS = { told: 20_000, untold: 4_000 }
-/** A stream that broke off is opened anew after this time, ms. */
-const REOPEN_MS = 8_000
 
 /** What the notebook shows of a run. */
 export interface ActsHeard {
@@ -28,10 +27,7 @@ export function useActsHeard(run: RunView, shelf: RunShelf, { onHeard, network }
   const heard = shallowRef<readonly RunEventView[]>(run.events)
   const headNumber = ref(run.headNumber)
   const since = () => heard.value.at(-1)?.seq ?? 0
-  let stream: EventSource | null = null
   let askedAt = 0
-  /** The server has nothing more to tell by itself. */
-  let isOver = false
 
   async function take(view: RunEventsView): Promise<void> {
     headNumber.value = view.headNumber
@@ -39,7 +35,13 @@ export function useActsHeard(run: RunView, shelf: RunShelf, { onHeard, network }
     const fresh = view.events.filter(event => event.seq > since())
     if (fresh.length === 0) return
     heard.value = [...heard.value, ...fresh]
-    await shelf.hear(run.id, { events: fresh, headNumber: view.headNumber }).catch(() => undefined)
+    try {
+      await shelf.hear(run.id, { events: fresh, headNumber: view.headNumber })
+    }
+    catch {
+      // A tablet that keeps nothing of what it hears keeps its own acts: without either it would not know its place after a restart.
+      return
+    }
     await onHeard(fresh.map(event => event.id))
   }
 
@@ -52,49 +54,18 @@ export function useActsHeard(run: RunView, shelf: RunShelf, { onHeard, network }
       clock.heard(view.now, asked, Date.now())
       await take(view)
       network('online')
-      if (!stream) openStream()
     }
     catch (error) {
       if (problemOf(error) === null) network('none')
     }
   }
 
-  function openStream(): void {
-    if (stream || isOver || document.visibilityState === 'hidden') return
-    const opened = new EventSource(`/api/runs/${run.id}/live?since=${since()}`)
-    stream = opened
-    opened.addEventListener('acts', (event) => {
-      const view = RunEventsView.safeParse(JSON.parse(event.data))
-      if (view.success) void take(view.data)
-    })
-    opened.addEventListener('over', () => {
-      isOver = true
-      shutStream()
-    })
-    opened.addEventListener('error', () => {
-      shutStream()
-      window.setTimeout(() => void listen(), REOPEN_MS)
-    })
-  }
-  function shutStream(): void {
-    stream?.close()
-    stream = null
-  }
-
-  onMounted(openStream)
-  onBeforeUnmount(shutStream)
+  const { isLive } = useRunLive({ runId: run.id, since, onNews: view => void take(view) })
   useIntervalFn(() => {
-    if (performance.now() - askedAt >= (stream ? ASK_MS.told : ASK_MS.untold)) void listen()
+    if (performance.now() - askedAt >= (isLive.value ? ASK_MS.told : ASK_MS.untold)) void listen()
   }, 1_000)
   useEventListener(window, 'online', () => void listen())
-  useEventListener(window, 'offline', () => {
-    shutStream()
-    network('none')
-  })
-  useEventListener(document, 'visibilitychange', () => {
-    // A page nobody sees keeps no way open.
-    if (document.visibilityState === 'hidden') shutStream()
-    else void listen()
-  })
+  useEventListener(window, 'offline', () => network('none'))
+  useEventListener(document, 'visibilitychange', () => void listen())
   return { heard, headNumber, listen }
 }
