@@ -8,6 +8,10 @@ const HAND = { along: 0.13, round: 0.10, fineAlong: 0.045, fineRound: 0.05 }
 /** Bodies are thinner than high: their depth counts more, so that the flanks are unlike. */
 const DEPTH = 1.3
 const EDGE = { along: 0.16, round: 0.20 }
+/** A hand's noise is worked out at every fourth sample of a column, where pixels are at least so fine (pixels a mm) and face the viewer. */
+const STRIDE = 4
+const STRIDE_SCALE = 4
+const STRIDE_FACING = 0.35
 /** Droplets of two sizes, mm, and the share of the larger. */
 const DROPLET = { small: 0.10, large: 0.27, share: 0.55 }
 /** Cells that may hold one stray drop, mm, and the radius of a drop. */
@@ -49,21 +53,53 @@ function makeNoise(keep: DepositKeep): SurfaceNoise {
     for (let f = 0; f < FIELDS; f++) fields[FIELDS * i + f] = three[f] ?? 0
     three.fill(0)
   }
-  const layAt = (i: number, x: number, y: number, z: number) => {
+  const layHand = (i: number, x: number, y: number, z: number) => {
     addThreeSpaceNoises(x / HAND.along, y / HAND.round, z / HAND.round, 101, handUnit, three)
     addThreeSpaceNoises(x / HAND.fineAlong, y / HAND.fineRound, z / HAND.fineRound, 211, 0.5 * handUnit, three)
     write(noise.hand, i)
     addThreeSpaceNoises(x / EDGE.along, y / EDGE.round, z / EDGE.round, 307, 1, three)
     write(noise.edge, i)
+  }
+  const layDroplets = (i: number) => {
     const seed = hash2(part[i] ?? 0, side[i] ?? 1, 401)
     addThreeNoises((U[i] ?? 0) / DROPLET.small, (V[i] ?? 0) / DROPLET.small, seed, seen, three)
     addThreeNoises((U[i] ?? 0) / DROPLET.large, (V[i] ?? 0) / DROPLET.large, seed + 17, DROPLET.share * seen, three)
     write(noise.droplets, i)
   }
   // In space rather than on the skin: no seam along back or belly, and two sides that differ.
-  for (const i of keep.onBody) layAt(i, (U[i] ?? 0) / L, (section[2 * i] ?? 0) / L, DEPTH * (section[2 * i + 1] ?? 0) / L)
-  for (const i of keep.onFins) layAt(i, (U[i] ?? 0) / L, (V[i] ?? 0) / L, part[i] ?? 0)
+  const layOnBody = (i: number) => layHand(i, (U[i] ?? 0) / L, (section[2 * i] ?? 0) / L, DEPTH * (section[2 * i + 1] ?? 0) / L)
+  for (let k = 0; k < keep.onBody.length;) {
+    const i = keep.onBody[k] ?? 0
+    layOnBody(i)
+    // What a hand does is far wider than a few pixels of a column: between two of them it runs straight.
+    if (!runsOn(keep, k)) {
+      k++
+      continue
+    }
+    layOnBody(i + STRIDE)
+    for (const fields of [noise.hand, noise.edge]) between(fields, i)
+    k += STRIDE
+  }
+  for (const i of keep.onFins) layHand(i, (U[i] ?? 0) / L, (V[i] ?? 0) / L, part[i] ?? 0)
+  for (const list of [keep.onBody, keep.onFins]) for (const i of list) layDroplets(i)
   return noise
+}
+
+/** True when the next few samples of the body lie one under the other in one column, well apart from the outline. */
+function runsOn({ onBody, samples: { pixel, normal, view } }: DepositKeep, k: number): boolean {
+  const i = onBody[k] ?? 0
+  return onBody[k + STRIDE] === i + STRIDE
+    && Math.abs((pixel[i + STRIDE] ?? 0) - (pixel[i] ?? 0)) === STRIDE * view.width
+    && view.scale >= STRIDE_SCALE
+    && Math.min(normal[3 * i + 2] ?? 0, normal[3 * (i + STRIDE) + 2] ?? 0) > STRIDE_FACING
+}
+
+function between(fields: Float32Array, i: number): void {
+  for (let f = 0; f < FIELDS; f++) {
+    const from = fields[FIELDS * i + f] ?? 0
+    const step = ((fields[FIELDS * (i + STRIDE) + f] ?? 0) - from) / STRIDE
+    for (let n = 1; n < STRIDE; n++) fields[FIELDS * (i + n) + f] = from + n * step
+  }
 }
 
 /** The stray drops of a view, found at the first call and kept. */
