@@ -8,7 +8,7 @@ export const TILT_MAX = 110
 /** What a picture shows and how it is lit unless told otherwise. */
 export const OPTION_DEFAULTS = {
   roll: 0, nose: 'left', light: 'bench', seen: DAYLIGHT_IN_AIR, upTo: 'all', clear: true, surround: 119, shadow: false, plain: false, quality: 'screen',
-} as const satisfies Omit<PictureOptions, 'width' | 'height' | 'mmPerPixel'>
+} as const
 
 /** A wish with every default filled in. Asks for nothing of the painting thread that would have to be downloaded with it. */
 export function fullOptions(wish: PictureWish): PictureOptions {
