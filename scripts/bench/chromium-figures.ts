@@ -3,7 +3,7 @@ import { brotliCompressSync, gzipSync } from 'node:zlib'
 import { readFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { build, type Plugin } from 'esbuild'
-import { chromium } from 'playwright-core'
+import { chromium, type CDPSession } from 'playwright-core'
 import type { PageFigures } from './chromium-page'
 import { demoWall } from '../../tests/fixtures/demo-looks'
 
@@ -45,8 +45,8 @@ export async function bundleSizes(root: string): Promise<BundleSize[]> {
   ]
 }
 
-/** What a browser measures. */
-export interface ChromiumFigures { browser: string, pages: PageFigures[], requests: number }
+/** What a browser measures; `pageCpu` is what the page's own thread takes of the processor for one change, ms: sending it and drawing all that comes back. */
+export interface ChromiumFigures { browser: string, pages: PageFigures[], requests: number, pageCpu: number }
 
 /** Measures edits and a drag in Chromium, whose graphics are software. */
 export async function chromiumFigures(root: string): Promise<ChromiumFigures> {
@@ -65,23 +65,34 @@ export async function chromiumFigures(root: string): Promise<ChromiumFigures> {
   const browser = await chromium.launch({ executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: ['--no-sandbox', '--use-angle=swiftshader', '--enable-unsafe-swiftshader'] })
   try {
     const pages: PageFigures[] = []
-    let requests = 0
+    let requests = 0, pageCpu = 0
     for (const finish of FINISHES) {
       const page = await browser.newPage()
       await page.goto(`http://127.0.0.1:${address.port}/`)
       await page.waitForFunction(() => 'measure' in window)
+      const devtools = await page.context().newCDPSession(page)
+      await devtools.send('Performance.enable', { timeDomain: 'threadTicks' })
+      const before = await busy(devtools)
       const measured = await page.evaluate(asked => window.measure(asked), { finish, look: demoWall.get(finish)! })
       requests += await page.evaluate(() => {
         const since = performance.getEntriesByName('drag')[0]!.startTime
         return performance.getEntriesByType('resource').filter(entry => entry.startTime > since).length
       })
+      const pictures = measured.edits.length * 4 / 3 + measured.drag.changes
+      pageCpu = Math.max(pageCpu, (await busy(devtools) - before) / pictures)
       pages.push(measured)
       await page.close()
     }
-    return { browser: `Chromium ${browser.version()}`, pages, requests }
+    return { browser: `Chromium ${browser.version()}`, pages, requests, pageCpu }
   }
   finally {
     await browser.close()
     server.close()
   }
+}
+
+/** Milliseconds of the processor that the page's own thread has taken. */
+async function busy(devtools: CDPSession): Promise<number> {
+  const { metrics } = await devtools.send('Performance.getMetrics')
+  return 1000 * (metrics.find(({ name }) => name === 'TaskDuration')?.value ?? NaN)
 }

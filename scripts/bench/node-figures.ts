@@ -99,6 +99,9 @@ function furthest(a: Float32Array, b: Float32Array): number {
   return most
 }
 
+/** What edits of a finish take until its first picture and its whole one, ms of the processor. */
+export interface EditCosts { finish: string, first: number[], whole: number[] }
+
 /** Times, ms of the processor, of every way to do one task. */
 export interface NodeFigures {
   task: { width: number, height: number, coats: number }
@@ -107,7 +110,7 @@ export interface NodeFigures {
   byCoats: Line
   byPixels: Line
   even: { coats: number, ms: number, none: number }
-  edits: { finish: string, plain: number, simd: number }[]
+  edits: { plain: EditCosts, simd: EditCosts }[]
   find: { what: string, ms: number }[]
 }
 
@@ -132,28 +135,31 @@ export function nodeFigures(): NodeFigures {
     return [WIDTH * height / 1000, cost(engineRun(engine, sized), 10)] as const
   }))
   const even = { coats: 24, ms: cost(engineRun(engine, stackTask(WIDTH, HEIGHT, 24, true)), 10), none: cost(engineRun(engine, stackTask(WIDTH, HEIGHT, 0)), 10) }
-  const edits = ['Perch, evening water', 'Roach, low sun', 'Ember'].map(finish => ({ finish, plain: editCost(finish, plainEngine()), simd: editCost(finish, engine) }))
+  const edits = ['Perch, evening water', 'Roach, low sun', 'Ember'].map(finish => ({ plain: editCosts(finish, plainEngine()), simd: editCosts(finish, engine) }))
   return { task: { width: WIDTH, height: HEIGHT, coats: COATS }, ways, apart, byCoats, byPixels, even, edits, find: findFigures() }
 }
 
-/** An edit of each coat's passes in turn, to the whole picture: the mean. */
-function editCost(finish: string, engine: PictureEngine): number {
+/**
+ * Every coat of a finish edited in turn, its passes and its place: from the edited look to the pixels of the first picture and of the
+ * whole one, as the painting thread goes about it. A first round is for getting ready.
+ */
+function editCosts(finish: string, engine: PictureEngine): EditCosts {
   const bench = pictureBench('edits', engine)
   const look = structuredClone(demoWall.get(finish)!)
   const coats = look.body.stack.flatMap(item => item.act === 'coat' ? [item.coat] : [])
-  const wish = { width: WIDTH, height: HEIGHT }
-  const whole = () => {
-    for (const { stage } of bench.stages(look, wish, 'full')) if (stage === 'full') return
+  const first: number[] = [], whole: number[] = []
+  for (let round = 0; round < 5; round++) {
+    for (const [c, coat] of coats.entries()) {
+      if ((round + c) % 2) coat.passes = 0.8 + 0.1 * round
+      else coat.where.reach = 0.4 * round
+      const before = process.cpuUsage()
+      for (const { stage } of bench.stages(look, { width: WIDTH, height: HEIGHT })) {
+        const { user, system } = process.cpuUsage(before)
+        if (round > 0 && stage !== 'refined') (stage === 'coarse' ? first : whole).push((user + system) / 1000)
+      }
+    }
   }
-  whole()
-  let sum = 0, change = 0
-  for (const coat of coats) {
-    sum += cost(() => {
-      coat.passes = 1 + 0.01 * (++change % 50)
-      whole()
-    }, 2)
-  }
-  return sum / coats.length
+  return { finish, first, whole }
 }
 
 /** Looking for a coat over a primed ground: on a shelf of 27 film paints, and every cup of up to three of twelve paints and eight drops. */
