@@ -6,10 +6,10 @@ import type { turning as Turning } from './turn/page'
 
 declare const turning: typeof Turning
 
-const [WIDTH, HEIGHT, SURROUND] = [600, 290, 119]
+const [WIDTH, HEIGHT, SURROUND] = [420, 204, 119]
 let page: Page
 
-test.describe.configure({ mode: 'serial' })
+test.describe.configure({ mode: 'serial', timeout: 300_000 })
 
 test.beforeAll(async ({ browser }) => {
   const [script, worker] = await Promise.all([bundled('tests/e2e/turn/page.ts'), bundled('app/workers/turn.worker.ts')])
@@ -31,7 +31,7 @@ test.afterAll(() => page.close())
 
 /** Shows a look and waits until its fine sheets are there. */
 async function show(name: string, more = {}): Promise<void> {
-  await page.evaluate(async ([look, wish]) => turning.show(look, 4, wish), [name, more] as const)
+  await page.evaluate(async ([look, wish]) => turning.show(look, 3, wish), [name, more] as const)
   await expect.poll(() => page.evaluate(() => turning.state().stage), { timeout: 90_000 }).toBe('fine')
 }
 
@@ -75,9 +75,9 @@ test('turns by drag and by key, and says how far', async () => {
   await show('perch')
   const words = () => page.evaluate(() => turning.state().words)
   await page.evaluate(() => turning.turnTo(0, 0))
-  await page.mouse.move(300, 150)
+  await page.mouse.move(220, 100)
   await page.mouse.down()
-  await page.mouse.move(200, 150, { steps: 4 })
+  await page.mouse.move(150, 100, { steps: 4 })
   await page.mouse.up()
   expect(await words()).toBe('turned 37° to the tail')
   await page.locator('canvas').press('Home')

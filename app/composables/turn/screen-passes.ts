@@ -1,6 +1,6 @@
 import {
-  AddEquation, BufferAttribute, BufferGeometry, Camera, CustomBlending, GLSL3, HalfFloatType, Mesh, NearestFilter, NoBlending, OneFactor, RawShaderMaterial,
-  RGBAFormat, Scene, WebGLRenderTarget, type WebGLRenderer,
+  AddEquation, BufferAttribute, BufferGeometry, Camera, CustomBlending, GLSL3, HalfFloatType, LinearFilter, Mesh, NoBlending, OneFactor, RawShaderMaterial,
+  RGBAFormat, Scene, Vector2, WebGLRenderTarget, type WebGLRenderer,
 } from 'three'
 import { ADD_FRAGMENT, SCREEN_FRAGMENT, WHOLE_VERTEX } from './screen-shaders'
 
@@ -11,16 +11,17 @@ const EDGE_SAMPLES = 4
 export interface ScreenPasses {
   /** Draws one go of a scene, as the first of a new picture or on top of the others. */
   add: (scene: Scene, isFirst: boolean) => void
-  /** Shows the mean of all goes on a surround, a grey 0-255. */
-  show: (surround: number) => void
+  /** Shows the mean of all goes on a surround, a grey 0-255, over a canvas of some pixels. */
+  show: (surround: number, width: number, height: number) => void
   resize: (width: number, height: number) => void
   dispose: () => void
 }
 
 /** Sets up the targets and passes of a renderer. */
 export function screenPasses(renderer: WebGLRenderer): ScreenPasses {
+  // Read smoothly, so that a hasty picture may be smaller than the canvas; at the same size every pixel reads its own.
   const target = (samples: number, depthBuffer: boolean) => new WebGLRenderTarget(1, 1, {
-    type: HalfFloatType, format: RGBAFormat, samples, depthBuffer, minFilter: NearestFilter, magFilter: NearestFilter, generateMipmaps: false,
+    type: HalfFloatType, format: RGBAFormat, samples, depthBuffer, minFilter: LinearFilter, magFilter: LinearFilter, generateMipmaps: false,
   })
   const one = target(EDGE_SAMPLES, true), sum = target(0, false)
   const camera = new Camera()
@@ -32,7 +33,7 @@ export function screenPasses(renderer: WebGLRenderer): ScreenPasses {
   })
   const screen = new RawShaderMaterial({
     glslVersion: GLSL3, vertexShader: WHOLE_VERTEX, fragmentShader: SCREEN_FRAGMENT, depthTest: false, depthWrite: false, blending: NoBlending,
-    uniforms: { picture: { value: sum.texture }, goes: { value: 1 }, surround: { value: 0 } },
+    uniforms: { picture: { value: sum.texture }, size: { value: new Vector2(1, 1) }, goes: { value: 1 }, surround: { value: 0 } },
   })
   const [addScene, screenScene] = [adding, screen].map((material) => {
     const mesh = new Mesh(whole, material)
@@ -54,7 +55,8 @@ export function screenPasses(renderer: WebGLRenderer): ScreenPasses {
       goes = isFirst ? 1 : goes + 1
       renderer.render(addScene, camera)
     },
-    show(surround) {
+    show(surround, width, height) {
+      screen.uniforms.size!.value.set(width, height)
       screen.uniforms.goes!.value = goes
       screen.uniforms.surround!.value = surround / 255
       renderer.setRenderTarget(null)

@@ -22,6 +22,7 @@ export const SCREEN_FRAGMENT = /* glsl */ `
 precision highp float;
 precision highp sampler2D;
 uniform sampler2D picture;
+uniform vec2 size;
 uniform float goes;
 uniform float surround;
 out vec4 shown;
@@ -36,7 +37,7 @@ float dither(uvec2 at) {
   return float((h ^ (h >> 13)) & 0xFFFFu) / 65535.0 * 2.0 - 1.0;
 }
 void main() {
-  vec4 mean = texelFetch(picture, ivec2(gl_FragCoord.xy), 0) / goes;
+  vec4 mean = texture(picture, gl_FragCoord.xy / size) / goes;
   if (mean.a <= 0.0) { shown = vec4(vec3(surround), 1.0); return; }
   vec3 linear = mean.rgb + (1.0 - min(1.0, mean.a)) * decoded(surround);
   shown = vec4(encoded(linear) + 0.45 / 255.0 * dither(uvec2(gl_FragCoord.xy)), 1.0);

@@ -2,25 +2,27 @@ import { ClampToEdgeWrapping, DataTexture, HalfFloatType, LinearFilter, LinearMi
 import type { HalfSheet } from '#shared/picture/turn/paint-sheet'
 
 /** Sharpness kept where a surface turns away from the viewer; more costs more than it shows. */
-const SLANT = 4
+const SLANT = 2
 
 /** How a sheet is read. */
 export interface SheetReading {
   /** It goes once round: its last row meets its first. */
   goesRound?: boolean
-  /** It is also read from far away or at a slant: keep smaller copies. */
+  /** It is also read from far away: keep smaller copies. */
   shrinks?: boolean
+  /** And it is what one looks at: keep it sharp at a slant. */
+  staysSharp?: boolean
 }
 
 /** A sheet of half floats as a texture. */
-export function sheetTexture(data: HalfSheet, width: number, height: number, { goesRound = false, shrinks = false }: SheetReading = {}): DataTexture {
+export function sheetTexture(data: HalfSheet, width: number, height: number, { goesRound = false, shrinks = false, staysSharp = false }: SheetReading = {}): DataTexture {
   const texture = new DataTexture(data, width, height, RGBAFormat, HalfFloatType)
   texture.wrapS = ClampToEdgeWrapping
   texture.wrapT = goesRound ? RepeatWrapping : ClampToEdgeWrapping
   texture.magFilter = LinearFilter
   texture.minFilter = shrinks ? LinearMipmapLinearFilter : LinearFilter
   texture.generateMipmaps = shrinks
-  if (shrinks) texture.anisotropy = SLANT
+  if (staysSharp) texture.anisotropy = SLANT
   texture.needsUpdate = true
   return texture
 }

@@ -1,4 +1,4 @@
-import { LinearSRGBColorSpace, NoToneMapping, Scene, WebGLRenderer, type DataTexture, type Texture } from 'three'
+import { Camera, LinearSRGBColorSpace, NoToneMapping, Scene, WebGLRenderer, type DataTexture, type Texture } from 'three'
 import type { LightSheet } from '#shared/picture/turn/light-sheet'
 import { turnMatrix, turnScale, type TurnAngles } from '#shared/picture/turn/turn-angles'
 import type { FormedSheet, PaintedSheet, TurnPaint } from '#shared/picture/turn/turn-bench'
@@ -17,10 +17,14 @@ export interface TurnScene {
   /** Hands the colours over to the graphics card piece by piece, then shows them; false when newer ones came meanwhile. */
   setPaint: (paint: TurnPaint) => Promise<boolean>
   setLight: (light: LightSheet) => void
+  /** Fulfilled when the graphics card has taken in how to draw. */
+  prepared: Promise<unknown>
   /** True once there is a form, colours and light. */
   isReady: () => boolean
-  /** One go of a picture: the first shows it, every further one makes its edges and its gloss finer. */
-  draw: (frame: TurnFrame, go: number) => void
+  /** One go of a picture: the first shows it, every further one makes its edges and its gloss finer. A hasty one has half as many pixels a side. */
+  draw: (frame: TurnFrame, go: number, isHasty: boolean) => void
+  /** False while the graphics card is still at the last go: another would only queue up behind it. */
+  isDrawn: () => boolean
   dispose: () => void
 }
 
@@ -46,6 +50,7 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
   const passes = screenPasses(renderer)
   const scene = new Scene().add(...Object.values(parts))
   const held = new Map<string, Texture>()
+  let fence: WebGLSync | null = null
   let form: TurnForm | undefined
   let latestPaint = 0
   const has = { sheets: false, paint: false, light: false, eye: false }
@@ -61,7 +66,7 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
   }
 
   function paintTextures({ width, height, paint }: PaintedSheet, goesRound: boolean): Map<string, DataTexture> {
-    const textures = new Map([['base', sheetTexture(paint.base, width, height, { goesRound, shrinks: true })]])
+    const textures = new Map([['base', sheetTexture(paint.base, width, height, { goesRound, shrinks: true, staysSharp: true })]])
     paint.flakes.forEach(({ rows }, group) => (['near', 'between', 'far'] as const).forEach((name, r) => {
       textures.set(`${name}${group}`, sheetTexture(rows[r]!, width, height, { goesRound, shrinks: true }))
     }))
@@ -131,19 +136,25 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
       })
       has.light = true
     },
+    prepared: renderer.compileAsync(scene, new Camera()),
     isReady: () => form !== undefined && has.sheets && has.paint && has.light,
-    draw({ angles, width, height, surround }, go) {
+    draw({ angles, width, height, surround }, go, isHasty) {
       if (!form) return
       if (canvas.width !== width || canvas.height !== height) renderer.setSize(width, height, false)
-      passes.resize(width, height)
+      const smaller = isHasty ? 2 : 1
       const scale = turnScale(form.reach, angles, width, height)
       shared.turn.value.set(...turnMatrix(angles))
       shared.perMm.value.set(2 * scale / width, 2 * scale / height, 1 / (DEPTH * form.reach.long))
       shared.nudge.value.set(2 * nudge(go, 2) / width, 2 * nudge(go, 3) / height)
       parts.lip.material.uniforms.edgeMm!.value = Math.max(0.9 / scale, 0.3)
+      passes.resize(Math.ceil(width / smaller), Math.ceil(height / smaller))
       passes.add(scene, go === 0)
-      passes.show(surround)
+      passes.show(surround, width, height)
+      if (fence) context.deleteSync(fence)
+      fence = context.fenceSync(context.SYNC_GPU_COMMANDS_COMPLETE, 0)
+      context.flush()
     },
+    isDrawn: () => !fence || context.isContextLost() || context.getSyncParameter(fence, context.SYNC_STATUS) === context.SIGNALED,
     dispose() {
       latestPaint++
       for (const texture of [...held.values(), none]) texture.dispose()

@@ -3,6 +3,9 @@ import { turnThread, type TurnThread } from './turn-thread'
 import type { TurnFrame, TurnScene } from './turn-scene'
 import type { TurnAnswer, TurnAsk, TurnStage } from '#shared/picture/turn/turn-messages'
 
+/** A go that takes longer than this is too slow to follow a hand; a hand that rests for so long is at rest. ms */
+const SLOW_MS = 60, STILL_MS = 160
+
 /** What is asked of the turning view; it counts its requests itself. */
 export type TurnWish = Omit<TurnAsk, 'request'>
 
@@ -15,6 +18,8 @@ export interface UseTurn {
   stage: Ref<TurnStage | 'none'>
   /** Something newer than what is shown is being laid out. */
   busy: Ref<boolean>
+  /** Every go of the newest picture has been drawn: it is as fine as it gets. */
+  settled: Ref<boolean>
   trouble: Ref<TurnTrouble | null>
 }
 
@@ -27,6 +32,7 @@ export function useTurn(
 ): UseTurn {
   const stage = ref<TurnStage | 'none'>('none')
   const busy = ref(true)
+  const settled = ref(false)
   const trouble = ref<TurnTrouble | null>(null)
   const ends = new AbortController()
   let scene: TurnScene | undefined
@@ -36,6 +42,8 @@ export function useTurn(
   let go = 0
   let waiting = 0
   let painted: Promise<boolean> | undefined
+  /** When the newest picture was begun, which one was drawn hastily, when a whole go was begun and how long the last one took; ms. */
+  const pace = { begun: 0, hasty: -1, drawing: 0, took: 0 }
 
   const nextFrame = () => new Promise<void>((resolve) => {
     requestAnimationFrame(() => resolve())
@@ -44,16 +52,34 @@ export function useTurn(
   /** Begins a new picture at the next frame of the page. */
   function begin(): void {
     go = 0
+    settled.value = false
+    pace.begun = performance.now()
     if (!waiting) waiting = requestAnimationFrame(drawOne)
   }
 
-  function drawOne(): void {
+  function drawOne(now: number): void {
     waiting = 0
     const wanted = toValue(frame)
     if (!scene?.isReady() || !wanted || trouble.value) return
-    scene.draw(wanted, go)
-    go += 1
-    if (go < goesMost) waiting = requestAnimationFrame(drawOne)
+    waiting = requestAnimationFrame(drawOne)
+    if (!scene.isDrawn()) return
+    if (pace.drawing > 0) pace.took = now - pace.drawing
+    pace.drawing = 0
+    const isStill = now - pace.begun > STILL_MS
+    const isHasty = !isStill && pace.took > SLOW_MS
+    // A slow machine waits with what is fine until the hand rests.
+    if (isHasty && (go > 0 || pace.hasty === pace.begun)) return
+    scene.draw(wanted, go, isHasty)
+    if (isHasty) pace.hasty = pace.begun
+    else {
+      pace.drawing = now
+      go += 1
+    }
+    if (go < goesMost) return
+    cancelAnimationFrame(waiting)
+    waiting = 0
+    pace.drawing = 0
+    settled.value = true
   }
 
   async function hear(answer: TurnAnswer): Promise<void> {
@@ -95,6 +121,8 @@ export function useTurn(
       trouble.value = 'cannot'
       return
     }
+    await scene.prepared
+    if (ends.signal.aborted) return
     const { signal } = ends
     target.addEventListener('webglcontextlost', () => {
       trouble.value = 'lost'
@@ -128,5 +156,5 @@ export function useTurn(
     scene = undefined
   })
 
-  return { stage, busy, trouble }
+  return { stage, busy, settled, trouble }
 }

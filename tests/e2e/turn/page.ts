@@ -29,10 +29,12 @@ function evenly(...paints: string[]): Look {
 const looks: Record<string, Look> = { perch, roach, ember, white: evenly('Opaque white'), pearl: evenly('Opaque black', 'Silver pearl') }
 
 const canvas = document.querySelector('canvas')!
+// The view asks for the context it wants; here what it draws is kept, so that it can be read at any time.
+canvas.getContext('webgl2', { alpha: false, antialias: false, depth: false, stencil: false, preserveDrawingBuffer: true })
 const angles = ref<TurnAngles>({ ...UNTURNED })
 const wish = shallowRef<TurnWish | null>(null)
 const view = effectScope()
-const { stage, busy, trouble } = view.run(() => useTurn(
+const { stage, busy, settled, trouble } = view.run(() => useTurn(
   shallowRef(canvas), wish, computed(() => ({ angles: angles.value, width: canvas.clientWidth, height: canvas.clientHeight, surround: SURROUND })),
 ))!
 const hand = useTurnHand(angles)
@@ -51,18 +53,10 @@ function pixelsOf(draw: (pen: CanvasRenderingContext2D) => void): number[] {
 const labAt = (rgba: number[], pixel: number) =>
   labFromXyz(xyzFromLinearRgb([0, 1, 2].map(c => decodeChannel(rgba[4 * pixel + c]! / 255)) as [number, number, number])) // three by the list
 const isShown = (rgba: number[], pixel: number) => [0, 1, 2].some(c => Math.abs(rgba[4 * pixel + c]! - SURROUND) > 3)
-const frames = async (count: number) => {
-  for (let i = 0; i < count; i++) await new Promise(requestAnimationFrame)
-}
-
-/** What is shown once all goes are drawn, RGBA: it can only be read in the frame that drew it. */
+/** What is shown once all goes are drawn, RGBA. */
 async function shown(): Promise<number[]> {
-  await frames(12)
-  angles.value = { ...angles.value }
-  await nextTick()
-  return new Promise((resolve) => {
-    requestAnimationFrame(() => resolve(pixelsOf(pen => pen.drawImage(canvas, 0, 0))))
-  })
+  while (!settled.value) await new Promise(requestAnimationFrame)
+  return pixelsOf(pen => pen.drawImage(canvas, 0, 0))
 }
 
 let losing: WEBGL_lose_context | null = null
@@ -74,6 +68,7 @@ export const turning = {
   },
   async turnTo(turn: number, tip: number) {
     angles.value = { turn, tip }
+    await nextTick()
     await nextTick()
   },
   state: () => ({ stage: busy.value ? 'busy' : stage.value, trouble: trouble.value, words: turnWords(angles.value) }),
@@ -104,8 +99,8 @@ export const turning = {
     const [width, height] = [canvas.clientWidth, canvas.clientHeight]
     const rgba = await shown()
     let [sum, count] = [0, 0]
-    for (let y = Math.round(height / 2) - 6; y < height / 2 + 6; y++) {
-      for (let x = Math.round(width / 2) - 30; x < width / 2 + 30; x++, count++) sum += labAt(rgba, y * width + x)[0]
+    for (let y = Math.round(height / 2) - 4; y < height / 2 + 4; y++) {
+      for (let x = Math.round(width / 2) - 20; x < width / 2 + 20; x++, count++) sum += labAt(rgba, y * width + x)[0]
     }
     return sum / count
   },
