@@ -32,8 +32,8 @@ function heard(canvas: HTMLCanvasElement, event: string): Promise<unknown> {
 }
 
 /** Until all who listen have heard. */
-function breath(): Promise<void> {
-  return new Promise(resolve => setTimeout(resolve))
+function breath(ms = 0): Promise<void> {
+  return new Promise(resolve => setTimeout(resolve, ms))
 }
 
 /** Perch with one pass more of its coat in the middle. */
@@ -134,6 +134,27 @@ describe('what it hands over', () => {
     expect(counts[4]).toBeGreaterThan(counts[0]!)
     engine.close()
     expect(textures()).toBe(0)
+  })
+})
+
+describe('a view that nobody holds any more', () => {
+  it('is let go of on the graphics processor too', async () => {
+    const { canvas, gl } = pageCanvas()
+    const { textures } = graphicsCounts(gl)
+    const engine = engineOn(canvas)
+    const drawn = (turn: number) => void pictureBench('orders', engine).draw(perch, { width: 120, height: 60, roll: 30 * turn, quality: 'coarse' })
+    drawn(0)
+    const one = textures()
+    for (let turn = 1; turn <= 6; turn++) drawn(turn)
+    const seven = textures()
+    // Whoever drives this page collects what nobody holds as long as it is called so.
+    const { title } = document
+    document.title = 'collect'
+    for (let wait = 0; wait < 100 && textures() > one; wait++) await breath(100)
+    document.title = title
+    expect(seven).toBeGreaterThan(one)
+    expect(textures()).toBeLessThanOrEqual(one)
+    engine.close()
   })
 })
 
