@@ -23,7 +23,8 @@ import { zonePlaces } from '#shared/picture/zone-places'
 import { ember, perch, roach } from '../../../fixtures/demo-looks'
 
 const LOOKS = [['perch, gold pearl under glazes', perch], ['roach, silver scales over black', roach], ['ember, fluorescents', ember]] as const
-const SCALE = 1.4
+/** Texels to the mm: enough for every zone to have hundreds. */
+const SCALE = 0.9
 const all = { upTo: 'all', clear: true } as const
 
 const kept = new Map<Look, ReturnType<typeof layOut>>()
@@ -63,7 +64,8 @@ function texelLab({ base, flakes }: PaintSheet, i: number) {
   return labFromXyz(xyzFromLinearRgb(rgb))
 }
 
-describe('colours on the sheets of a blank', () => {
+// A machine that does other work besides takes its time over a whole finish.
+describe('colours on the sheets of a blank', { timeout: 60_000 }, () => {
   it.each(LOOKS)('are what is promised for the coats that lie there: %s', (_, look) => {
     const { blank, samples, laid, ground, sheet } = laidOut(look)
     const far: number[] = []
