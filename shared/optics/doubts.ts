@@ -1,3 +1,4 @@
+import { filmLayer } from './film'
 import type { Flake } from './flake'
 import { glowOf } from './fluorescence'
 import { internalFromMeasured, measuredFromInternal } from './surface'
@@ -27,7 +28,7 @@ const DOUBT = {
   /** Two swatches: their own film, absorption against scattering, and a lean of absorption from one end of the spectrum to the other. */
   swatches: { strength: 0.25, K: 0.06, lean: 0.1 },
   /** Masstone and hiding: strength, scattering that is not the same in every band, and how the masstone was read; thick paint is sure. */
-  masstone: { strength: 0.8, lean: 1.2, K: 0.04 },
+  masstone: { opaque: { strength: 0.4, lean: 0.6 }, transparent: { strength: 0.8, lean: 1.2 }, K: 0.04 },
   /** Colour over white: strength and lean, and a haze that was not told, as a share of the mean absorption. */
   dye: { K: 0.08, lean: 0.08, haze: 0.04 },
   flake: { flakesPerPass: 0.3, sigma: 0.2, edge: 0.5, thickness: 0.03 },
@@ -85,20 +86,30 @@ function paintDoubts(optics: PaintOptics, coats: readonly number[]): Doubt[] {
 type Change = (paint: PaintOptics, by: number) => PaintOptics
 
 function filmDoubts(optics: PaintOptics, worse: number): Change[] {
-  const { swatches, masstone, dye, clear } = DOUBT
+  const { swatches, dye, clear } = DOUBT
   switch (optics.how) {
     case 'two-swatches': return [
       strengthened(worse * swatches.strength), scaled(['K'], worse * swatches.K), leaning(['K'], worse * swatches.lean),
     ]
-    case 'masstone-hide': return [
-      strengthened(worse * masstone.strength), scaled(['K'], worse * masstone.K), leaning(['K', 'S'], worse * masstone.lean),
-    ]
+    case 'masstone-hide': return masstoneDoubts(optics, worse)
     case 'dye-over-white': return dyeDoubts(worse, dye)
     // The carrier of flakes, when it is dyed at all.
     case 'interference':
     case 'metallic': return Math.max(...optics.K) > 0 ? dyeDoubts(worse, dye) : []
     case 'clear': return Math.max(...optics.K) > 0 ? [scaled(['K'], clear.yellowing)] : []
   }
+}
+
+/** One pass that lets through less than the first share of light is opaque, more than the second transparent. */
+const OPAQUE = 0.3, TRANSPARENT = 0.7
+
+/** Hiding tells the strength of an opaque paint well enough, and next to nothing of a transparent one. */
+function masstoneDoubts({ K, S }: PaintOptics, worse: number): Change[] {
+  const { opaque, transparent, K: read } = DOUBT.masstone
+  const through = filmLayer(K, S, 1).T.reduce((sum, T) => sum + T, 0) / K.length
+  const share = unit((through - OPAQUE) / (TRANSPARENT - OPAQUE))
+  const between = (what: 'strength' | 'lean') => worse * (opaque[what] + share * (transparent[what] - opaque[what]))
+  return [strengthened(between('strength')), scaled(['K'], worse * read), leaning(['K', 'S'], between('lean'))]
 }
 
 function dyeDoubts(worse: number, { K, lean, haze }: typeof DOUBT.dye): Change[] {
