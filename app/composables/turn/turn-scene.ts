@@ -44,6 +44,8 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
   const renderer = new WebGLRenderer({ canvas, context })
   renderer.outputColorSpace = LinearSRGBColorSpace
   renderer.toneMapping = NoToneMapping
+  // Where shaders cannot be compiled beside other work, the first picture waits for them.
+  const compilesBeside = context.getExtension('KHR_parallel_shader_compile') !== null
   const none = noTexture()
   const shared = sharedUniforms(none)
   const parts = partMeshes(shared, none)
@@ -136,7 +138,7 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
       })
       has.light = true
     },
-    prepared: renderer.compileAsync(scene, new Camera()),
+    prepared: compilesBeside ? renderer.compileAsync(scene, new Camera()) : Promise.resolve(),
     isReady: () => form !== undefined && has.sheets && has.paint && has.light,
     draw({ angles, width, height, surround }, go, isHasty) {
       if (!form) return
