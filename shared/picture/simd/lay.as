@@ -21,7 +21,7 @@ class Step {
 const PLAIN_LEVEL: usize = 3 * ROW
 const JOINED_LEVEL: usize = 5 * ROW
 const FLAKE_ROWS: usize = 6
-/** Steps after which N/D is brought back to D = 1: thirty whites over one another would leave the range of the numbers. */
+/** Steps after which N/D is brought back to D = 1: sixty whites over one another would leave the range of the numbers. */
 const LONG: i32 = 8
 
 /**

@@ -82,11 +82,11 @@ describe('the vector engine', { timeout: 60_000 }, () => {
     }
   })
 
-  it('holds thirty thick whites over one another', () => {
+  it('holds sixty thick whites over one another', () => {
     const { kit, ask } = ASKS[0]!
     const [white] = coats(['Opaque white', 1])
     const table = coatTable(white!.optics, 30)
-    const thick = Array.from({ length: 30 }, (_, c): KeyedCoat => ({ key: `${c}`, table, codes: Uint8Array.from({ length: 32 }, (_, i) => 200 + i) }))
+    const thick = Array.from({ length: 60 }, (_, c): KeyedCoat => ({ key: `${c}`, table, codes: Uint8Array.from({ length: 32 }, (_, i) => 200 + i) }))
     const asked = { ...ask, coats: thick }
     expect(differenceOf(simd().light(freshKit({ kit, ask }), asked), doubleLight(asked)).most).toBeLessThan(0.1)
   })
