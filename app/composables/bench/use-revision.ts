@@ -1,5 +1,9 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
+import { z } from 'zod'
 import { RevisionView } from '#shared/scheme/scheme-view'
+
+/** What is needed of a list of revisions here. */
+const Numbered = z.object({ items: z.array(z.object({ number: z.number() })) })
 
 /** One revision of a finish, as it was frozen. */
 export async function useRevision(schemeId: string, number: number): Promise<{ revision: ComputedRef<RevisionView | null>, error: Ref<unknown> }> {
@@ -11,6 +15,6 @@ export async function useRevision(schemeId: string, number: number): Promise<{ r
 /** The newest revision's number of a finish; 0 when it was never published. */
 export async function newestRevision(schemeId: string): Promise<number> {
   const request = useRequestFetch()
-  const { data } = await useAsyncData(`newest revision ${schemeId}`, () => request(`/api/schemes/${schemeId}/revisions`), { deep: false })
+  const { data } = await useAsyncData(`newest revision ${schemeId}`, async () => Numbered.parse(await request<unknown>(`/api/schemes/${schemeId}/revisions`)), { deep: false })
   return Math.max(0, ...data.value?.items.map(revision => revision.number) ?? [])
 }
