@@ -61,8 +61,7 @@ test.describe('at the bench', () => {
       const runId = await startRunAs(page, gate.url, 4)
       await openRun(page, gate.url, runId)
       await goToLay(page)
-      while (await page.getByRole('button', { name: /^One pass on/ }).isVisible()) await page.getByRole('button', { name: /^One pass on/ }).click()
-      await page.getByRole('button', { name: /^Next, rest/ }).click()
+      await layAndRest(page)
       await page.getByRole('button', { name: /^Change the timer/ }).click()
       await page.getByRole('button', { name: '30 min' }).click()
       const timer = page.getByRole('timer').first()
@@ -93,6 +92,16 @@ test.describe('at the bench', () => {
     }
   })
 })
+
+/** Lays every pass of a coat and goes on to its rest, whose timer begins by itself. */
+async function layAndRest(page: Page) {
+  const [onAll, timer] = [page.getByRole('button', { name: /^One pass on/ }), page.getByRole('button', { name: /^Change the timer/ })]
+  await expect(async () => {
+    if (await onAll.isVisible()) await onAll.click({ timeout: 2_000 })
+    else await page.getByRole('button', { name: /^Next/ }).click({ timeout: 2_000 })
+    await expect(timer).toBeVisible({ timeout: 500 })
+  }).toPass({ intervals: [200] })
+}
 
 /** How far what the first timer shows is off from what is left of it, ms: 0 while it shows the second that is running. */
 async function offBy(page: Page): Promise<number> {

@@ -85,8 +85,9 @@ export function useRunActs({ run, owner, shelf }: RunHere): RunActs {
   }
 
   async function keep(acts: readonly RunAct[]): Promise<boolean> {
-    const done = newActs(acts, events.value, clock.read())
+    let done: RunEvent[]
     try {
+      done = newActs(acts, events.value, clock.read())
       await box.keep(run.id, done)
     }
     catch (error) {
