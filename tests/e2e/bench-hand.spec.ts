@@ -76,16 +76,12 @@ test.describe('at the bench', () => {
       await expect.poll(() => offBy(page)).toBeLessThanOrEqual(250)
       expect(await timer.innerText()).toMatch(/^[0-5]:\d\d$/)
 
-      const before = await offBy(page)
       await page.evaluate(() => {
         (window as unknown as { turned: { wall: number } }).turned.wall = 45 * 60_000
       })
       await page.waitForTimeout(600)
-      expect(before).toBeLessThanOrEqual(250)
       expect(await timer.innerText()).toMatch(/^[0-5]:\d\d$/)
       await expect(page.getByText(/clock of this tablet went ahead by 45 minutes/)).toBeVisible()
-      // A reload learns nothing of it anew: what was found out is kept.
-      await page.reload()
     }
     finally {
       await gate.close()
