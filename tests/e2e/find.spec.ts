@@ -40,7 +40,6 @@ test('a typed colour is answered with paints and passes, and the one that is lai
   await sheet.getByRole('button', { name: /^Lay \d+ pass/ }).click()
   await expect(sheet).toBeHidden()
   await expect(page.getByText(/^Saved/)).toBeVisible()
-  await expect(page.getByText('the old ochre')).toBeVisible()
   interface Draft { draft: { stack: { act: string, coat?: { note: string, passes: number, mix: { parts: { paintId: string }[] } } }[] }, materials: { paints: { id: string, name: string }[] } }
   await expect.poll(async () => {
     const { draft, materials } = await (await page.request.get(`/api/schemes/${id}`)).json() as Draft

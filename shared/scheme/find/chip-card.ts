@@ -44,3 +44,15 @@ export function turnedColour(lab: Lab, [dL, dC, dh]: readonly [number, number, n
   const [L, C, h] = lchFromLab(lab)
   return labFromLch([Math.min(100, Math.max(0, L + dL)), Math.max(0, C + dC), (h + dh + 360) % 360])
 }
+
+/** Hues of red, yellow, green and blue paint, degrees: between two of them a hue turns from the one to the other. Our judgement. */
+const CORNERS: readonly (readonly [from: number, back: string, on: string])[] = [
+  [20, 'redder', 'yellower'], [90, 'yellower', 'greener'], [165, 'greener', 'bluer'], [265, 'bluer', 'redder'],
+]
+
+/** What turning a colour's hue back and on makes of it, in a painter's words: "redder" and "yellower" for an orange. */
+export function turnWords(lab: Lab): { back: string, on: string } {
+  const h = lchFromLab(lab)[2]
+  const [, back, on] = CORNERS.findLast(([from]) => h >= from) ?? CORNERS.at(-1)!
+  return { back, on }
+}

@@ -4,7 +4,7 @@ import { useFindCoat } from '../../../../app/composables/find/use-find-coat'
 import type { FindThread } from '../../../../app/composables/find/find-thread'
 import { screenFromXyz } from '#shared/optics/screen-colour'
 import { lchFromLab, xyzFromLab } from '#shared/optics/colorimetry'
-import { chipCard, turnedColour } from '#shared/scheme/find/chip-card'
+import { chipCard, turnedColour, turnWords } from '#shared/scheme/find/chip-card'
 import type { FindAnswer, FindAsk, FindQuestion, FindReport } from '#shared/scheme/find/find-messages'
 import { farWords, missWords, nearWords, secondLightWords } from '#shared/scheme/find/find-words'
 
@@ -36,6 +36,11 @@ describe('the chip card', () => {
     expect(card.flat().filter(({ lab }) => screenFromXyz(xyzFromLab(lab)).outOfGamut)).toEqual([])
     for (const row of card) expect(new Set(row.slice(0, -1).map(({ lab }) => lab[0])).size).toBe(1)
     expect(new Set(card.flat().map(({ lab }) => lab.join())).size).toBe(72)
+  })
+  it('asks for a colour in words that fit it: an orange redder or yellower, a rose bluer or redder', () => {
+    expect([turnWords([60, 40, 50]), turnWords([60, 40, -5]), turnWords([50, -30, 20])]).toEqual([
+      { back: 'redder', on: 'yellower' }, { back: 'bluer', on: 'redder' }, { back: 'yellower', on: 'greener' },
+    ])
   })
   it('turns a colour as it is asked to', () => {
     expect(lchFromLab(turnedColour([50, 0, 30], [2, 3, 5])).map(Math.round)).toEqual([52, 33, 95])
