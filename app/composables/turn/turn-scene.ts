@@ -156,7 +156,8 @@ export function turnScene(canvas: HTMLCanvasElement, breathe: () => Promise<void
       fence = context.fenceSync(context.SYNC_GPU_COMMANDS_COMPLETE, 0)
       context.flush()
     },
-    isDrawn: () => !fence || context.isContextLost() || context.getSyncParameter(fence, context.SYNC_STATUS) === context.SIGNALED,
+    // A fence from before the context was lost says nothing, and holds nothing up.
+    isDrawn: () => !fence || context.getSyncParameter(fence, context.SYNC_STATUS) !== context.UNSIGNALED,
     dispose() {
       latestPaint++
       for (const texture of [...held.values(), none]) texture.dispose()
