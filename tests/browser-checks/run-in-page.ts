@@ -10,7 +10,7 @@ export async function runInPage(files: TestFiles): Promise<TestReport> {
     config: {
       root: '/', setupFiles: [], name: 'page', passWithNoTests: false, testNamePattern: undefined, allowOnly: false, includeTaskLocation: false,
       sequence: { seed: 1, hooks: 'stack', setupFiles: 'list' },
-      chaiConfig: undefined, maxConcurrency: 1, testTimeout: 60_000, hookTimeout: 60_000, retry: 0,
+      chaiConfig: undefined, maxConcurrency: 1, testTimeout: 120_000, hookTimeout: 120_000, retry: 0,
       tags: [], tagsFilter: undefined, strictTags: false, mergeReportsLabel: undefined,
     } as unknown as VitestRunner['config'], // the fields that its runner reads
     async importFile(path, source) {
