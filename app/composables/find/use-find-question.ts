@@ -67,7 +67,7 @@ export function useFindQuestion(given: FindGiven): FindDesk {
   const judgedIn = ref(given.zone())
   const place = ref<StackPlace>('top')
   const clear = ref(true)
-  const partsMost = ref<1 | 2 | 3>(3)
+  const partsMost = ref<1 | 2 | 3>(2)
   const second = ref<Light>('A')
   const withAbsent = ref(false)
   const chosenKey = ref<string | null>(null)
