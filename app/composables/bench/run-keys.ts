@@ -3,7 +3,7 @@ export function runsKey(state: 'bench' | 'made'): string {
   return `runs ${state}`
 }
 
-/** Key of one run in the page's data, by what it is read for: what was followed is read anew to be looked back on. */
-export function runKey(runId: string, readFor: 'follow' | 'report'): string {
-  return `run ${runId} ${readFor}`
+/** Key of one run in the page's data. */
+export function runKey(runId: string): string {
+  return `run ${runId}`
 }

@@ -1,6 +1,6 @@
 import { computed, type ComputedRef, type Ref, ref, shallowRef, watch } from 'vue'
 import { runsKey } from './run-keys'
-import type { RunListItem, RunStartInput } from '#shared/bench/run-view'
+import { RunListItem, RunListPage, type RunStartInput } from '#shared/bench/run-view'
 
 /** Runs of one kind on the page. */
 export interface Runs {
@@ -16,7 +16,7 @@ export async function useRuns(state: 'bench' | 'made'): Promise<Runs> {
   const request = useRequestFetch()
   const more = shallowRef<readonly RunListItem[]>([])
   const next = ref<string | null>(null)
-  const { data, error } = await useAsyncData(runsKey(state), () => request('/api/runs', { query: { state } }), { deep: false })
+  const { data, error } = await useAsyncData(runsKey(state), async () => RunListPage.parse(await request<unknown>('/api/runs', { query: { state } })), { deep: false })
   watch(data, (page) => {
     more.value = []
     next.value = page?.next ?? null
@@ -28,7 +28,7 @@ export async function useRuns(state: 'bench' | 'made'): Promise<Runs> {
     async loadMore() {
       const after = next.value
       if (after === null) return
-      const page = await $fetch('/api/runs', { query: { state, after } })
+      const page = RunListPage.parse(await $fetch<unknown>('/api/runs', { query: { state, after } }))
       if (next.value !== after) return
       more.value = [...more.value, ...page.items]
       next.value = page.next
@@ -38,5 +38,5 @@ export async function useRuns(state: 'bench' | 'made'): Promise<Runs> {
 
 /** Starts a run; the key makes a press that was sent twice one run. */
 export async function startRun(start: RunStartInput, key: string): Promise<RunListItem> {
-  return $fetch('/api/runs', { method: 'POST', body: start, headers: { 'idempotency-key': key } })
+  return RunListItem.parse(await $fetch<unknown>('/api/runs', { method: 'POST', body: start, headers: { 'idempotency-key': key } }))
 }
