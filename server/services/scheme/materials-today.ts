@@ -1,5 +1,6 @@
 import { and, asc, eq, inArray, or } from 'drizzle-orm'
 import type { Ctx } from '#server/services/ctx'
+import { renewOptics } from '#server/services/shelf/renew-optics'
 import { blanks, paintOptics, paints } from '#server/db/tables'
 import { Problem } from '#shared/errors/problem'
 import type { SchemeBody } from '#shared/scheme/body'
@@ -31,6 +32,7 @@ function paintSnapshot(row: typeof paints.$inferSelect, optics: StoredOptics): P
 export async function materialsToday(
   tx: Ctx, body: Pick<SchemeBody, 'stack' | 'blankId'>, only: 'shelf' | 'used' = 'shelf',
 ): Promise<Materials> {
+  await renewOptics(tx)
   const used = usedPaintIds(body)
   const isUsed = inArray(paints.id, used)
   const rows = await tx.db.select({ paint: paints, optics: paintOptics.data })

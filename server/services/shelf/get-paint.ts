@@ -7,11 +7,13 @@ import { Problem } from '#shared/errors/problem'
 import type { PaintUse, PaintView } from '#shared/shelf/paint-view'
 import { leftOfPaint } from './bottle-rows'
 import { paintView } from './paint-view'
+import { renewOptics } from './renew-optics'
 
 /** One paint of the workshop, or paint/not-found. */
 export async function getPaint(ctx: Ctx, paintId: string): Promise<PaintView> {
   assertMay(ctx, 'shelf:read')
   return inTransaction(ctx, async (tx) => {
+    await renewOptics(tx)
     const [row] = await tx.db.select({ paint: paints, optics: paintOptics.data, volumeLeft: leftOfPaint })
       .from(paints).innerJoin(paintOptics, eq(paintOptics.id, paints.opticsId))
       .where(and(eq(paints.id, paintId), eq(paints.workshopId, tx.workshopId)))

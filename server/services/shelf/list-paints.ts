@@ -6,11 +6,13 @@ import { paintOptics, paints } from '#server/db/tables'
 import type { PaintListItem } from '#shared/shelf/paint-view'
 import { leftOfPaint } from './bottle-rows'
 import { paintListItem } from './paint-view'
+import { renewOptics } from './renew-optics'
 
 /** The whole shelf, by name, with in how many schemes' drafts each paint is used. Filtering and sorting is the table's own. */
 export async function listPaints(ctx: Ctx): Promise<PaintListItem[]> {
   assertMay(ctx, 'shelf:read')
   return inTransaction(ctx, async (tx) => {
+    await renewOptics(tx)
     const used = sql<number>`(select count(*)::int from schemes s
       where s.workshop_id = ${tx.workshopId} and not s.retired
         and jsonb_path_exists(s.draft, '$.stack[*].coat.mix.parts[*] ? (@.paintId == $id)', jsonb_build_object('id', ${paints.id})))`

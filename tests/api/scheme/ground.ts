@@ -6,20 +6,21 @@ import { builtInBlank } from '#shared/blank/built-in-blanks'
 import type { SchemeBody } from '#shared/scheme/body'
 import type { Mask } from '#shared/scheme/mask'
 import type { StoredOptics } from '#shared/shelf/stored-optics'
+import { ENGINE_VERSION } from '#shared/optics/engine-version'
 import { newCoat } from '#shared/scheme/new-coat'
 import { newSchemeBody } from '#shared/scheme/new-scheme'
 import type { SchemeView } from '#shared/scheme/scheme-view'
 import type { PaintKnown } from '#shared/shelf/paint'
 
 const OPTICS: StoredOptics = {
-  engineVersion: '1', bands: 36, kind: 'film', K: Array<number>(36).fill(0.01), S: Array<number>(36).fill(0.4), how: 'masstone-hide', clipped: false,
+  engineVersion: ENGINE_VERSION, bands: 36, kind: 'film', K: Array<number>(36).fill(0.01), S: Array<number>(36).fill(0.4), how: 'masstone-hide', clipped: false,
 }
 const WHITE: PaintKnown = { how: 'masstone-hide', masstone: [95, -1, 2], passesToHide: 6 }
 
 /** Puts a paint on a workshop's shelf with given optical data, and one bottle of it with 50 mL. */
 export async function addTestPaint(ctx: Ctx, name = 'Opaque white, water-based', known: PaintKnown = WHITE): Promise<string> {
   return inTransaction(ctx, async (tx) => {
-    const [optics] = await tx.db.insert(paintOptics).values({ workshopId: tx.workshopId, engineVersion: '1', data: OPTICS }).returning()
+    const [optics] = await tx.db.insert(paintOptics).values({ workshopId: tx.workshopId, engineVersion: ENGINE_VERSION, data: OPTICS }).returning()
     const [paint] = await tx.db.insert(paints).values({
       workshopId: tx.workshopId, name, kind: 'opaque', base: 'water', known, opticsId: optics!.id, reducerPer100: 30, filmPerPass: 4,
       volumeSolids: 25, density: 1.1, restMinutes: 6, hazards: [], note: '',

@@ -48,6 +48,37 @@ describe('a paint put on the shelf', () => {
   })
 })
 
+describe('optical data that another version of the engine made', () => {
+  /** Gives a paint the data of an older engine: optical data itself is never changed. */
+  const age = (paintId: string) => asOwner(`with old as (
+    insert into paint_optics (workshop_id, engine_version, data)
+      select p.workshop_id, '1', o.data || '{"engineVersion": "1", "clipped": true}' from paints p join paint_optics o on o.id = p.optics_id where p.id = $1
+      returning id)
+    update paints set optics_id = (select id from old) where id = $1`, [paintId])
+
+  it('is derived anew before a paint is shown, and drafts are made with it', async () => {
+    const { ctx, workshopId } = await testWorkshop({ role: 'painter' })
+    const paint = await addPaint(ctx, paintDraft())
+    await age(paint.id)
+    const scheme = await createScheme(ctx, { name: 'Shad', fish: '', blankId: await addTestBlank(ctx) })
+    const seen = await getPaint(ctx, paint.id)
+    expect(seen).toEqual({ ...paint, opticsId: seen.opticsId })
+    expect(seen.opticsId).not.toBe(paint.opticsId)
+    expect(scheme.materials.paints).toMatchObject([{ id: paint.id, opticsId: seen.opticsId, optics: paint.optics }])
+    expect(await listPaints(ctx)).toMatchObject([{ opticsId: seen.opticsId }])
+    expect(await opticsRows(workshopId)).toHaveLength(3)
+  })
+
+  it('is renewed once, however many ask at the same time', async () => {
+    const { ctx, workshopId } = await testWorkshop({ role: 'painter' })
+    const paint = await addPaint(ctx, paintDraft())
+    await age(paint.id)
+    const seen = await Promise.all([getPaint(ctx, paint.id), getPaint(ctx, paint.id), listPaints(ctx)])
+    expect(new Set(seen.flat().map(each => each.opticsId)).size).toBe(1)
+    expect(await opticsRows(workshopId)).toHaveLength(3)
+  })
+})
+
 describe('a changed paint', () => {
   it('of another colour gets new optical data, and the old stays for the revisions that hold it', async () => {
     const { ctx, workshopId } = await testWorkshop({ role: 'painter' })
