@@ -62,7 +62,8 @@ const PAINTS = {
   },
   'Slow epoxy clear': {
     kind: 'clear', known: { how: 'clear', yellowing: 0.02 }, base: 'epoxy', volumeLeft: 480, pricePerMl: 0.07, filmPerPass: 150, volumeSolids: 100,
-    restMinutes: 720, potLifeMinutes: 25, density: 1.13, hazards: ['H315', 'H317', 'H319', 'H411'],
+    restMinutes: 720, potLifeMinutes: 25, twoPart: { by: 'volume', resin: 2, hardener: 1, resinDensity: 1.16, hardenerDensity: 1.02 },
+    density: 1.11, hazards: ['H315', 'H317', 'H319', 'H411'],
     note: 'Two parts resin to one of hardener by volume, 100 to 44 by weight. On the turner for ten hours.',
   },
   'Water clear, satin': {

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { PaintBase, PaintKind } from '#shared/shelf/paint'
+import { PaintBase, PaintKind, TwoPart } from '#shared/shelf/paint'
 import { StoredOptics } from '#shared/shelf/stored-optics'
 import { BlankShape } from '#shared/blank/blank-shape'
 
@@ -14,6 +14,7 @@ export const PaintSnapshot = z.object({
   volumeSolids: z.number(),
   density: z.number(),
   potLifeMinutes: z.number().optional(),
+  twoPart: TwoPart.optional(),
   hazards: z.array(z.string()),
   opticsId: z.uuid(),
   optics: StoredOptics,

@@ -1,6 +1,6 @@
 import { isSameKnown } from './same-known'
 import type { PaintDraft } from './paint'
-import { BASE_WORDS, knownWords } from './paint-words'
+import { BASE_WORDS, knownWords, twoPartWords } from './paint-words'
 
 /** One thing that two writers of a paint say differently. */
 export interface PaintDifference { what: string, mine: string, theirs: string }
@@ -17,6 +17,7 @@ const FIELDS: readonly (readonly [what: string, say: (paint: PaintDraft) => stri
   ['density', paint => figure(paint.density, 'g/mL')],
   ['rest', paint => figure(paint.restMinutes, 'min')],
   ['working time', paint => figure(paint.potLifeMinutes, 'min')],
+  ['two parts', paint => paint.twoPart ? twoPartWords(paint.twoPart) : 'ready to lay'],
   ['hazards', paint => paint.hazards.toSorted().join(', ') || 'none'],
   ['note', paint => paint.note || 'none'],
   ['left', paint => figure(paint.volumeLeft, 'mL')],

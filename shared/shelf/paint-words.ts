@@ -1,4 +1,4 @@
-import type { PaintBase, PaintKind, PaintKnown } from './paint'
+import type { PaintBase, PaintKind, PaintKnown, TwoPart } from './paint'
 
 /** A paint's carrier as a painter says it. */
 export const BASE_WORDS: Readonly<Record<PaintBase, string>> = {
@@ -45,6 +45,12 @@ export function knownWords(known: PaintKnown): string {
 /** A count of passes in words. */
 export function passesWords(passes: number): string {
   return `${Number(passes.toFixed(1))} ${passes === 1 ? 'pass' : 'passes'}`
+}
+
+/** Resin and hardener as their label says it: 2 : 1 by volume. */
+export function twoPartWords({ resin, hardener, by, resinDensity, hardenerDensity }: TwoPart): string {
+  const densities = [resinDensity, hardenerDensity].some(density => density !== undefined) ? `, ${resinDensity ?? '?'} and ${hardenerDensity ?? '?'} g/mL` : ''
+  return `${resin} : ${hardener} by ${by}${densities}`
 }
 
 /** The line under a paint's name. */

@@ -56,6 +56,21 @@ export type PaintKnown = z.output<typeof PaintKnown>
 /** GHS hazard statements the shelf knows, by code. Their texts stand in `hazards.ts`. */
 export const HazardCode = z.string().regex(/^H\d{3}$/)
 
+const Density = z.number().min(0.5).max(3)
+const Parts = z.number().positive().max(1000)
+
+/** What is mixed with a hardener before it is laid: the ratio on its label, and how heavy both parts are where that is known. */
+export const TwoPart = z.object({
+  /** Volume is not weight: 2 to 1 in the cup can be 100 to 44 on the scale. */
+  by: z.enum(['volume', 'weight']),
+  resin: Parts,
+  hardener: Parts,
+  /** g/mL. */
+  resinDensity: Density.optional(),
+  hardenerDensity: Density.optional(),
+})
+export type TwoPart = z.output<typeof TwoPart>
+
 /** What a person writes about a paint. */
 export const PaintDraft = z.object({
   name: z.string().trim().min(1).max(PAINT_NAME_MAX),
@@ -69,10 +84,12 @@ export const PaintDraft = z.object({
   /** Volume solids of the paint as bought, percent. */
   volumeSolids: z.number().min(1).max(100).default(25),
   /** Density, g/mL. */
-  density: z.number().min(0.5).max(3).default(1.05),
+  density: Density.default(1.05),
   restMinutes: z.number().min(0).max(2880).default(5),
   /** Mixed working time at 25 °C, minutes; absent for what does not set in the cup. */
   potLifeMinutes: z.number().positive().max(1440).optional(),
+  /** Resin and hardener; absent for what comes ready to lay. */
+  twoPart: TwoPart.optional(),
   hazards: z.array(HazardCode).max(20).default([]),
   note: z.string().trim().max(PAINT_NOTE_MAX).default(''),
   /** What is left, mL. */

@@ -1,7 +1,7 @@
 import { boolean, date, doublePrecision, index, integer, jsonb, pgTable, text, timestamp, uuid, varchar } from 'drizzle-orm/pg-core'
 import { workshops } from './people'
 import { BOTTLE_CODE_MAX, BOTTLE_STATES, LOT_MAX } from '#shared/shelf/bottle'
-import { PAINT_BASES, PAINT_KINDS, PAINT_NAME_MAX, type PaintKnown } from '#shared/shelf/paint'
+import { PAINT_BASES, PAINT_KINDS, PAINT_NAME_MAX, type PaintKnown, type TwoPart } from '#shared/shelf/paint'
 import type { StoredOptics } from '#shared/shelf/stored-optics'
 
 const at = (name: string) => timestamp(name, { withTimezone: true, mode: 'date' })
@@ -29,6 +29,7 @@ export const paints = pgTable('paints', {
   density: doublePrecision().notNull(),
   restMinutes: doublePrecision('rest_minutes').notNull(),
   potLifeMinutes: doublePrecision('pot_life_minutes'),
+  twoPart: jsonb('two_part').$type<TwoPart>(),
   hazards: jsonb().$type<string[]>().notNull(),
   note: text().notNull(),
   pricePerMl: doublePrecision('price_per_ml'),

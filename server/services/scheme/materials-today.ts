@@ -19,6 +19,7 @@ function paintSnapshot(row: typeof paints.$inferSelect, optics: StoredOptics): P
     volumeSolids: row.volumeSolids,
     density: row.density,
     ...row.potLifeMinutes === null ? {} : { potLifeMinutes: row.potLifeMinutes },
+    ...row.twoPart === null ? {} : { twoPart: row.twoPart },
     hazards: row.hazards,
     opticsId: row.opticsId,
     optics,

@@ -13,6 +13,7 @@ export function paintValues(draft: PaintDraft) {
     density: draft.density,
     restMinutes: draft.restMinutes,
     potLifeMinutes: draft.potLifeMinutes ?? null,
+    twoPart: draft.twoPart ?? null,
     hazards: draft.hazards,
     note: draft.note,
     pricePerMl: draft.pricePerMl ?? null,

@@ -23,6 +23,7 @@ export function paintView(row: PaintRow, optics: StoredOptics, role: Role): Pain
     density: row.density,
     restMinutes: row.restMinutes,
     potLifeMinutes: row.potLifeMinutes ?? undefined,
+    twoPart: row.twoPart ?? undefined,
     hazards: row.hazards,
     note: row.note,
     volumeLeft: row.volumeLeft,

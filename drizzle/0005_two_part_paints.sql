@@ -1,0 +1,1 @@
+ALTER TABLE "paints" ADD COLUMN "two_part" jsonb;
