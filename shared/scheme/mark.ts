@@ -1,6 +1,8 @@
 import { z } from 'zod'
 
 export const POINTS_MAX = 400
+export const STROKES_MAX = 200
+export const DOTS_MAX = 600
 
 /** A place on the body: u, share of the widest meridian from nose to tail; v, share of the half girth from back (0) by the widest line (½) to belly (1). */
 export const Place = z.tuple([z.number().min(-0.2).max(1.2), z.number().min(-0.5).max(1.5)])
@@ -16,7 +18,7 @@ export type Stroke = z.output<typeof Stroke>
 
 /** Something painted freehand: geometry on the body, never pixels. */
 export const Mark = z.discriminatedUnion('kind', [
-  z.object({ kind: z.literal('strokes'), with: z.enum(['airbrush', 'brush']), strokes: z.array(Stroke).min(1).max(200) }),
+  z.object({ kind: z.literal('strokes'), with: z.enum(['airbrush', 'brush']), strokes: z.array(Stroke).min(1).max(STROKES_MAX) }),
   /** Rays from one root, as a painted fin. Angles in degrees below the axis toward the tail, lengths in mm at a body of 100 mm. */
   z.object({
     kind: z.literal('fan'), root: Place, count: z.number().int().min(2).max(30), length: z.tuple([z.number(), z.number()]),
@@ -24,7 +26,7 @@ export const Mark = z.discriminatedUnion('kind', [
   }),
   /** Dots placed by hand: place and radius (mm). */
   z.object({
-    kind: z.literal('dots'), dots: z.array(z.tuple([z.number(), z.number(), z.number().min(0.02).max(30)])).min(1).max(600),
+    kind: z.literal('dots'), dots: z.array(z.tuple([z.number(), z.number(), z.number().min(0.02).max(30)])).min(1).max(DOTS_MAX),
     soft: z.number().min(0.02).max(5).default(0.1), /** grows every dot, for a halo, mm */ grow: z.number().min(-5).max(5).default(0),
   }),
   /** Dots scattered from a seed with a least distance (mm); the same seed and numbers scatter alike. */
