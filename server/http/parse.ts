@@ -6,18 +6,18 @@ import { Problem } from '#shared/errors/problem'
 /** Largest JSON body, in bytes. */
 export const BODY_MAX = 1024 * 1024
 
-/** The raw body of this request, read once; `parseBody` and `idempotent` both need it. */
-export async function rawBody(event: H3Event): Promise<Buffer> {
+/** The raw body of this request, read once; `parseBody` and `idempotent` both need it. Whoever reads it first says how much it may be. */
+export async function rawBody(event: H3Event, maxBytes = BODY_MAX): Promise<Buffer> {
   const context = event.context as { rawBody?: Promise<Buffer> }
-  context.rawBody ??= readLimited(event, BODY_MAX)
+  context.rawBody ??= readLimited(event, maxBytes)
   return context.rawBody
 }
 
-/** The body of the request, checked. JSON only, so that no plain form of another site can send one. */
-export async function parseBody<S extends z.ZodType>(event: H3Event, schema: S): Promise<z.output<S>> {
+/** The body of the request, checked. JSON only, so that no plain form of another site can send one. Files that are taken in may be larger than the rest. */
+export async function parseBody<S extends z.ZodType>(event: H3Event, schema: S, maxBytes = BODY_MAX): Promise<z.output<S>> {
   const type = getRequestHeader(event, 'content-type')?.split(';')[0]?.trim().toLowerCase()
   if (type !== 'application/json') throw invalid([{ path: '', message: 'Send application/json.' }])
-  return parsed(schema, jsonOf(await rawBody(event)))
+  return parsed(schema, jsonOf(await rawBody(event, maxBytes)))
 }
 
 /** The query of the address, checked. */

@@ -1,6 +1,7 @@
 import type { AccessRow } from './access/row'
 import { BENCH_ACCESS } from './access/bench'
 import { CARD_ACCESS } from './access/cards'
+import { FILES_ACCESS } from './access/files'
 import { PEOPLE_ACCESS } from './access/people'
 import { SCHEME_ACCESS } from './access/scheme'
 import { SHELF_ACCESS } from './access/shelf'
@@ -12,4 +13,5 @@ export const ACCESS_TABLE: readonly AccessRow[] = [
   ...CARD_ACCESS,
   ...SCHEME_ACCESS,
   ...SHELF_ACCESS,
+  ...FILES_ACCESS,
 ]

@@ -40,6 +40,7 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
   'shared/scheme': ['shared/scheme', 'shared/optics', 'shared/blank', 'shared/shelf', 'shared/api', 'shared/quantities', 'shared/errors'],
   'shared/picture': ['shared/picture', 'shared/scheme', 'shared/optics', 'shared/blank', 'shared/shelf', 'shared/quantities', 'shared/errors'],
   'shared/bench': ['shared/bench', 'shared/scheme', 'shared/picture', 'shared/blank', 'shared/shelf', 'shared/optics', 'shared/api', 'shared/quantities', 'shared/errors'],
+  'shared/files': ['shared/files', 'shared/scheme', 'shared/optics', 'shared/blank', 'shared/shelf', 'shared/errors'],
   'shared/photos': ['shared/photos', 'shared/errors'],
   'shared/cards': ['shared/cards', 'shared/scheme', 'shared/picture', 'shared/blank', 'shared/photos', 'shared/people', 'shared/errors'],
 }

@@ -1,0 +1,20 @@
+import { writeSchemeFile } from '#server/services/files/write-scheme-file'
+import { testScheme } from '../scheme/ground'
+import type { AccessRow, Who } from './row'
+
+/** Those who read recipes take files of them out. */
+const readers: Record<Who, number> = { owner: 200, painter: 200, bench: 200, desk: 403, stranger: 404, signedOut: 401 }
+/** Those who make them bring files in; a stranger into their own workshop. */
+const makers: Record<Who, number> = { owner: 201, painter: 201, bench: 403, desk: 403, stranger: 201, signedOut: 401 }
+
+/** Schemes and shelves as files. */
+export const FILES_ACCESS: AccessRow[] = [
+  {
+    method: 'GET', path: '/api/schemes/[schemeId]/file', who: readers,
+    make: async ({ owner }) => ({ url: `/api/schemes/${(await testScheme(owner, { secret: 'planted coat' })).scheme.id}/file`, secret: ['planted coat'] }),
+  },
+  {
+    method: 'POST', path: '/api/schemes/file', who: makers,
+    make: async ({ owner }) => ({ url: '/api/schemes/file', body: await writeSchemeFile(owner, (await testScheme(owner)).scheme.id) }),
+  },
+]
