@@ -16,7 +16,7 @@ export interface TracedLine { points: Place[], tolerance: number }
 /** A drawn line with no more places than it needs; null where the pointer did not get anywhere. */
 export function tracedLine(trace: readonly TracePoint[], isClosed = false): TracedLine | null {
   const { kept, tolerance } = simplifyTo(trace.map(point => point.flat), TRACE_TOLERANCE, POINTS_MAX, isClosed)
-  const points = kept.flatMap(i => trace[i]?.place ?? [])
+  const points = kept.flatMap(i => trace[i] ? [trace[i].place] : [])
   const [first] = trace
   const isSomewhere = first !== undefined && trace.some(({ flat }) => Math.hypot(flat[0] - first.flat[0], flat[1] - first.flat[1]) > TRACE_TOLERANCE)
   return isSomewhere && points.length >= (isClosed ? 3 : 2) ? { points, tolerance } : null

@@ -43,7 +43,7 @@ it('keeps a drawn line within a tenth of a millimetre on the skin, with far fewe
   const drawn = trace(wave)
   const line = tracedLine(drawn)!
   expect(line.tolerance).toBe(TRACE_TOLERANCE)
-  expect(line.points.length).toBeLessThan(100)
+  expect(line.points.length).toBeLessThan(60)
   const kept = line.points.map(place => flatOf(blank, place))
   for (const { flat } of drawn) expect(Math.min(...kept.slice(1).map((to, i) => distanceToPiece(flat, kept[i]!, to)))).toBeLessThanOrEqual(TRACE_TOLERANCE + 1e-9)
 })
