@@ -95,13 +95,22 @@ function markArea(mark: Mark, { length, body }: AreaCells): number {
   }
 }
 
+/** Where a coat is laid, mm²: on the body, both flanks, and on the fins, both faces. */
+export interface CoatAreaParts { body: number, fins: number }
+
 /**
- * Area that a coat is laid on, mm², both flanks, fins with both faces. Zones reach as far as the coat's reach; what fades
- * out beyond an edge makes up for what fades within it. Masks do not lessen it: they catch what they keep off.
+ * Area that a coat is laid on, body and fins apart. Zones reach as far as the coat's reach; what fades out beyond an edge makes
+ * up for what fades within it. Masks do not lessen it: they catch what they keep off.
  * @accuracy zones within 2 %; marks a rough estimate
  */
-export function coatArea(coat: Pick<Coat, 'where' | 'marks'>, cells: AreaCells): number {
+export function coatAreaParts(coat: Pick<Coat, 'where' | 'marks'>, cells: AreaCells): CoatAreaParts {
   const fins = finsArea(coat.where, cells)
-  if (coat.marks.length > 0) return fins + Math.min(cells.body, 2 * coat.marks.reduce((sum, mark) => sum + markArea(mark, cells), 0))
-  return fins + (coat.where.body ? bodyArea(coat.where, cells) : 0)
+  if (coat.marks.length > 0) return { fins, body: Math.min(cells.body, 2 * coat.marks.reduce((sum, mark) => sum + markArea(mark, cells), 0)) }
+  return { fins, body: coat.where.body ? bodyArea(coat.where, cells) : 0 }
+}
+
+/** Area that a coat is laid on, mm², body and fins together. */
+export function coatArea(coat: Pick<Coat, 'where' | 'marks'>, cells: AreaCells): number {
+  const { body, fins } = coatAreaParts(coat, cells)
+  return body + fins
 }

@@ -1,5 +1,6 @@
-import type { Lab, PaintDraft, PaintKind, PaintBase, PaintKnown } from '#shared/shelf/paint'
+import type { Lab, PaintDraft, PaintKind, PaintBase, PaintKnown, TwoPart } from '#shared/shelf/paint'
 import { colourTyped, readColour } from '#shared/shelf/read-colour'
+import { twoPartFields, twoPartOfForm } from './two-part-form'
 
 /** The ways of knowing as one chooses between them: a pearl and a metal flake are asked for different things. */
 export const HOW_CHOICES = ['two-swatches', 'masstone-hide', 'dye-over-white', 'pearl', 'metallic', 'fluorescent', 'clear'] as const
@@ -43,6 +44,12 @@ export interface PaintForm {
   restMinutes: number
   sets: boolean
   potLifeMinutes: number
+  isTwoPart: boolean
+  ratioBy: TwoPart['by']
+  resin: number
+  hardener: number
+  resinDensity: string
+  hardenerDensity: string
   hazards: string[]
   note: string
   volumeLeft: number
@@ -57,6 +64,7 @@ export function emptyPaintForm(): PaintForm {
     oxide: 'anatase', pearlBy: 'colour', wanted: '', thickness: 60, flakesPerPass: 0.5, sigma: 9, edge: 6, isTinted: false, tint: '', tintPasses: 2,
     emissionPeak: 560, emissionWidth: 60, yield: 85, yellowing: 0,
     reducerPer100: 25, filmPerPass: 4, volumeSolids: 25, density: 1.05, restMinutes: 5, sets: false, potLifeMinutes: 30,
+    isTwoPart: false, ratioBy: 'volume', resin: 2, hardener: 1, resinDensity: '', hardenerDensity: '',
     hazards: [], note: '', volumeLeft: 30, price: '',
   }
 }
@@ -78,6 +86,7 @@ export function paintFormOf(paint: PaintDraft): PaintForm {
   return {
     ...emptyPaintForm(), ...knownFields(paint.known),
     name, kind, base, reducerPer100, filmPerPass, volumeSolids, density, restMinutes, note, volumeLeft,
+    ...twoPartFields(paint.twoPart),
     sets: paint.potLifeMinutes !== undefined, potLifeMinutes: paint.potLifeMinutes ?? 30,
     hazards: [...paint.hazards], price: paint.pricePerMl === undefined ? '' : String(paint.pricePerMl),
   }
@@ -176,8 +185,10 @@ function flakeFrom(form: PaintForm, colours: Colours) {
 export function draftOfForm(form: PaintForm): Read<PaintDraft> {
   const known = knownOfForm(form)
   const price = readPrice(form.price)
+  const twoPart = twoPartOfForm(form)
   const wrong: Wrong = {
     ...known.wrong,
+    ...twoPart.wrong,
     ...form.name.trim() === '' && { name: 'Give it the name that stands on its bottle.' },
     ...price === null && { price: 'A price is a figure, such as 0.21.' },
   }
@@ -186,7 +197,7 @@ export function draftOfForm(form: PaintForm): Read<PaintDraft> {
   return {
     value: {
       name: form.name.trim(), kind, base, known: known.value, reducerPer100, filmPerPass, volumeSolids, density, restMinutes, hazards, volumeLeft,
-      note: form.note.trim(), potLifeMinutes: form.sets ? form.potLifeMinutes : undefined, pricePerMl: price,
+      note: form.note.trim(), potLifeMinutes: form.sets ? form.potLifeMinutes : undefined, twoPart: twoPart.value, pricePerMl: price,
     },
   }
 }

@@ -1,6 +1,6 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
-import { z } from 'zod'
-import { type BottleDraft, BottleView } from '#shared/shelf/bottle'
+import { api, useApi } from '~/composables/api/api'
+import type { BottleDraft, BottleView } from '#shared/shelf/bottle'
 
 /** Bottles of a paint on the page, and what can be done with them; each act throws when it is refused. */
 export interface Bottles {
@@ -15,9 +15,8 @@ export interface Bottles {
 
 /** Bottles of a paint. `onChanged` hears that what is left of the paint may be another figure now. */
 export async function useBottles(paintId: string, onChanged: () => Promise<void>): Promise<Bottles> {
-  const request = useRequestFetch()
-  const address: string = `/api/paints/${paintId}/bottles`
-  const { data, error, refresh } = await useAsyncData(`bottles ${paintId}`, async () => z.array(BottleView).parse(await request<unknown>(address)), { deep: false })
+  const request = useApi()
+  const { data, error, refresh } = await useAsyncData(`bottles ${paintId}`, () => request('/api/paints/:paintId/bottles', { params: { paintId } }), { deep: false })
   const again = async () => {
     await Promise.all([refresh(), onChanged()])
   }
@@ -25,14 +24,13 @@ export async function useBottles(paintId: string, onChanged: () => Promise<void>
     bottles: computed(() => (data.value ?? []).toSorted((a, b) => Number(a.state === 'retired') - Number(b.state === 'retired'))),
     error,
     async add(draft) {
-      const made = BottleView.parse(await $fetch<unknown>(address, { method: 'POST', body: draft }))
+      const made = await api('/api/paints/:paintId/bottles', { params: { paintId }, method: 'POST', body: draft })
       await again()
       return made
     },
     async change({ id, version }, draft) {
-      const one: string = `/api/bottles/${id}`
       try {
-        await $fetch<unknown>(one, { method: 'PUT', body: draft, headers: { 'if-match': `"v${version}"` } })
+        await api('/api/bottles/:bottleId', { params: { bottleId: id }, method: 'PUT', body: draft, headers: { 'if-match': `"v${version}"` } })
       }
       finally {
         await again()

@@ -1,3 +1,4 @@
+import { api } from '~/composables/api/api'
 import { paintKey, SHELF_KEY } from './shelf-keys'
 import type { PaintDraft } from '#shared/shelf/paint'
 import { PaintChange, type PaintView } from '#shared/shelf/paint-view'
@@ -18,7 +19,7 @@ export function usePaintActions(): PaintActions {
   const again = (paintId: string) => refreshNuxtData([SHELF_KEY, paintKey(paintId)])
 
   async function change({ id, version }: Pick<PaintView, 'id' | 'version'>, wanted: PaintChange) {
-    const paint = await $fetch(`/api/paints/${id}`, { method: 'PUT', body: wanted, headers: { 'if-match': `"v${version}"` } })
+    const paint = await api('/api/paints/:paintId', { params: { paintId: id }, method: 'PUT', body: wanted, headers: { 'if-match': `"v${version}"` } })
     await again(id)
     return paint
   }
@@ -26,11 +27,11 @@ export function usePaintActions(): PaintActions {
     change,
     async add(draft) {
       // The key lets a request that is sent again on a bad line add one paint, not two.
-      const paint = await $fetch('/api/paints', { method: 'POST', body: draft, headers: { 'idempotency-key': crypto.randomUUID() } })
+      const paint = await api('/api/paints', { method: 'POST', body: draft, headers: { 'idempotency-key': crypto.randomUUID() } })
       await again(paint.id)
       return paint
     },
     retire: (paint, retired) => change(paint, { ...PaintChange.parse(paint), retired }),
-    readNow: paintId => $fetch(`/api/paints/${paintId}`),
+    readNow: paintId => api('/api/paints/:paintId', { params: { paintId } }),
   }
 }

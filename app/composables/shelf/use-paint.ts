@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
+import { useApi } from '~/composables/api/api'
 import { paintKey } from './shelf-keys'
 import type { PaintUse, PaintView } from '#shared/shelf/paint-view'
 
@@ -13,10 +14,10 @@ export interface PaintOnPage {
 
 /** Reads one paint with its optics, and the schemes that lay it. */
 export async function usePaint(paintId: string): Promise<PaintOnPage> {
-  const request = useRequestFetch()
+  const request = useApi()
   const [paint, uses] = await Promise.all([
-    useAsyncData(paintKey(paintId), () => request(`/api/paints/${paintId}`), { deep: false }),
-    useAsyncData(`${paintKey(paintId)} uses`, () => request(`/api/paints/${paintId}/uses`), { deep: false }),
+    useAsyncData(paintKey(paintId), () => request('/api/paints/:paintId', { params: { paintId } }), { deep: false }),
+    useAsyncData(`${paintKey(paintId)} uses`, () => request('/api/paints/:paintId/uses', { params: { paintId } }), { deep: false }),
   ])
   return {
     paint: computed(() => paint.data.value ?? null),

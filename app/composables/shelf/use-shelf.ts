@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref, ref } from 'vue'
+import { useApi } from '~/composables/api/api'
 import { SHELF_KEY } from './shelf-keys'
 import { ANYTHING, findPaints, type ShelfOrder, type ShelfSearch, sortPaints } from '#shared/shelf/sort-shelf'
 import type { PaintListItem } from '#shared/shelf/paint-view'
@@ -16,7 +17,7 @@ export interface Shelf {
 
 /** Reads the shelf once and looks through it here: it is small enough to be at hand whole. */
 export async function useShelf(): Promise<Shelf> {
-  const request = useRequestFetch()
+  const request = useApi()
   const search = ref<ShelfSearch>({ ...ANYTHING })
   const order = ref<ShelfOrder>('name')
   const { data, error, refresh } = await useAsyncData(SHELF_KEY, () => request('/api/paints'), { deep: false })
