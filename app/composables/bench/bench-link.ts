@@ -1,3 +1,4 @@
+import { api } from '~/composables/api/api'
 import type { Setback } from '~/bench/act-keeper'
 import { explain } from '~/errors/explain'
 import { problemOf } from '~/errors/problem-of'
@@ -9,19 +10,19 @@ const PATIENCE_MS = 8_000
 
 /** Hands acts of one run over, with the time at the bench by which the server sees how wrong their clock is. */
 export async function sendActs(runId: string, events: readonly RunEvent[], now: number): Promise<readonly RunEventAnswer[]> {
-  const { answers } = await $fetch(`/api/runs/${runId}/events`, { method: 'POST', body: { events, sentAt: new Date(now).toISOString() }, timeout: PATIENCE_MS, retry: 0 })
+  const { answers } = await api('/api/runs/:runId/events', { params: { runId }, method: 'POST', body: { events, sentAt: new Date(now).toISOString() }, timeout: PATIENCE_MS, retry: 0 })
   return answers
 }
 
 /** What was done in a run since a place in the order of arrival. */
 export async function fetchActs(runId: string, since: number): Promise<RunEventsView> {
-  const view = await $fetch(`/api/runs/${runId}/events`, { query: { since }, timeout: PATIENCE_MS, retry: 0 })
+  const view = await api('/api/runs/:runId/events', { params: { runId }, query: { since }, timeout: PATIENCE_MS, retry: 0 })
   return view
 }
 
 /** A whole run, as the server has it now. */
 export async function fetchRun(runId: string): Promise<RunView> {
-  return RunView.parse(await $fetch(`/api/runs/${runId}`, { timeout: PATIENCE_MS, retry: 0 }))
+  return RunView.parse(await api('/api/runs/:runId', { params: { runId }, timeout: PATIENCE_MS, retry: 0 }))
 }
 
 /** Tells why a hand-over failed. */

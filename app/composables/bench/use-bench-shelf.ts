@@ -1,4 +1,5 @@
 import { computed, type ComputedRef } from 'vue'
+import { useApi } from '~/composables/api/api'
 import { z } from 'zod'
 import { useMay } from '~/composables/people/use-may'
 import { bottleAtHand, BottleFound } from '#shared/shelf/bottle'
@@ -19,11 +20,11 @@ export interface BenchShelf {
 
 /** Reads shelf and people; whoever may not read one of them chooses nothing of it. */
 export async function useBenchShelf(): Promise<BenchShelf> {
-  const request = useRequestFetch()
+  const request = useApi()
   const may = useMay()
   const [bottles, people] = await Promise.all([
-    useAsyncData('bottles in use', async () => may('shelf:read') ? z.array(BottleFound).parse(await request<unknown>('/api/bottles')) : [], { deep: false }),
-    useAsyncData('colleagues', async () => may('people:read') ? People.parse(await request<unknown>('/api/people')) : [], { deep: false }),
+    useAsyncData('bottles in use', async () => may('shelf:read') ? z.array(BottleFound).parse(await request('/api/bottles')) : [], { deep: false }),
+    useAsyncData('colleagues', async () => may('people:read') ? People.parse(await request('/api/people')) : [], { deep: false }),
   ])
   const all = computed(() => bottles.data.value ?? [])
   return {

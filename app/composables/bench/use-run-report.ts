@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
+import { api, useApi } from '~/composables/api/api'
 import { RunReport, TakenIn } from '#shared/bench/run-report'
 
 /** What the server adds to a run for who looks back on it. */
@@ -11,14 +12,14 @@ export interface UseRunReport {
 
 /** Lots, times and yield of a run, and the way from it back into its scheme. */
 export async function useRunReport(runId: string): Promise<UseRunReport> {
-  const request = useRequestFetch()
-  const { data, error, refresh } = await useAsyncData(`run ${runId} what came of it`, async () => RunReport.parse(await request<unknown>(`/api/runs/${runId}/report`)), { deep: false })
+  const request = useApi()
+  const { data, error, refresh } = await useAsyncData(`run ${runId} what came of it`, async () => RunReport.parse(await request('/api/runs/:runId/report', { params: { runId } })), { deep: false })
   return {
     report: computed(() => data.value ?? null),
     error,
     async takeIn() {
       const version = data.value?.draftVersion
-      const taken = TakenIn.parse(await $fetch<unknown>(`/api/runs/${runId}/take-in`, { method: 'POST', headers: { 'if-match': `"v${version ?? 0}"` } }))
+      const taken = TakenIn.parse(await api('/api/runs/:runId/take-in', { params: { runId }, method: 'POST', headers: { 'if-match': `"v${version ?? 0}"` } }))
       await refresh()
       return taken
     },

@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref, ref, shallowRef, watch } from 'vue'
+import { api, useApi } from '~/composables/api/api'
 import { runsKey } from './run-keys'
 import { RunListItem, RunListPage, type RunStartInput } from '#shared/bench/run-view'
 
@@ -13,10 +14,10 @@ export interface Runs {
 
 /** What is on the bench, or what was made; the newest first. */
 export async function useRuns(state: 'bench' | 'made'): Promise<Runs> {
-  const request = useRequestFetch()
+  const request = useApi()
   const more = shallowRef<readonly RunListItem[]>([])
   const next = ref<string | null>(null)
-  const { data, error } = await useAsyncData(runsKey(state), async () => RunListPage.parse(await request<unknown>('/api/runs', { query: { state } })), { deep: false })
+  const { data, error } = await useAsyncData(runsKey(state), async () => RunListPage.parse(await request('/api/runs', { query: { state } })), { deep: false })
   watch(data, (page) => {
     more.value = []
     next.value = page?.next ?? null
@@ -28,7 +29,7 @@ export async function useRuns(state: 'bench' | 'made'): Promise<Runs> {
     async loadMore() {
       const after = next.value
       if (after === null) return
-      const page = RunListPage.parse(await $fetch<unknown>('/api/runs', { query: { state, after } }))
+      const page = RunListPage.parse(await api('/api/runs', { query: { state, after } }))
       if (next.value !== after) return
       more.value = [...more.value, ...page.items]
       next.value = page.next
@@ -38,5 +39,5 @@ export async function useRuns(state: 'bench' | 'made'): Promise<Runs> {
 
 /** Starts a run; the key makes a press that was sent twice one run. */
 export async function startRun(start: RunStartInput, key: string): Promise<RunListItem> {
-  return RunListItem.parse(await $fetch<unknown>('/api/runs', { method: 'POST', body: start, headers: { 'idempotency-key': key } }))
+  return RunListItem.parse(await api('/api/runs', { method: 'POST', body: start, headers: { 'idempotency-key': key } }))
 }

@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
+import { useApi } from '~/composables/api/api'
 import { blankKey } from './blank-keys'
 import { measureBlank, type MeasuredBlank } from './measure-blank'
 import type { BlankView } from '#shared/blank/blank-view'
@@ -18,10 +19,10 @@ export interface BlankOnPage {
 
 /** Reads one blank; it is measured where it is read first, and the measures travel with the page. */
 export async function useBlank(blankId: string): Promise<BlankOnPage> {
-  const request = useRequestFetch()
+  const request = useApi()
   const [read, painted] = await Promise.all([
     useAsyncData(blankKey(blankId), async () => {
-      const blank = await request(`/api/blanks/${blankId}`)
+      const blank = await request('/api/blanks/:blankId', { params: { blankId } })
       return { blank, measured: measureBlank(blank.shape) }
     }, { deep: false }),
     useAsyncData(`${blankKey(blankId)} schemes`, () => request('/api/schemes', { query: { blankId } }), { deep: false }),

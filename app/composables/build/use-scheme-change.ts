@@ -1,3 +1,4 @@
+import { api } from '~/composables/api/api'
 import type { Build } from './use-build'
 import { useSchemeActions } from '~/composables/scheme/use-scheme-actions'
 import type { SchemeChange } from '#shared/scheme/scheme-input'
@@ -7,7 +8,7 @@ export function useSchemeChange(build: Pick<Build, 'scheme' | 'draft'>): (change
   const { change } = useSchemeActions()
   return async (wanted) => {
     await build.draft.saveNow()
-    const { id, version } = await $fetch(`/api/schemes/${build.scheme.value.id}`)
+    const { id, version } = await api('/api/schemes/:schemeId', { params: { schemeId: build.scheme.value.id } })
     await change({ id, version }, wanted)
   }
 }

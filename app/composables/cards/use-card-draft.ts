@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref, ref, shallowRef, type ShallowRef } from 'vue'
+import { api } from '~/composables/api/api'
 import { problemOf } from '~/errors/problem-of'
 import type { CardDraft, CardView } from '#shared/cards/card'
 import { type Clash, draftOf, mergeDrafts, sameDraft } from '#shared/cards/merge-drafts'
@@ -38,7 +39,7 @@ export function useCardDraft(card: Ref<CardView | null>): CardOnDesk {
       if (!base) return { end: 'saved', with: [] }
       const sent = draftOf(draft.value)
       try {
-        const saved = await $fetch(`/api/cards/${base.id}`, { method: 'PUT', body: sent, headers: { 'if-match': `"v${base.version}"` } })
+        const saved = await api('/api/cards/:cardId', { params: { cardId: base.id }, method: 'PUT', body: sent, headers: { 'if-match': `"v${base.version}"` } })
         // What was typed while it was sent is the next change.
         if (sameDraft(sent, draft.value)) draft.value = draftOf(saved)
         card.value = saved
@@ -47,7 +48,7 @@ export function useCardDraft(card: Ref<CardView | null>): CardOnDesk {
       }
       catch (error) {
         if (problemOf(error)?.code !== 'card/changed-meanwhile' || tries === TRIES) throw error
-        const saved = await $fetch(`/api/cards/${base.id}`)
+        const saved = await api('/api/cards/:cardId', { params: { cardId: base.id } })
         const { draft: merged, clashes, theirs } = mergeDrafts(base, draft.value, saved)
         card.value = saved
         draft.value = draftOf(merged)

@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, ref, type Ref, watch } from 'vue'
+import { api } from '~/composables/api/api'
 import type { SchemeRowView } from '#shared/scheme/scheme-view'
 
 /** Finishes a card could be started of, and why the chosen one cannot be, if so. */
@@ -24,7 +25,7 @@ export function useCardStart(): CardStart {
   watch(chosen, async (id) => {
     photoCount.value = null
     if (!id) return
-    const photos = await $fetch(`/api/schemes/${id}/photos`).catch(() => null)
+    const photos = await api('/api/schemes/:schemeId/photos', { params: { schemeId: id } }).catch(() => null)
     if (chosen.value === id) photoCount.value = photos?.length ?? null
   })
 
@@ -38,7 +39,7 @@ export function useCardStart(): CardStart {
     const all: SchemeRowView[] = []
     let after: string | null = null
     do {
-      const page: { items: SchemeRowView[], next: string | null } = await $fetch('/api/schemes', { query: { retired: 'without', ...after && { after } } })
+      const page: { items: SchemeRowView[], next: string | null } = await api('/api/schemes', { query: { retired: 'without', ...after && { after } } })
       all.push(...page.items)
       after = page.next
     } while (after)

@@ -1,3 +1,4 @@
+import { api } from '~/composables/api/api'
 import { problemOf } from '~/errors/problem-of'
 import type { CardByLink } from '#shared/cards/card'
 
@@ -18,7 +19,7 @@ export async function usePublicCard(token: string): Promise<CardByLink | null> {
 
 async function readCard(token: string): Promise<CardByLink | null> {
   try {
-    return await $fetch(`/api/cards/by-link/${encodeURIComponent(token)}`)
+    return await api('/api/cards/by-link/:token', { params: { token } })
   }
   catch (error) {
     const code = problemOf(error)?.code

@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref, ref, shallowRef, watch } from 'vue'
+import { api } from '~/composables/api/api'
 import { useZoneColours } from '~/composables/picture/use-zone-colours'
 import { explain } from '~/errors/explain'
 import type { Look } from '#shared/picture/look'
@@ -25,7 +26,7 @@ export function useOtherScheme(ownId: string): UseOtherScheme {
     const all: { id: string, name: string }[] = []
     let after: string | null = null
     do {
-      const page: { items: readonly { id: string, name: string }[], next: string | null } = await $fetch('/api/schemes', { query: { ...after ? { after } : {} } })
+      const page: { items: readonly { id: string, name: string }[], next: string | null } = await api('/api/schemes', { query: { ...after ? { after } : {} } })
       all.push(...page.items.map(({ id, name }) => ({ id, name })))
       after = page.next
     } while (after)
@@ -41,7 +42,7 @@ export function useOtherScheme(ownId: string): UseOtherScheme {
     failed.value = null
     if (!id) return
     try {
-      const scheme = await $fetch(`/api/schemes/${id}`)
+      const scheme = await api('/api/schemes/:schemeId', { params: { schemeId: id } })
       if (chosen.value === id) look.value = { body: scheme.draft, materials: scheme.materials }
     }
     catch (error) {

@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
+import { api, useApi } from '~/composables/api/api'
 import { MASKS_KEY } from './mask-keys'
 import type { MaskDraft, MaskView } from '#shared/scheme/mask-view'
 
@@ -14,7 +15,7 @@ export interface Masks {
 
 /** Meshes and stencils of the workshop, retired ones too. */
 export async function useMasks(): Promise<Masks> {
-  const request = useRequestFetch()
+  const request = useApi()
   const { data, error, refresh } = await useAsyncData(MASKS_KEY, () => request('/api/masks'), { deep: false })
   return {
     masks: computed(() => data.value ?? []),
@@ -22,12 +23,12 @@ export async function useMasks(): Promise<Masks> {
     refresh: () => refresh(),
     async add(draft) {
       // The key lets a request that is sent again on a bad line add one mask, not two.
-      const mask = await $fetch('/api/masks', { method: 'POST', body: draft, headers: { 'idempotency-key': crypto.randomUUID() } })
+      const mask = await api('/api/masks', { method: 'POST', body: draft, headers: { 'idempotency-key': crypto.randomUUID() } })
       await refresh()
       return mask
     },
     async change({ id, version, name, form }, change) {
-      const mask = await $fetch(`/api/masks/${id}`, { method: 'PUT', body: { name, form, ...change }, headers: { 'if-match': `"v${version}"` } })
+      const mask = await api('/api/masks/:maskId', { params: { maskId: id }, method: 'PUT', body: { name, form, ...change }, headers: { 'if-match': `"v${version}"` } })
       await refresh()
       return mask
     },

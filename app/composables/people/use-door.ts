@@ -1,4 +1,5 @@
 import type { z } from 'zod'
+import { api } from '~/composables/api/api'
 import type { Acceptance } from '#shared/people/invitation'
 import type { SessionView } from '#shared/people/session'
 import type { SignUp } from '#shared/people/workshop'
@@ -26,22 +27,22 @@ export function useDoor(): Door {
 
   return {
     async signIn(tried) {
-      enter(await $fetch('/api/sign-in', { method: 'POST', body: tried }))
+      enter(await api('/api/sign-in', { method: 'POST', body: tried }))
     },
     async askForWorkshop(email) {
-      await $fetch('/api/sign-up', { method: 'POST', body: { email } })
+      await api('/api/sign-up', { method: 'POST', body: { email } })
     },
     async openWorkshop(token, wanted) {
-      enter(await $fetch(`/api/sign-up/${token}`, { method: 'POST', body: wanted }))
+      enter(await api('/api/sign-up/:token', { params: { token }, method: 'POST', body: wanted }))
     },
     async askForPassword(email) {
-      await $fetch('/api/password/forgot', { method: 'POST', body: { email } })
+      await api('/api/password/forgot', { method: 'POST', body: { email } })
     },
     async setPassword(token, password) {
-      await $fetch(`/api/password/reset/${token}`, { method: 'POST', body: { password } })
+      await api('/api/password/reset/:token', { params: { token }, method: 'POST', body: { password } })
     },
     async accept(token, acceptance) {
-      enter(await $fetch(`/api/invitations/by-link/${token}`, { method: 'POST', body: acceptance }))
+      enter(await api('/api/invitations/by-link/:token', { params: { token }, method: 'POST', body: acceptance }))
     },
   }
 }

@@ -1,4 +1,5 @@
 import { computed } from 'vue'
+import { api, useApi } from '~/composables/api/api'
 import type { InvitationDraft } from '#shared/people/invitation'
 import type { Role } from '#shared/people/roles'
 import { useMay } from './use-may'
@@ -8,7 +9,7 @@ const INVITATIONS_KEY = 'invitations'
 
 /** Who is in the workshop and, for owners, who was asked in. */
 export async function usePeople() {
-  const request = useRequestFetch()
+  const request = useApi()
   const mayChange = useMay()('people:change')
   const [people, invitations] = await Promise.all([
     useAsyncData(PEOPLE_KEY, () => request('/api/people')),
@@ -28,20 +29,20 @@ export function usePeopleEdits() {
 
   return {
     async invite(draft: InvitationDraft) {
-      await $fetch('/api/invitations', { method: 'POST', body: draft })
+      await api('/api/invitations', { method: 'POST', body: draft })
       await again()
     },
     async sendAgain(invitationId: string) {
-      await $fetch(`/api/invitations/${invitationId}/again`, { method: 'POST', body: {} })
+      await api('/api/invitations/:invitationId/again', { params: { invitationId }, method: 'POST', body: {} })
       await again()
     },
     async withdraw(invitationId: string) {
-      await $fetch(`/api/invitations/${invitationId}`, { method: 'DELETE' })
+      await api('/api/invitations/:invitationId', { params: { invitationId }, method: 'DELETE' })
       await again()
     },
     async changeRole(personId: string, role: Role) {
       try {
-        await $fetch(`/api/people/${personId}`, { method: 'PATCH', body: { role } })
+        await api('/api/people/:personId', { params: { personId }, method: 'PATCH', body: { role } })
       }
       finally {
         // Refused or not: what is shown is what is so.
@@ -49,7 +50,7 @@ export function usePeopleEdits() {
       }
     },
     async remove(personId: string) {
-      await $fetch(`/api/people/${personId}`, { method: 'DELETE' })
+      await api('/api/people/:personId', { params: { personId }, method: 'DELETE' })
       await again()
     },
   }

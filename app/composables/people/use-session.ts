@@ -1,4 +1,5 @@
 import type { Ref } from 'vue'
+import { api, useApi } from '~/composables/api/api'
 import { useLeaveDevice } from '~/composables/bench/use-leave-device'
 import type { SessionView } from '#shared/people/session'
 
@@ -17,7 +18,7 @@ export interface UseSession {
 export function useSession(): UseSession {
   const session = useState<SessionView | null>('session', () => null)
   const isKnown = useState('session-is-known', () => false)
-  const request = useRequestFetch()
+  const request = useApi()
   const { leave } = useLeaveDevice()
 
   return {
@@ -31,12 +32,12 @@ export function useSession(): UseSession {
     async signOut() {
       // What the bench left on this device is private, and some of it may be nowhere else.
       if (!await leave()) return
-      await $fetch('/api/sign-out', { method: 'POST' })
+      await api('/api/sign-out', { method: 'POST' })
       // A page loaded anew keeps nothing of what the last person saw.
       reloadNuxtApp({ path: '/sign-in', force: true })
     },
     async changeWorkshop(workshopId) {
-      await $fetch('/api/session/workshop', { method: 'PUT', body: { workshopId } })
+      await api('/api/session/workshop', { method: 'PUT', body: { workshopId } })
       reloadNuxtApp({ path: '/', force: true })
     },
   }

@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
+import { api, useApi } from '~/composables/api/api'
 import { orderAsWished } from '#shared/photos/order-as-wished'
 import type { PhotoView } from '#shared/photos/photo-view'
 
@@ -20,8 +21,8 @@ export interface Photos {
 
 /** Photos of a scheme, in the order they stand. */
 export async function usePhotos(schemeId: string): Promise<Photos> {
-  const request = useRequestFetch()
-  const { data, error, refresh } = await useAsyncData(`photos ${schemeId}`, (): Promise<PhotoView[]> => request(`/api/schemes/${schemeId}/photos`), { deep: false })
+  const request = useApi()
+  const { data, error, refresh } = await useAsyncData(`photos ${schemeId}`, (): Promise<PhotoView[]> => request('/api/schemes/:schemeId/photos', { params: { schemeId } }), { deep: false })
   const photos = computed(() => data.value ?? [])
 
   return {
@@ -32,13 +33,13 @@ export async function usePhotos(schemeId: string): Promise<Photos> {
       data.value = [...photos.value.filter(other => other.id !== photo.id), photo]
     },
     async changeAlt(photoId, alt) {
-      const changed = await $fetch(`/api/photos/${photoId}`, { method: 'PUT', body: { alt } })
+      const changed = await api('/api/photos/:photoId', { params: { photoId }, method: 'PUT', body: { alt } })
       data.value = photos.value.map(photo => photo.id === photoId ? changed : photo)
     },
     async order(photoIds) {
       data.value = orderAsWished(photos.value, photoIds)
       try {
-        data.value = await $fetch(`/api/schemes/${schemeId}/photos/order`, { method: 'PUT', body: { photoIds } })
+        data.value = await api('/api/schemes/:schemeId/photos/order', { params: { schemeId }, method: 'PUT', body: { photoIds } })
       }
       catch (refusal) {
         await refresh()
@@ -46,7 +47,7 @@ export async function usePhotos(schemeId: string): Promise<Photos> {
       }
     },
     async remove(photoId) {
-      await $fetch(`/api/photos/${photoId}`, { method: 'DELETE' })
+      await api('/api/photos/:photoId', { params: { photoId }, method: 'DELETE' })
       data.value = photos.value.filter(photo => photo.id !== photoId)
     },
   }

@@ -1,5 +1,6 @@
 import { schemeKey, SCHEMES_KEY } from './scheme-keys'
 import type { z } from 'zod'
+import { api } from '~/composables/api/api'
 import type { Fork, SchemeChange, SchemeStart } from '#shared/scheme/scheme-input'
 import type { RevisionView, SchemeView } from '#shared/scheme/scheme-view'
 
@@ -20,20 +21,20 @@ export function useSchemeActions(): SchemeActions {
   return {
     async create(start) {
       // The key lets a request that is sent again on a bad line start one scheme, not two.
-      const scheme = await $fetch('/api/schemes', { method: 'POST', body: start, headers: { 'idempotency-key': crypto.randomUUID() } })
+      const scheme = await api('/api/schemes', { method: 'POST', body: start, headers: { 'idempotency-key': crypto.randomUUID() } })
       await again()
       return scheme
     },
     async change({ id, version }, change) {
-      const scheme = await $fetch(`/api/schemes/${id}`, { method: 'PATCH', body: change, headers: { 'if-match': `"v${version}"` } })
+      const scheme = await api('/api/schemes/:schemeId', { params: { schemeId: id }, method: 'PATCH', body: change, headers: { 'if-match': `"v${version}"` } })
       await again(schemeKey(id))
       return scheme
     },
     async fork(schemeId, fork) {
-      const scheme = await $fetch(`/api/schemes/${schemeId}/fork`, { method: 'POST', body: fork, headers: { 'idempotency-key': crypto.randomUUID() } })
+      const scheme = await api('/api/schemes/:schemeId/fork', { params: { schemeId }, method: 'POST', body: fork, headers: { 'idempotency-key': crypto.randomUUID() } })
       await again()
       return scheme
     },
-    readRevision: (schemeId, number) => $fetch(`/api/schemes/${schemeId}/revisions/${number}`),
+    readRevision: (schemeId, number) => api('/api/schemes/:schemeId/revisions/:number', { params: { schemeId, number } }),
   }
 }

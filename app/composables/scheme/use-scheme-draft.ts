@@ -1,4 +1,5 @@
 import { onBeforeUnmount, onMounted, watch } from 'vue'
+import { api } from '~/composables/api/api'
 import { draftShelf } from './kept-draft'
 import { schemeKey, SCHEMES_KEY } from './scheme-keys'
 import { type DraftPorts, type SchemeDraft, workOnDraft } from './work-on-draft'
@@ -13,12 +14,12 @@ const ifMatch = (version: number) => ({ 'if-match': `"v${version}"` })
 
 function portsOf(schemeId: string): DraftPorts {
   return {
-    readScheme: () => $fetch(`/api/schemes/${schemeId}`),
-    readRevision: number => $fetch(`/api/schemes/${schemeId}/revisions/${number}`),
-    readMaterials: blankId => $fetch(`/api/schemes/${schemeId}/materials`, { query: { blankId } }),
-    save: (body, version) => $fetch(`/api/schemes/${schemeId}/draft`, { method: 'PUT', body: { body }, headers: ifMatch(version) }),
+    readScheme: () => api('/api/schemes/:schemeId', { params: { schemeId } }),
+    readRevision: number => api('/api/schemes/:schemeId/revisions/:number', { params: { schemeId, number } }),
+    readMaterials: blankId => api('/api/schemes/:schemeId/materials', { params: { schemeId }, query: { blankId } }),
+    save: (body, version) => api('/api/schemes/:schemeId/draft', { params: { schemeId }, method: 'PUT', body: { body }, headers: ifMatch(version) }),
     async publish(note, version) {
-      const revision = await $fetch(`/api/schemes/${schemeId}/revisions`, { method: 'POST', body: { note }, headers: ifMatch(version) })
+      const revision = await api('/api/schemes/:schemeId/revisions', { params: { schemeId }, method: 'POST', body: { note }, headers: ifMatch(version) })
       await refreshNuxtData([schemeKey(schemeId), SCHEMES_KEY])
       return revision
     },

@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
+import { useApi } from '~/composables/api/api'
 import { compareKey, schemeKey } from './scheme-keys'
 import type { CompareView, SchemeLookView, SchemeView } from '#shared/scheme/scheme-view'
 
@@ -12,21 +13,21 @@ export interface SchemeOnPage<View> {
 
 /** A scheme with its draft, materials and revisions, for those who read recipes. */
 export async function useScheme(schemeId: string): Promise<SchemeOnPage<SchemeView>> {
-  const request = useRequestFetch()
-  const { data, error, refresh } = await useAsyncData(schemeKey(schemeId), () => request(`/api/schemes/${schemeId}`), { deep: false })
+  const request = useApi()
+  const { data, error, refresh } = await useAsyncData(schemeKey(schemeId), () => request('/api/schemes/:schemeId', { params: { schemeId } }), { deep: false })
   return { scheme: computed(() => data.value ?? null), error, refresh: () => refresh() }
 }
 
 /** A published scheme as everybody in the workshop may see it. */
 export async function useSchemeLook(schemeId: string): Promise<SchemeOnPage<SchemeLookView>> {
-  const request = useRequestFetch()
-  const { data, error, refresh } = await useAsyncData(`${schemeKey(schemeId)} look`, () => request(`/api/schemes/${schemeId}/look`), { deep: false })
+  const request = useApi()
+  const { data, error, refresh } = await useAsyncData(`${schemeKey(schemeId)} look`, () => request('/api/schemes/:schemeId/look', { params: { schemeId } }), { deep: false })
   return { scheme: computed(() => data.value ?? null), error, refresh: () => refresh() }
 }
 
 /** Two versions of a scheme; `draft` or a revision's number. */
 export async function useSchemeCompare(schemeId: string, from: string, to: string): Promise<{ two: ComputedRef<CompareView | null>, error: Ref<unknown> }> {
-  const request = useRequestFetch()
-  const { data, error } = await useAsyncData(compareKey(schemeId, from, to), () => request(`/api/schemes/${schemeId}/compare`, { query: { from, to } }), { deep: false })
+  const request = useApi()
+  const { data, error } = await useAsyncData(compareKey(schemeId, from, to), () => request('/api/schemes/:schemeId/compare', { params: { schemeId }, query: { from, to } }), { deep: false })
   return { two: computed(() => data.value ?? null), error }
 }

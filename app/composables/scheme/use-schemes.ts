@@ -1,4 +1,5 @@
 import { computed, type ComputedRef, type Ref, ref, shallowRef, watch } from 'vue'
+import { api, useApi } from '~/composables/api/api'
 import { refDebounced } from '@vueuse/core'
 import { SCHEMES_KEY } from './scheme-keys'
 import type { SchemeRowView } from '#shared/scheme/scheme-view'
@@ -26,7 +27,7 @@ export interface Schemes {
 export async function useSchemes(start: Partial<SchemeSearch> = {}): Promise<Schemes> {
   const search = ref<SchemeSearch>({ words: '', retired: 'without', ...start })
   const asked = refDebounced(search, SEARCH_AFTER_MS)
-  const request = useRequestFetch()
+  const request = useApi()
   const more = shallowRef<readonly SchemeRowView[]>([])
   const next = ref<string | null>(null)
   const loadingMore = ref(false)
@@ -49,7 +50,7 @@ export async function useSchemes(start: Partial<SchemeSearch> = {}): Promise<Sch
       if (after === null || loadingMore.value) return
       loadingMore.value = true
       try {
-        const page = await $fetch('/api/schemes', { query: { ...asked.value, after } })
+        const page = await api('/api/schemes', { query: { ...asked.value, after } })
         // A search that changed meanwhile has its own first page: this one no longer belongs to it.
         if (next.value !== after) return
         more.value = [...more.value, ...page.items]
