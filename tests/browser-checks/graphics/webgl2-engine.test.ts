@@ -99,8 +99,8 @@ describe('on a canvas of a page', () => {
   })
   it('is not offered where nothing can be drawn into 32-bit numbers', () => {
     const { canvas, gl } = pageCanvas()
-    const { getExtension } = gl
-    gl.getExtension = ((name: 'WEBGL_debug_renderer_info') => `${name}` === 'EXT_color_buffer_float' ? null : getExtension.call(gl, name)) as typeof getExtension
+    const getExtension = gl.getExtension.bind(gl) as (name: string) => unknown
+    gl.getExtension = ((name: string) => name === 'EXT_color_buffer_float' ? null : getExtension(name)) as typeof gl.getExtension
     expect(webgl2Engine(canvas)).toBeUndefined()
   })
 })

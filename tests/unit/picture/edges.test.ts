@@ -67,7 +67,7 @@ describe('a hard edge', TIMEOUT, () => {
 
 describe('a soft fade', TIMEOUT, () => {
   it('has no bands: from row to row it falls by no more than a code, and never rises', () => {
-    const fade = brushed('Smoke', 3, { where: { zones: ['back', 'upper flank'], edge: 'fading', fade: 16, reach: 0 } })
+    const fade = brushed('Smoke', 3, { where: { zones: ['back', 'upper flank'], edge: 'fades', fade: 16, reach: 0 } })
     const picture = bench.draw(sprayed([brushed('Opaque white', 6), fade]), { width: 260, height: 420, mmPerPixel: 0.03, plain: true })
     // Dither and grain are averaged out along the body; what is left would show as bands.
     const profile = Array.from({ length: 420 }, (_, row) => mean(Array.from({ length: 60 }, (_, k) => picture.rgba[4 * (row * 260 + 100 + k) + 1]!)))
