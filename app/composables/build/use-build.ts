@@ -55,6 +55,8 @@ export interface Build {
   seen: UseSeen
   /** On small screens the coat sheet lies over the rest. */
   isSheetOpen: Ref<boolean>
+  /** A coat is being looked for. */
+  isFinding: Ref<boolean>
   /** Does an edit; what cannot be done is said, and false comes back. */
   act: (edit: SchemeEdit) => boolean
   choose: (coatId: string) => void
@@ -108,6 +110,7 @@ export function provideBuild(given: Pick<Build, 'scheme' | 'draft' | 'whyNot' | 
     seen,
     side: ref<PictureSide>('left flank'),
     isSheetOpen: ref(false),
+    isFinding: ref(false),
     act(edit) {
       const because = given.whyNot.value ?? draft.do(edit)
       if (because === null) return true
