@@ -1,16 +1,21 @@
 import { defineStore } from 'pinia'
-import { type ShallowRef, shallowReactive, shallowRef } from 'vue'
+import { ref, type Ref, type ShallowRef, shallowReactive, shallowRef } from 'vue'
 import type { DraftKeeper, SaveState } from '~/composables/scheme/draft-keeper'
 import { type History, startHistory } from '#shared/scheme/history'
 import type { SchemeBody } from '#shared/scheme/body'
 import type { Materials } from '#shared/scheme/materials'
 import type { SchemeView } from '#shared/scheme/scheme-view'
 
-/** Two versions of a draft, of which the painter chooses one. */
+/** Two versions of a draft that changed the same things, between which the painter chooses. */
 export interface DraftConflict {
+  /** What both began with; null when that is not known. */
+  base: SchemeBody | null
   mine: SchemeBody
   theirs: SchemeView
 }
+
+/** What somebody else saved and what came in from it, as sentences; `by` is null for somebody who left. */
+export interface TakenIn { by: string | null, words: readonly string[] }
 
 /** A draft that is being worked on, with what can be undone; outlives the page it is shown on. */
 export interface OpenDraft {
@@ -18,6 +23,9 @@ export interface OpenDraft {
   materials: ShallowRef<Materials>
   saveState: ShallowRef<SaveState>
   conflict: ShallowRef<DraftConflict | null>
+  takenIn: ShallowRef<TakenIn | null>
+  /** What the device kept is still being read: nothing can be changed yet. */
+  isOpening: Ref<boolean>
   /** The body the server had last: what unsaved work was made from. */
   base: SchemeBody
   /** Bodies sent since then without an answer: any of them may have arrived. */
@@ -35,6 +43,8 @@ export function openDraft(scheme: SchemeView): OpenDraft {
     materials: shallowRef(scheme.materials),
     saveState: shallowRef<SaveState>({ is: 'saved', at: scheme.savedAt }),
     conflict: shallowRef<DraftConflict | null>(null),
+    takenIn: shallowRef<TakenIn | null>(null),
+    isOpening: ref(true),
     base: scheme.draft,
     sent: [],
     failed: null,

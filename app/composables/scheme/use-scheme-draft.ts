@@ -1,6 +1,9 @@
 import { onBeforeUnmount, onMounted, watch } from 'vue'
 import { api } from '~/composables/api/api'
-import { draftShelf } from './kept-draft'
+import { draftDevice } from './draft-device'
+import { draftShelf } from './draft-shelf'
+import { claimTab } from './draft-tab'
+import type { DraftShelf } from './kept-draft'
 import { schemeKey, SCHEMES_KEY } from './scheme-keys'
 import { type DraftPorts, type SchemeDraft, workOnDraft } from './work-on-draft'
 import { type OpenDraft, openDraft, useSchemeDraftStore } from '~/stores/scheme-draft'
@@ -25,6 +28,22 @@ function portsOf(schemeId: string): DraftPorts {
     },
     now: () => Date.now(),
   }
+}
+
+/** A browser that answers no sooner keeps nothing for now, ms. */
+const DEVICE_WITHIN_MS = 3_000
+
+/** The slots of this tab and person. */
+async function openShelf(personId: string): Promise<DraftShelf> {
+  const late = new Promise<never>((_, reject) => {
+    window.setTimeout(() => reject(new Error('The browser does not open its storage.')), DEVICE_WITHIN_MS)
+  })
+  const opening = async () => {
+    // Opened before the first change: a page that goes away cannot wait for it any more.
+    const [tab] = await Promise.all([claimTab(), draftDevice()])
+    return draftShelf({ open: draftDevice, tab, personId, now: () => Date.now(), old: window.localStorage })
+  }
+  return Promise.race([opening(), late])
 }
 
 /** The draft that is already open when it holds work or is as the server has it; otherwise one opened anew. */
@@ -53,13 +72,13 @@ export function useSchemeDraft(scheme: SchemeView): SchemeDraft {
     work.refreshMaterials().catch(() => undefined)
   })
 
-  const keepNow = () => draft.keeper?.keepNow()
+  const keepNow = () => void draft.keeper?.keepNow()
   const saveNow = () => void work.saveNow()
 
   onMounted(() => {
     if (!draft.keeper) {
-      work.start({
-        shelf: draftShelf(window.localStorage, session.value?.person.id ?? 'nobody'),
+      void work.start({
+        openShelf: () => openShelf(session.value?.person.id ?? 'nobody'),
         later: (ms, run) => {
           const timer = window.setTimeout(run, ms)
           return () => window.clearTimeout(timer)

@@ -1,12 +1,15 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
 import { createDraftKeeper, type KeeperPorts, type SaveFailure, type SaveState } from './draft-keeper'
 import { type DraftShelf, openingOf } from './kept-draft'
-import type { DraftConflict, OpenDraft } from '~/stores/scheme-draft'
+import type { DraftConflict, OpenDraft, TakenIn } from '~/stores/scheme-draft'
 import { explain } from '~/errors/explain'
 import { problemOf } from '~/errors/problem-of'
 import { Problem } from '#shared/errors/problem'
 import { applyEdit, editField, type SchemeEdit, editWords } from '#shared/scheme/edits'
 import { type History, record, redo, startHistory, undo } from '#shared/scheme/history'
+import { type Choices, mergeBodies } from '#shared/scheme/merge-bodies'
+import { rebaseHistory, settleHistory } from '#shared/scheme/merge-history'
+import { takenInWords } from '#shared/scheme/merge-words'
 import { sameValue } from '#shared/scheme/canonical'
 import { SchemeBody } from '#shared/scheme/body'
 import type { Materials } from '#shared/scheme/materials'
@@ -14,7 +17,8 @@ import type { DraftSavedView, RevisionView, SchemeView } from '#shared/scheme/sc
 
 /** How many sends without an answer are remembered. */
 const SENT_MAX = 20
-const CHOOSE_FIRST = 'Somebody else saved this scheme meanwhile. Choose one of the two versions first.'
+const CHOOSE_FIRST = 'Somebody else changed the same things meanwhile. Choose between the two first.'
+const STILL_OPENING = 'This draft is still being opened. Try again in a moment.'
 const READ_ONLY = 'Your role in this workshop reads recipes and does not change them. Ask a painter.'
 
 /** The draft on the page: the body as the painter has it now, saved by itself. */
@@ -40,8 +44,12 @@ export interface SchemeDraft {
   restore: (number: number) => Promise<void>
   /** Another person's version beside one's own; null while there is no such thing. */
   conflict: Readonly<Ref<DraftConflict | null>>
-  /** Ends a conflict with one of the two versions; undo brings the other back. */
-  settle: (keep: 'mine' | 'theirs') => void
+  /** Ends a conflict by what was chosen for each clash; undo brings the other side back. */
+  settle: (choices: Choices) => void
+  /** What last came in from somebody else by itself, since it clashed with nothing of one's own; null before that. */
+  takenIn: Readonly<Ref<TakenIn | null>>
+  /** Word came that this version was saved, here or elsewhere. */
+  heard: (version: number) => void
   /** Sends what is unsaved now; where another person's version could not be read before, reads it. */
   saveNow: () => Promise<void>
   /** The shelf or the blank may have changed: reads the materials again. */
@@ -58,8 +66,8 @@ export interface DraftPorts {
   now: () => number
 }
 
-/** What keeping a draft needs from the device. */
-export interface DevicePorts { shelf: DraftShelf, later: KeeperPorts['later'] }
+/** What keeping a draft needs from the device; without a shelf it keeps nothing. */
+export interface DevicePorts { openShelf: () => Promise<DraftShelf>, later: KeeperPorts['later'] }
 
 /** A body as the server keeps it: spaces round names taken off. */
 function asStored(body: SchemeBody): SchemeBody {
@@ -74,36 +82,39 @@ function failureOf(error: unknown): SaveFailure {
 }
 
 /** Work on one open draft. `start` begins to keep and save it: once, in a browser. */
-export function workOnDraft(scheme: SchemeView, draft: OpenDraft, ports: DraftPorts, mayChange: boolean): SchemeDraft & { start: (device: DevicePorts) => void } {
-  const { history, materials, saveState, conflict } = draft
+export function workOnDraft(scheme: SchemeView, draft: OpenDraft, ports: DraftPorts, mayChange: boolean): SchemeDraft & { start: (device: DevicePorts) => Promise<void> } {
+  const { history, materials, saveState, conflict, takenIn } = draft
   const present = () => history.value.present
   const take = (body: SchemeBody, words: string) => {
     history.value = record(history.value, body, { words, field: null, at: ports.now() })
   }
   const changed = () => draft.keeper?.change(present())
 
-  /** Goes on from the server's version where nobody's work is at stake; null when a person has to choose. */
-  function onward(theirs: SchemeView): SchemeBody | 'nothing' | null {
-    if (sameValue(theirs.draft, asStored(present()))) return 'nothing'
-    // Only the name or the fish changed, or what arrived is one's own save whose answer got lost.
-    const isKnown = [draft.base, ...draft.sent].some(known => sameValue(theirs.draft, asStored(known)))
-    return isKnown ? present() : null
+  /** Goes on from what the server has: `present` is saved on top of it, unless it is the same. */
+  function goOnFrom(theirs: SchemeView) {
+    draft.base = theirs.draft
+    draft.sent = []
+    // The blank drawn on belongs to the body on the page.
+    materials.value = theirs.draft.blankId === present().blankId ? theirs.materials : { ...theirs.materials, blank: materials.value.blank }
+    const isSaved = sameValue(theirs.draft, asStored(present()))
+    draft.keeper?.settle(theirs.version, isSaved ? null : present(), theirs.savedAt)
   }
 
-  async function readConflict() {
-    try {
-      const theirs = await ports.readScheme()
-      const unsaved = onward(theirs)
-      if (unsaved === null) {
-        conflict.value = { mine: present(), theirs }
-        return
-      }
-      draft.base = theirs.draft
-      draft.keeper?.settle(theirs.version, unsaved === 'nothing' ? null : unsaved, theirs.savedAt)
+  /** Makes one of what is on the page and what the server has, both made from `base`; where both changed one thing, a person chooses. */
+  function meet(theirs: SchemeView, base: SchemeBody | null) {
+    const mine = present()
+    // Only the name or the fish changed, or what arrived is one's own save whose answer got lost.
+    const isKnown = [...base ? [base] : [], ...draft.sent, mine].some(known => sameValue(theirs.draft, asStored(known)))
+    if (isKnown) return goOnFrom(theirs)
+    const { body, clashes } = mergeBodies(base, mine, theirs.draft)
+    if (clashes.length > 0) {
+      conflict.value = { base, mine, theirs }
+      draft.keeper?.hold(mine)
+      return
     }
-    catch {
-      // No connection for their version now: nothing is sent or lost; the next try reads it.
-    }
+    history.value = base ? rebaseHistory(history.value, base, theirs.draft) : startHistory(body)
+    takenIn.value = { by: theirs.savedBy?.name ?? null, words: takenInWords(mine, body, theirs.materials) }
+    goOnFrom(theirs)
   }
 
   async function send(unsaved: SchemeBody, version: number): Promise<DraftSavedView> {
@@ -114,34 +125,41 @@ export function workOnDraft(scheme: SchemeView, draft: OpenDraft, ports: DraftPo
     return saved
   }
 
-  function start({ shelf, later }: DevicePorts) {
+  async function start({ openShelf, later }: DevicePorts) {
+    const shelf = openShelf()
     const keeper = createDraftKeeper(scheme.version, {
       send,
       failure: (error) => {
         draft.failed = error
         return failureOf(error)
       },
-      keep: (body, version) => shelf.write(scheme.id, { version, body }),
-      forget: () => shelf.remove(scheme.id),
-      onConflict: () => void readConflict(),
+      keep: async (unsaved, version) => (await shelf).write(scheme.id, { version, base: draft.base, isUnsaved: unsaved !== null, history: { ...history.value, past: [...history.value.past], future: [...history.value.future], last: null } }),
+      reconcile: async () => meet(await ports.readScheme(), draft.base),
       onState: (state) => {
         saveState.value = state
       },
       later,
     })
     draft.keeper = keeper
-    const opening = mayChange ? openingOf({ version: scheme.version, body: scheme.draft }, shelf.read(scheme.id), sameValue) : { is: 'as saved' as const }
+    // A device that keeps nothing takes only the safety net, never the work on the page.
+    const kept = mayChange ? await shelf.then(open => open.read(scheme.id)).catch(() => null) : null
+    draft.isOpening.value = false
+    const opening = openingOf({ version: scheme.version, body: scheme.draft }, kept, sameValue)
     switch (opening.is) {
       case 'as saved':
-        shelf.remove(scheme.id)
         return
-      case 'conflict':
-        keeper.hold(opening.mine)
-        conflict.value = { mine: opening.mine, theirs: scheme }
+      case 'history':
+        history.value = opening.kept.history
+        if (opening.kept.isUnsaved) goOnFrom(scheme)
         return
       case 'unsaved':
-        take(opening.body, 'Take up unsaved work')
+        if (opening.kept.history.past.length > 0) history.value = opening.kept.history
+        else take(opening.kept.history.present, 'Take up unsaved work')
         changed()
+        return
+      case 'behind':
+        history.value = opening.kept.history
+        meet(scheme, opening.kept.base)
     }
   }
 
@@ -152,7 +170,7 @@ export function workOnDraft(scheme: SchemeView, draft: OpenDraft, ports: DraftPo
   }
 
   function step(next: History) {
-    if (conflict.value || !mayChange) return
+    if (conflict.value || draft.isOpening.value || !mayChange) return
     history.value = next
     changed()
   }
@@ -165,6 +183,7 @@ export function workOnDraft(scheme: SchemeView, draft: OpenDraft, ports: DraftPo
     mayChange,
     do(edit) {
       if (!mayChange) return READ_ONLY
+      if (draft.isOpening.value) return STILL_OPENING
       if (conflict.value) return CHOOSE_FIRST
       const outcome = applyEdit(present(), edit)
       if (!outcome.ok) return outcome.because
@@ -189,21 +208,16 @@ export function workOnDraft(scheme: SchemeView, draft: OpenDraft, ports: DraftPo
       changed()
       await saveAll()
     },
-    settle(keep) {
+    settle(choices) {
       const two = conflict.value
       if (!two) return
       conflict.value = null
-      materials.value = two.theirs.materials
-      draft.base = two.theirs.draft
-      // Both versions stay within reach: the one not kept is one undo away.
-      history.value = startHistory(keep === 'mine' ? two.theirs.draft : two.mine)
-      take(keep === 'mine' ? two.mine : two.theirs.draft, keep === 'mine' ? 'Keep my version' : 'Take the other version')
-      draft.keeper?.settle(two.theirs.version, keep === 'mine' ? two.mine : null, two.theirs.savedAt)
+      history.value = settleHistory(history.value, two.base, two.theirs.draft, choices)
+      goOnFrom(two.theirs)
     },
-    async saveNow() {
-      if (saveState.value.is === 'conflict' && !conflict.value) await readConflict()
-      await draft.keeper?.flush()
-    },
+    takenIn,
+    heard: version => draft.keeper?.heard(version),
+    saveNow: async () => draft.keeper?.flush(),
     async refreshMaterials() {
       const { blankId } = present()
       const read = await ports.readMaterials(blankId)

@@ -1,5 +1,5 @@
 import { beforeEach, describe, expect, it } from 'vitest'
-import { createDraftKeeper, type DraftKeeper, KEEP_WITHIN_MS, SAVE_AFTER_MS, type SaveState } from '~/composables/scheme/draft-keeper'
+import { createDraftKeeper, type DraftKeeper, KEEP_WITHIN_MS, NO_ROOM, SAVE_AFTER_MS, type SaveState } from '~/composables/scheme/draft-keeper'
 import type { SchemeBody } from '#shared/scheme/body'
 import { body } from './bodies'
 
@@ -11,11 +11,14 @@ class World {
   device: { body: SchemeBody, version: number } | null = null
   states: SaveState[] = []
   conflicts = 0
+  isFull = false
   sent = 0
   fails: 'never' | 'no connection' | 'refused' = 'never'
   /** While set, answers wait for it. */
   gate: Promise<void> | null = null
   keeper: DraftKeeper
+  /** What the painter has on the page. */
+  mine = body(1, 2)
 
   constructor() {
     this.keeper = createDraftKeeper(1, {
@@ -24,14 +27,14 @@ class World {
         const why = (error as Error).message
         return why === 'changed meanwhile' ? { why } : { why: why as 'no connection' | 'refused', because: 'Because.' }
       },
-      keep: (unsaved, version) => {
-        this.device = { body: unsaved, version }
+      keep: async (unsaved, version) => {
+        if (this.isFull) throw new DOMException('full', 'QuotaExceededError')
+        this.device = unsaved && { body: unsaved, version }
       },
-      forget: () => {
-        this.device = null
-      },
-      onConflict: () => {
+      reconcile: async () => {
+        if (this.fails !== 'never') throw new Error(this.fails)
         this.conflicts++
+        this.keeper.hold(this.mine)
       },
       onState: state => this.states.push(state),
       later: (ms, run) => {
@@ -154,12 +157,37 @@ describe('without a connection', () => {
     await world.pass(SAVE_AFTER_MS)
     world.keeper.change(body(1, 2, 3))
     await world.pass(10_000)
-    const offline = world.states.slice(world.states.findIndex(state => state.is === 'on this device'))
+    const offline = world.states.slice(world.states.findLastIndex(state => state.is === 'saving') + 1)
+    expect(offline.length).toBeGreaterThan(1)
     expect(offline.every(state => state.is === 'on this device')).toBe(true)
     expect(world.device?.body).toEqual(body(1, 2, 3))
     world.fails = 'never'
     await world.pass(60_000)
     expect(world.server.body).toEqual(body(1, 2, 3))
+    expect(world.state).toMatchObject({ is: 'saved' })
+  })
+
+  it('says that a change is on the device only once the device has said so', async () => {
+    world.fails = 'no connection'
+    world.keeper.change(body(1, 2))
+    await world.pass(SAVE_AFTER_MS)
+    expect(world.state?.is).toBe('on this device')
+    world.keeper.change(body(1, 2, 3))
+    await settled()
+    expect(world.state?.is).toBe('saving')
+    await world.pass(KEEP_WITHIN_MS)
+    expect([world.state?.is, world.device?.body]).toEqual(['on this device', body(1, 2, 3)])
+  })
+
+  it('says so when the device has no room for it either, and saves when the line is back', async () => {
+    world.fails = 'no connection'
+    world.isFull = true
+    world.keeper.change(body(1, 2))
+    await world.pass(SAVE_AFTER_MS)
+    expect(world.state).toEqual({ is: 'cannot save', because: `Because. ${NO_ROOM}` })
+    world.fails = 'never'
+    await world.pass(60_000)
+    expect(world.server.body).toEqual(body(1, 2))
     expect(world.state).toMatchObject({ is: 'saved' })
   })
 
@@ -182,6 +210,7 @@ describe('when somebody else saved meanwhile', () => {
   it('nothing of theirs is overwritten and nothing of mine is lost', async () => {
     expect(world.conflicts).toBe(1)
     expect(world.state).toEqual({ is: 'conflict' })
+    expect(world.states.map(state => state.is)).toEqual(['saving', 'saving', 'conflict'])
     world.keeper.change(body(1, 2, 3))
     await world.pass(60_000)
     expect(world.server.body).toEqual(body(9))
@@ -208,6 +237,60 @@ describe('when somebody else saved meanwhile', () => {
     expect(world.device).toBeNull()
     expect(world.state).toEqual({ is: 'saved', at: 'then' })
   })
+})
+
+describe('word of somebody else\'s save', () => {
+  it('has theirs read at once, though there is nothing of one\'s own to save', async () => {
+    world.keeper.heard(2)
+    await settled()
+    expect(world.conflicts).toBe(1)
+  })
+
+  it('means nothing when it is one\'s own, even if it comes before the answer', async () => {
+    let open = () => {}
+    world.gate = new Promise((resolve) => {
+      open = resolve
+    })
+    world.keeper.change(body(1, 2))
+    await world.pass(SAVE_AFTER_MS)
+    world.keeper.heard(2)
+    open()
+    await world.pass(60_000)
+    world.keeper.heard(2)
+    await settled()
+    expect([world.conflicts, world.state?.is]).toEqual([0, 'saved'])
+  })
+
+  it('that came while one\'s own was on its way is acted on after it', async () => {
+    let open = () => {}
+    world.gate = new Promise((resolve) => {
+      open = resolve
+    })
+    world.keeper.change(body(1, 2))
+    await world.pass(SAVE_AFTER_MS)
+    world.keeper.heard(3)
+    open()
+    await world.pass(10)
+    expect(world.conflicts).toBe(1)
+  })
+
+  it('is read later when it cannot be read now', async () => {
+    world.fails = 'no connection'
+    world.keeper.heard(2)
+    await settled()
+    expect(world.conflicts).toBe(0)
+    world.fails = 'never'
+    await world.pass(5_000)
+    expect(world.conflicts).toBe(1)
+  })
+})
+
+it('what is sent at once lies on the device too until the answer comes', async () => {
+  world.gate = new Promise(() => {})
+  world.keeper.change(body(1, 2))
+  void world.keeper.flush()
+  await world.pass(KEEP_WITHIN_MS)
+  expect(world.device?.body).toEqual(body(1, 2))
 })
 
 it('a save that is refused says why, keeps the work, and is tried again with the next change', async () => {

@@ -1,4 +1,5 @@
 import { beforeEach, describe, expect, it } from 'vitest'
+import { watch } from 'vue'
 import type { KeptDraft } from '~/composables/scheme/kept-draft'
 import { workOnDraft } from '~/composables/scheme/work-on-draft'
 import { openDraft } from '~/stores/scheme-draft'
@@ -53,7 +54,7 @@ class Server {
 }
 
 /** One painter with a page and a device. Time passes only when `wait` is called. */
-function painter(server: Server, device: { kept: KeptDraft | null } = { kept: null }, mayChange = true) {
+async function painter(server: Server, device: { kept: KeptDraft | null } = { kept: null }, mayChange = true) {
   const scheme = server.view()
   const draft = openDraft(scheme)
   let timers: (() => void)[] = []
@@ -66,16 +67,15 @@ function painter(server: Server, device: { kept: KeptDraft | null } = { kept: nu
     publish: (note, version) => server.publish(note, version),
     now: () => clock += 10_000,
   }, mayChange)
-  work.start({
-    shelf: {
-      read: () => structuredClone(device.kept),
-      write: (_, kept) => {
+  const states: string[] = []
+  watch(draft.saveState, state => states.push(state.is), { flush: 'sync' })
+  await work.start({
+    openShelf: async () => ({
+      read: async () => structuredClone(device.kept),
+      write: async (_, kept) => {
         device.kept = structuredClone(kept)
       },
-      remove: () => {
-        device.kept = null
-      },
-    },
+    }),
     later: (_, run) => {
       timers.push(run)
       return () => {
@@ -86,6 +86,7 @@ function painter(server: Server, device: { kept: KeptDraft | null } = { kept: nu
   return {
     ...work,
     device,
+    states,
     lay: (n: number) => work.do({ do: 'add-coat', coat: coat(n), row: work.body.value.stack.length }),
     async wait() {
       for (const run of timers.splice(0)) run()
@@ -101,7 +102,7 @@ beforeEach(() => {
 
 describe('one painter', () => {
   it('sees an edit at once, and it is saved by itself', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     expect(ann.lay(2)).toBeNull()
     expect(rows(ann.body.value)).toEqual([1, 2])
     await ann.wait()
@@ -110,14 +111,14 @@ describe('one painter', () => {
   })
 
   it('is told why an edit cannot be done, and nothing is saved for it', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     expect(ann.do({ do: 'carry-coat', coatId: id('coat', 1), way: 'down' })).toBe('It lies on the ground already: nothing is below it.')
     await ann.wait()
     expect(server.version).toBe(1)
   })
 
   it('undoes and redoes, in words, and both are saved', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     ann.lay(2)
     expect([ann.undoWords.value, ann.canRedo.value]).toEqual(['Lay a coat', false])
     ann.undo()
@@ -129,14 +130,14 @@ describe('one painter', () => {
   })
 
   it('publishes what is on the page, saved or not', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     ann.lay(2)
     await ann.publish('done')
     expect(server.published.map(each => [each.note, rows(each.draft)])).toEqual([['done', [1, 2]]])
   })
 
   it('cannot publish an older draft than the page shows when the line is down', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     ann.lay(2)
     server.online = false
     await expect(ann.publish('done')).rejects.toThrow('Failed to fetch')
@@ -145,7 +146,7 @@ describe('one painter', () => {
   })
 
   it('gets an older revision back, one undo away from the present', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     await ann.restore(1)
     expect(rows(server.draft)).toEqual([7])
     ann.undo()
@@ -154,14 +155,14 @@ describe('one painter', () => {
   })
 
   it('who may only read changes nothing', async () => {
-    const bench = painter(server, undefined, false)
+    const bench = await painter(server, undefined, false)
     expect(bench.lay(2)).toMatch(/^Your role/)
     expect(rows(bench.body.value)).toEqual([1])
     await expect(bench.restore(1)).rejects.toMatchObject({ data: { code: 'auth/not-allowed' } })
   })
 
   it('draws another blank with that blank\'s materials', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     ann.do({ do: 'choose-blank', blankId: id('blank', 2) })
     await ann.refreshMaterials()
     expect(ann.materials.value.blank.id).toBe(id('blank', 2))
@@ -169,42 +170,75 @@ describe('one painter', () => {
 })
 
 describe('after a sudden end', () => {
-  it('the work goes on where it was, and is saved', async () => {
-    const before = painter(server)
+  it('the work goes on where it was, with its undo, and is saved', async () => {
+    const before = await painter(server)
     server.online = false
     before.lay(2)
+    before.lay(3)
+    before.undo()
     await before.wait()
     server.online = true
-    const after = painter(server, before.device)
+    const after = await painter(server, before.device)
     expect(rows(after.body.value)).toEqual([1, 2])
-    expect(after.undoWords.value).toBe('Take up unsaved work')
+    expect([after.undoWords.value, after.redoWords.value]).toEqual(['Lay a coat', 'Lay a coat'])
     await after.wait()
     expect(rows(server.draft)).toEqual([1, 2])
-    expect(after.device.kept).toBeNull()
+    expect(after.device.kept?.isUnsaved).toBe(false)
+    after.undo()
+    await after.wait()
+    expect(rows(server.draft)).toEqual([1])
   })
 
-  it('work made from an older version waits for a choice, and neither is lost', async () => {
-    const before = painter(server)
+  it('more than fifty steps can be undone though all of them were saved', async () => {
+    const before = await painter(server)
+    for (let n = 2; n < 57; n++) before.lay(n)
+    await before.wait()
+    const after = await painter(server, before.device)
+    for (let n = 2; n < 57; n++) after.undo()
+    expect(rows(after.body.value)).toEqual([1])
+    for (let n = 2; n < 57; n++) after.redo()
+    expect(after.body.value).toEqual(before.body.value)
+  })
+
+  it('undo of what was saved leaves alone what others saved since', async () => {
+    const before = await painter(server)
+    before.lay(2)
+    await before.wait()
+    await server.save(body(9, 1, 2), server.version)
+    const after = await painter(server, before.device)
+    expect(rows(after.body.value)).toEqual([9, 1, 2])
+    after.undo()
+    await after.wait()
+    expect(rows(server.draft)).toEqual([9, 1])
+  })
+
+  it('work made from an older version waits for a choice where both did the same thing, and neither is lost', async () => {
+    const before = await painter(server)
     server.online = false
     before.lay(2)
     await before.wait()
     server.online = true
     await server.save(body(1, 3), 1)
-    const after = painter(server, before.device)
-    expect(rows(after.body.value)).toEqual([1, 3])
-    expect(rows(after.conflict.value!.mine)).toEqual([1, 2])
+    const after = await painter(server, before.device)
+    expect(after.conflict.value && [after.conflict.value.mine, after.conflict.value.theirs.draft].map(rows)).toEqual([[1, 2], [1, 3]])
     await after.wait()
     expect(rows(server.draft)).toEqual([1, 3])
     after.settle('mine')
     await after.wait()
-    expect(rows(server.draft)).toEqual([1, 2])
+    expect(rows(server.draft)).toEqual([1, 3, 2])
+  })
+
+  it('nothing is changed while what the device kept is still being read', async () => {
+    const draft = openDraft(server.view())
+    const work = workOnDraft(server.view(), draft, {} as Parameters<typeof workOnDraft>[2], true)
+    expect(work.do({ do: 'take-out-coat', coatId: id('coat', 1) })).toMatch(/still being opened/)
   })
 })
 
 describe('two painters on one draft', () => {
   async function bothSaved() {
-    const ann = painter(server)
-    const ben = painter(server)
+    const ann = await painter(server)
+    const ben = await painter(server)
     ann.lay(2)
     ben.lay(3)
     await ann.wait()
@@ -212,46 +246,74 @@ describe('two painters on one draft', () => {
     return { ann, ben }
   }
 
+  it('who worked on different coats both keep their work, are not asked, and the second is told', async () => {
+    const ann = await painter(server)
+    const ben = await painter(server)
+    ann.do({ do: 'add-coat', coat: coat(2), row: 0 })
+    await ann.wait()
+    ben.do({ do: 'set-passes', coatId: id('coat', 1), passes: 9 })
+    await ben.wait()
+    await ben.wait()
+    expect(rows(server.draft)).toEqual([2, 1])
+    expect(server.draft.stack.at(-1)).toMatchObject({ coat: { passes: 9 } })
+    expect(ben.states).not.toContain('conflict')
+    expect(ben.takenIn.value?.words).toEqual(['Coat 1 is new.'])
+    ben.undo()
+    await ben.wait()
+    expect(rows(server.draft)).toEqual([2, 1])
+  })
+
+  it('see what the other saved as soon as word of it comes', async () => {
+    const ann = await painter(server)
+    const ben = await painter(server)
+    ann.lay(2)
+    await ann.wait()
+    ben.heard(server.version)
+    await ben.wait()
+    expect(rows(ben.body.value)).toEqual([1, 2])
+    expect([ben.saveState.value.is, ben.canUndo.value]).toEqual(['saved', false])
+  })
+
   it('the second sees both versions and overwrites nothing', async () => {
     const { ben } = await bothSaved()
     expect(rows(server.draft)).toEqual([1, 2])
     expect([ben.conflict.value!.mine, ben.conflict.value!.theirs.draft].map(rows)).toEqual([[1, 3], [1, 2]])
-    expect(ben.lay(4)).toMatch(/^Somebody else saved/)
-    expect(ben.device.kept?.body && rows(ben.device.kept.body)).toEqual([1, 3])
+    expect(ben.lay(4)).toMatch(/^Somebody else changed/)
+    expect(ben.device.kept && rows(ben.device.kept.history.present)).toEqual([1, 3])
   })
 
-  it('may keep theirs, and have the own one back by undo', async () => {
+  it('may take theirs where both did the same thing, and have the own one back by undo', async () => {
     const { ben } = await bothSaved()
     ben.settle('theirs')
     await ben.wait()
-    expect([rows(ben.body.value), rows(server.draft), server.version]).toEqual([[1, 2], [1, 2], 2])
+    expect([rows(ben.body.value), rows(server.draft)]).toEqual([[1, 3, 2], [1, 3, 2]])
     ben.undo()
     await ben.wait()
-    expect(rows(server.draft)).toEqual([1, 3])
+    expect(rows(server.draft)).toEqual([1, 2, 3])
   })
 
   it('may keep the own one, and have theirs back by undo', async () => {
     const { ben } = await bothSaved()
     ben.settle('mine')
     await ben.wait()
-    expect(rows(server.draft)).toEqual([1, 3])
+    expect(rows(server.draft)).toEqual([1, 2, 3])
     ben.undo()
     await ben.wait()
-    expect(rows(server.draft)).toEqual([1, 2])
+    expect(rows(server.draft)).toEqual([1, 3, 2])
   })
 
   it('are not asked when both did the same, or when only the name was changed', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     server.version = 2
     ann.lay(2)
     await ann.wait()
-    expect(ann.conflict.value).toBeNull()
+    expect(ann.states).not.toContain('conflict')
     await ann.wait()
     expect([rows(server.draft), server.version]).toEqual([[1, 2], 3])
   })
 
   it('are not asked because of a space after a name, which the server takes off', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     ann.do({ do: 'change-coat', coatId: id('coat', 1), change: { name: 'bars ' } })
     await ann.wait()
     server.version++
@@ -263,7 +325,7 @@ describe('two painters on one draft', () => {
   })
 
   it('are not asked about one\'s own save whose answer got lost', async () => {
-    const ann = painter(server)
+    const ann = await painter(server)
     ann.lay(2)
     server.losesAnswers = true
     await ann.wait()
@@ -276,7 +338,7 @@ describe('two painters on one draft', () => {
   })
 
   it('a conflict met while the line breaks is read when it is back', async () => {
-    const { ann } = { ann: painter(server) }
+    const { ann } = { ann: await painter(server) }
     await server.save(body(1, 9), 1)
     const read = server.read.bind(server)
     server.read = async () => {
@@ -284,7 +346,7 @@ describe('two painters on one draft', () => {
     }
     ann.lay(2)
     await ann.wait()
-    expect([ann.saveState.value.is, ann.conflict.value]).toEqual(['conflict', null])
+    expect([ann.saveState.value.is, ann.conflict.value]).toEqual(['on this device', null])
     server.read = read
     await ann.saveNow()
     expect(rows(ann.conflict.value!.theirs.draft)).toEqual([1, 9])
