@@ -17,6 +17,7 @@ export function filePaint(row: typeof paints.$inferSelect): FilePaint {
     density: row.density,
     restMinutes: row.restMinutes,
     ...row.potLifeMinutes === null ? {} : { potLifeMinutes: row.potLifeMinutes },
+    ...row.twoPart === null ? {} : { twoPart: row.twoPart },
     hazards: row.hazards,
     note: row.note,
   }

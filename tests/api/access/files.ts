@@ -1,5 +1,7 @@
 import { writeSchemeFile } from '#server/services/files/write-scheme-file'
+import { addPaint } from '#server/services/shelf/add-paint'
 import { testScheme } from '../scheme/ground'
+import { paintDraft } from '../shelf/ground'
 import type { AccessRow, Who } from './row'
 
 /** Those who read recipes take files of them out. */
@@ -17,4 +19,12 @@ export const FILES_ACCESS: AccessRow[] = [
     method: 'POST', path: '/api/schemes/file', who: makers,
     make: async ({ owner }) => ({ url: '/api/schemes/file', body: await writeSchemeFile(owner, (await testScheme(owner)).scheme.id) }),
   },
+  {
+    method: 'GET', path: '/api/paints/file', who: { ...readers, stranger: 200 },
+    make: async ({ owner }) => {
+      await addPaint(owner, paintDraft({ name: 'Planted tan' }))
+      return { url: '/api/paints/file', secret: ['Planted tan'] }
+    },
+  },
+  { method: 'POST', path: '/api/paints/file', who: makers, make: () => ({ url: '/api/paints/file', body: { csv: 'name,kind,base,known_by\r\nClear,clear,epoxy,clear\r\n' } }) },
 ]

@@ -44,7 +44,7 @@ const BY_HAND = Mark.parse({ kind: 'strokes', with: 'airbrush', strokes: [{ poin
 /** Builds such a scheme through the services, as a painter would. */
 export async function carriedScheme(ctx: Ctx, wish: Carried): Promise<string> {
   const blank = await addBlank(ctx, { name: 'Own shad', shape: builtInBlank('minnow-90') })
-  const paints = await Promise.all(KNOWN.map((known, i) => addPaint(ctx, paintDraft({ name: `Paint ${i}`, known, ...i === 2 ? { potLifeMinutes: 45 } : {} }))))
+  const paints = await Promise.all(KNOWN.map((known, i) => addPaint(ctx, paintDraft({ name: `Paint ${i}`, known, ...i === 2 ? { potLifeMinutes: 45, twoPart: { by: 'weight' as const, resin: 100, hardener: 44 } } : {} }))))
   const net = wish.ownMask ? await addMask(ctx, { name: 'Scale net', form: NET }) : null
   const coats = wish.coats.map(({ paint, passes, reducer, byHand, note }) => Coat.parse({
     ...newCoat(crypto.randomUUID(), paints[paint]), passes, note, mix: { parts: [{ paintId: paints[paint]!.id, drops: 7 }], reducer }, marks: byHand ? [BY_HAND] : [],
