@@ -80,6 +80,14 @@ export function withWidth(marks: readonly Mark[], at: PartAt, width: readonly [n
   })
 }
 
+/** Rays from one root. */
+export type Fan = Extract<Mark, { kind: 'fan' }>
+
+/** The marks with one fan otherwise. */
+export function withFan(marks: readonly Mark[], at: PartAt, change: Partial<Pick<Fan, 'count' | 'length' | 'angle'>>): Mark[] {
+  return changed(marks, at, mark => mark.kind === 'fan' ? { ...mark, ...change } : mark)
+}
+
 /** The marks without one part; a mark left without any goes too. */
 export function withoutPart(marks: readonly Mark[], at: PartAt): Mark[] {
   return marks.flatMap((mark, place): Mark[] => {
