@@ -1,11 +1,11 @@
 import { z } from 'zod'
 import type { Role } from './roles'
-import type { Units } from './workshop'
+import type { WorkshopSettings } from './workshop'
 
 /** Who is signed in, where, as what, and where else they could be. */
 export interface SessionView {
   person: { id: string, name: string, email: string }
-  workshop: { id: string, name: string, isDemo: boolean, units: Units, ownLamp: number | null } | null
+  workshop: ({ id: string, name: string, isDemo: boolean } & WorkshopSettings) | null
   role: Role | null
   workshops: { id: string, name: string, role: Role }[]
 }

@@ -1,5 +1,7 @@
 import { z } from 'zod'
 import { KELVIN_MAX, KELVIN_MIN } from '#shared/optics/kelvin-light'
+import { OwnPlanning } from '#shared/quantities/planning-values'
+import { OwnUnits } from '#shared/quantities/quantities'
 import { NewPassword, PersonName } from './person'
 
 export const WORKSHOP_NAME_MAX = 80
@@ -11,8 +13,8 @@ export type Units = z.output<typeof Units>
 
 /** The units as a person reads them. */
 export const UNITS_WORDS: Readonly<Record<Units, string>> = {
-  metric: 'Millimetres, millilitres, bar',
-  inch: 'Inches, fluid ounces, psi',
+  metric: 'Millimetres, millilitres, bar, °C',
+  inch: 'Inches, fluid ounces, psi, °F',
 }
 
 export const WorkshopName = z.string().trim().min(1, 'The workshop needs a name.').max(WORKSHOP_NAME_MAX)
@@ -21,7 +23,14 @@ export const WorkshopName = z.string().trim().min(1, 'The workshop needs a name.
 export const OwnLamp = z.number().int('Give whole kelvin, such as 5000.').min(KELVIN_MIN).max(KELVIN_MAX).nullable()
 
 /** How a workshop is set up. A part it never chose has its default. */
-export const WorkshopSettings = z.object({ units: Units.default('metric'), ownLamp: OwnLamp.default(null) })
+export const WorkshopSettings = z.object({
+  units: Units.default('metric'),
+  /** Units chosen otherwise than the system has them: kPa in a metric workshop. */
+  ownUnits: OwnUnits.default({}),
+  /** Planning values the workshop knows better than the usual. */
+  planning: OwnPlanning.default({}),
+  ownLamp: OwnLamp.default(null),
+})
 export type WorkshopSettings = z.output<typeof WorkshopSettings>
 
 /** One more workshop for somebody who is signed in. */
@@ -33,7 +42,7 @@ export const SignUp = z.object({ name: PersonName, workshopName: WorkshopName, p
 export type SignUp = z.output<typeof SignUp>
 
 /** Changing a workshop; what is left out stays. */
-export const WorkshopChange = z.object({ name: WorkshopName, units: Units, ownLamp: OwnLamp }).partial()
+export const WorkshopChange = z.object({ name: WorkshopName, units: Units, ownUnits: OwnUnits, planning: OwnPlanning, ownLamp: OwnLamp }).partial()
 export type WorkshopChange = z.output<typeof WorkshopChange>
 
 export const WorkshopParams = z.object({ workshopId: z.uuid() })
@@ -43,11 +52,9 @@ export const WorkshopChoice = z.object({ workshopId: z.uuid() })
 export type WorkshopChoice = z.output<typeof WorkshopChoice>
 
 /** A workshop as its people see it. */
-export interface WorkshopView {
+export interface WorkshopView extends WorkshopSettings {
   id: string
   name: string
-  units: Units
-  ownLamp: number | null
   isDemo: boolean
   since: string
 }

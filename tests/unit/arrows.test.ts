@@ -34,7 +34,7 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
   'shared/optics': ['shared/optics', 'shared/quantities'],
   'shared/errors': ['shared/errors'],
   'shared/api': ['shared/api', 'shared/errors'],
-  'shared/people': ['shared/people', 'shared/optics/kelvin-light', 'shared/errors'],
+  'shared/people': ['shared/people', 'shared/quantities', 'shared/optics/kelvin-light', 'shared/errors'],
   'shared/blank': ['shared/blank', 'shared/quantities', 'shared/errors'],
   'shared/shelf': ['shared/shelf', 'shared/optics', 'shared/quantities', 'shared/errors'],
   'shared/scheme': ['shared/scheme', 'shared/optics', 'shared/blank', 'shared/shelf', 'shared/api', 'shared/quantities', 'shared/errors'],

@@ -13,7 +13,7 @@ export async function getWorkshop(ctx: Ctx, workshopId: string): Promise<Worksho
   return inTransaction(ctx, tx => workshopHere(tx, workshopId))
 }
 
-/** Gives the workshop another name, other units or another lamp. */
+/** Gives the workshop another name, other units, other planning values or another lamp; what is left out stays. */
 export async function changeWorkshop(ctx: Ctx, workshopId: string, change: WorkshopChange): Promise<WorkshopRow> {
   assertMay(ctx, 'workshop:change')
   return inTransaction(ctx, async (tx) => {

@@ -5,6 +5,7 @@ import { chooseWorkshop } from '#server/services/people/choose-workshop'
 import { getSession } from '#server/services/people/get-session'
 import { addWorkshop } from '#server/services/people/open-workshop'
 import { resumeSession } from '#server/services/people/resume-session'
+import { settingsOf } from '#server/services/people/workshop-view'
 import { asOwner } from '../database'
 import { testWorkshop } from '../factories'
 
@@ -15,6 +16,16 @@ it('takes a new name, other units and a lamp, each without the others', async ()
   expect(await changeWorkshop(ctx, workshopId, { ownLamp: 5300 })).toMatchObject({ name: 'New name', settings: { units: 'inch', ownLamp: 5300 } })
   expect((await getSession(ctx, workshopId)).workshop).toMatchObject({ name: 'New name', units: 'inch', ownLamp: 5300 })
   expect(await changeWorkshop(ctx, workshopId, { ownLamp: null })).toMatchObject({ settings: { units: 'inch', ownLamp: null } })
+})
+
+it('keeps single units and planning values it chose, and reads settings from before it could', async () => {
+  const { ctx, workshopId } = await testWorkshop()
+  await changeWorkshop(ctx, workshopId, { ownUnits: { pressure: 'kPa' } })
+  await changeWorkshop(ctx, workshopId, { planning: { room: 18, transfer: { airbrush: 0.3 } } })
+  expect((await getSession(ctx, workshopId)).workshop).toMatchObject({ units: 'metric', ownUnits: { pressure: 'kPa' }, planning: { room: 18, transfer: { airbrush: 0.3 } } })
+  await changeWorkshop(ctx, workshopId, { planning: {} })
+  expect((await getSession(ctx, workshopId)).workshop?.planning).toEqual({})
+  expect(settingsOf({ settings: { units: 'inch' } })).toEqual({ units: 'inch', ownUnits: {}, planning: {}, ownLamp: null })
 })
 
 it('is not found by the owner of another', async () => {
