@@ -25,7 +25,8 @@ export function goingOn(plan: RunPlan, state: RunState, part: Part, pieces: read
     {
       v: 1, kind: 'step-done', stepId: step.id,
       ...pieces.length < plan.pieces ? { pieces: [...pieces] } : {},
-      ...next && startsByItself(next) ? { starts: next.id } : {},
+      // What is done ahead begins no rest: nobody stands there yet.
+      ...next && !part.isAhead && startsByItself(next) ? { starts: next.id } : {},
     },
   ]
 }

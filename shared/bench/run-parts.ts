@@ -8,6 +8,8 @@ export interface Part {
   /** Place of the step in the plan, from 0; the number of steps when through. */
   index: number
   pieces: number[]
+  /** It is done for all of them at once, before they stand there: while they rest. */
+  isAhead?: true
 }
 
 /** The parts of a run, the one furthest behind first. Pieces set aside are in none and hold up nothing. */
@@ -68,14 +70,4 @@ export function isReady(step: RunStep, piece: number, state: RunState, now: numb
 /** The step after this one for a part: the first later one that is for any of its pieces and not behind it. */
 export function stepAfter(plan: RunPlan, state: RunState, part: Part): RunStep | undefined {
   return plan.steps.slice(part.index + 1).find(step => part.pieces.some(piece => isFor(step, piece) && !isThrough(step, piece, state)))
-}
-
-/**
- * Which part to work on now: the one furthest behind that is not merely waiting; when all wait, the one whose wait ends first.
- * Undefined when every piece is through or set aside.
- */
-export function partToDo(plan: RunPlan, state: RunState, now: number): Part | undefined {
-  const open = partsOf(plan, state).filter(part => part.step !== undefined)
-  const left = (part: Part) => Math.min(...part.pieces.map(piece => part.step && part.step.kind !== 'heat' ? waitLeft(part.step, piece, state, now) : 0))
-  return open.find(part => left(part) === 0) ?? open.sort((a, b) => left(a) - left(b))[0]
 }

@@ -1,8 +1,8 @@
 import type { Ctx } from '#server/services/ctx'
+import { createAlarm } from '#server/services/live/alarm'
+import { stillHere } from '#server/services/live/still-here'
 import { assertMay } from '#server/services/people/assert-may'
-import { resumeSession } from '#server/services/people/resume-session'
 import { Problem } from '#shared/errors/problem'
-import { may } from '#shared/people/may'
 import type { RunEventsView } from '#shared/bench/run-view'
 import { getRunEvents } from './get-run'
 import type { RunHub } from './run-hub'
@@ -31,27 +31,12 @@ export type FollowEnd = 'finished' | 'no longer here' | 'hung up'
 export async function followRun(ctx: Ctx, runId: string, since: number, follower: RunFollower, hub: RunHub, beatMs = BEAT_MS): Promise<FollowEnd> {
   assertMay(ctx, 'run:read')
   const { signal } = follower
-  let wake: () => void = () => undefined
-  let isWoken = false
-  const stop = hub.listen(ctx.personId, runId, () => {
-    isWoken = true
-    wake()
-  })
-  const sleep = () => new Promise<void>((resolve) => {
-    if (isWoken || signal.aborted) return resolve()
-    const timer = setTimeout(() => wake(), beatMs)
-    wake = () => {
-      clearTimeout(timer)
-      signal.removeEventListener('abort', wake)
-      resolve()
-    }
-    signal.addEventListener('abort', wake)
-  })
+  const alarm = createAlarm(signal)
+  const stop = hub.listen(ctx.personId, runId, alarm.ring)
   try {
     let [place, head, isFirst] = [since, 0, true]
     while (!signal.aborted) {
-      isWoken = false
-      const now = await stillHere(ctx)
+      const now = await stillHere(ctx, 'run:read')
       if (!now) return 'no longer here'
       const view = await readSince(now, runId, place)
       if (!view) return 'no longer here'
@@ -62,20 +47,13 @@ export async function followRun(ctx: Ctx, runId: string, since: number, follower
       head = view.headNumber
       isFirst = false
       if (view.finishedAt !== null) return 'finished'
-      await sleep()
+      await alarm.sleep(beatMs)
     }
     return 'hung up'
   }
   finally {
     stop()
   }
-}
-
-async function stillHere(ctx: Ctx): Promise<Ctx | null> {
-  const session = await resumeSession(ctx.db, ctx.sessionId)
-  const { membership } = session ?? {}
-  if (!membership || membership.workshopId !== ctx.workshopId || !may(membership.role, 'run:read')) return null
-  return { ...ctx, role: membership.role }
 }
 
 async function readSince(ctx: Ctx, runId: string, since: number): Promise<RunEventsView | null> {

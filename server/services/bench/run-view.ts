@@ -1,6 +1,7 @@
 import type { RunDay } from './run-day'
 import { planOfRow, type RunWithFinish } from './run-in-workshop'
-import { partsOf, partToDo } from '#shared/bench/run-parts'
+import { partsOf } from '#shared/bench/run-parts'
+import { workNow } from '#shared/bench/work-now'
 import { runState } from '#shared/bench/run-state'
 import { stepName } from '#shared/bench/step-words'
 import type { RunEventView, RunListItem, RunView } from '#shared/bench/run-view'
@@ -24,7 +25,7 @@ export function runListItem(row: RunWithFinish, events: readonly RunEventView[],
   const { run } = row
   const plan = planOfRow(row)
   const state = runState(events)
-  const step = partToDo(plan, state, now)?.step
+  const step = workNow(plan, state, now)?.step
   const looks = [...state.inspected].filter(([piece]) => !state.aside.has(piece))
   return {
     ...runBase(row),

@@ -1,11 +1,15 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { benchOrder, meanwhile, stepByStep } from '#shared/bench/bench-order'
+import { benchOrder, stepByStep } from '#shared/bench/bench-order'
+import { workNow } from '#shared/bench/work-now'
+import { goingOn } from '~/bench/going-on'
 import { runSteps } from '#shared/bench/run-steps'
 import { isFor } from '#shared/bench/run-step'
 import { type RunPlan, runState } from '#shared/bench/run-state'
 import { anyBody } from '../scheme/bodies'
-import { at, coatOf, event, finish, paint, PERCH } from './finish'
+import type { RunAct, RunEvent } from '#shared/bench/run-event'
+import { waitLeft } from '#shared/bench/run-parts'
+import { at, coatOf, EPOXY, event, finish, paint, PERCH } from './finish'
 
 const planFor = (look: typeof PERCH, pieces: number): RunPlan => ({ steps: runSteps(look, pieces), pieces })
 const anyPlan = fc.tuple(anyBody, fc.integer({ min: 1, max: 14 })).map(([body, pieces]) => planFor({ ...PERCH, body }, pieces))
@@ -18,17 +22,56 @@ describe('while every piece rests', () => {
     v: 1, kind: 'step-done', stepId, ...stepId === idOf('lay', 1) ? { starts: idOf('rest', 1) } : {},
   }, 0)))
   const soon = Date.parse(at(10))
+  const [laid, cleaned] = [idOf('lay', 1), idOf('clean', 1)]
 
-  it('there is the airbrush to clean out, then the next cup to mix, and nothing once that is done', () => {
-    const laid = idOf('lay', 1)
-    expect(meanwhile(plan, doneTo(laid), soon)?.id).toBe(idOf('clean', 1))
-    expect(meanwhile(plan, doneTo(laid, [idOf('clean', 1)]), soon)?.id).toBe(idOf('mix', 2))
-    expect(meanwhile(plan, doneTo(laid, [idOf('clean', 1), idOf('mix', 2), idOf('test', 2)]), soon)).toBeUndefined()
+  it('there is the airbrush to clean out, then the next cup to mix, and only the rest to wait for once that is done', () => {
+    expect(workNow(plan, doneTo(laid), soon)).toMatchObject({ step: { id: cleaned }, pieces: [1, 2], isAhead: true })
+    expect(workNow(plan, doneTo(laid, [cleaned]), soon)?.step?.id).toBe(idOf('mix', 2))
+    expect(workNow(plan, doneTo(laid, [cleaned, idOf('mix', 2), idOf('test', 2)]), soon)?.step?.id).toBe(idOf('rest', 1))
   })
 
-  it('there is nothing else to do before, nor once a piece has rested', () => {
-    expect(meanwhile(plan, doneTo(idOf('mix', 1)), soon)).toBeUndefined()
-    expect(meanwhile(plan, doneTo(idOf('lay', 1)), Date.parse(at(31)))).toBeUndefined()
+  it('what is done ahead begins no rest, and is done for all', () => {
+    const ahead = workNow(plan, doneTo(laid), soon)!
+    expect(goingOn(plan, doneTo(laid), ahead, ahead.pieces, soon)).toEqual([{ v: 1, kind: 'step-done', stepId: cleaned }])
+  })
+
+  it('goes on from the rest as soon as it is over, once the cup is ready', () => {
+    const ready = doneTo(laid, [cleaned, idOf('mix', 2), idOf('test', 2)])
+    expect(workNow(plan, ready, Date.parse(at(31)))).toMatchObject({ step: { id: idOf('rest', 1) }, pieces: [1, 2] })
+  })
+
+  it('mixes nothing that would set before the pieces are there, and no cup hours ahead', () => {
+    const clear = planFor(finish([coatOf(1, paint(1), { passes: 1, rest: 20 }), coatOf(2, EPOXY, { passes: 1, rest: 5, tool: { kind: 'brush' } })]), 2)
+    const { doings } = benchOrder(clear)
+    const mixed = doings.find(doing => doing.step.kind === 'mix' && doing.step.number === 2)!
+    const lastLaid = doings.findLast(doing => doing.step.kind === 'lay' && doing.step.number === 1)!
+    expect(mixed.from).toBeGreaterThanOrEqual(lastLaid.to + 20)
+
+    const slow = planFor(finish([coatOf(1, paint(1), { passes: 1, rest: 600 }), coatOf(2, paint(2), { passes: 1, rest: 5 })]), 2)
+    const [mix, lay] = ['mix', 'lay'].map(kind => benchOrder(slow).doings.find(doing => doing.step.kind === kind && 'number' in doing.step && doing.step.number === 2)!)
+    expect(lay!.from - mix!.from).toBeLessThanOrEqual(30 + 1e-9)
+    expect(lay!.from).toBeGreaterThan(600)
+  })
+})
+
+describe('a run worked in that order', () => {
+  it('comes to its end whatever the finish', () => {
+    fc.assert(fc.property(anyPlan, (plan) => {
+      const events: RunEvent[] = []
+      let [now, n] = [Date.parse(at(0)), 0]
+      const act = (acts: readonly RunAct[]) => events.push(...acts.map(each => ({ ...event(++n, each, 0), doneAt: new Date(now).toISOString(), place: n })))
+      for (let turn = 0; turn < plan.steps.length * plan.pieces * 2 + 10; turn++) {
+        const state = runState(events)
+        const part = workNow(plan, state, now)
+        if (!part) return
+        const left = Math.max(...part.pieces.map(piece => waitLeft(part.step!, piece, state, now)))
+        if (left > 0 && part.step?.kind === 'heat') act([{ v: 1, kind: 'wait-started', stepId: part.step.id, pieces: part.pieces }])
+        now += left
+        if (part.step?.kind === 'lay') act([{ v: 1, kind: 'pass-laid', coatId: part.step.coat.id, pieces: part.pieces, passes: part.step.coat.passes }])
+        act(goingOn(plan, runState(events), part, part.pieces, now))
+      }
+      throw new Error('It never came to an end')
+    }), { numRuns: 60 })
   })
 })
 

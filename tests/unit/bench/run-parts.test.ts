@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import type { RunEvent } from '#shared/bench/run-event'
-import { isReady, partsOf, partToDo, stepAfter, waitLeft } from '#shared/bench/run-parts'
+import { isReady, partsOf, stepAfter, waitLeft } from '#shared/bench/run-parts'
 import { runState } from '#shared/bench/run-state'
+import { workNow } from '#shared/bench/work-now'
 import { cupNow, runTimers, timerLeft } from '#shared/bench/run-timers'
 import { at, event, id, PERCH, planOf } from './finish'
 
@@ -32,15 +33,15 @@ describe('a batch', () => {
 
   it('shows what there is to do rather than what only waits', () => {
     const both = [...SPLIT, done(13, LAY, [5, 6], REST)]
-    expect(partToDo(plan, runState(SPLIT), clock(11))?.pieces).toEqual([5, 6])
-    expect(partToDo(plan, runState(both), clock(14))?.step?.id).toBe(REST)
-    expect(partToDo(plan, runState([done(20, 'prepare', [1])]), clock(21))?.pieces).toEqual([2, 3, 4, 5, 6])
+    expect(workNow(plan, runState(SPLIT), clock(11))?.pieces).toEqual([5, 6])
+    expect(workNow(plan, runState(both), clock(14))).toMatchObject({ step: { id: `clean:${id('coat', 1)}` }, pieces: [1, 2, 3, 4, 5, 6], isAhead: true })
+    expect(workNow(plan, runState([done(20, 'prepare', [1])]), clock(21))?.pieces).toEqual([2, 3, 4, 5, 6])
   })
 
   it('is through when every piece has had every step', () => {
     const all = plan.steps.map((step, n) => done(n + 1, step.id))
     expect(stand(all)).toEqual([[undefined, [1, 2, 3, 4, 5, 6]]])
-    expect(partToDo(plan, runState(all), clock(99))).toBeUndefined()
+    expect(workNow(plan, runState(all), clock(99))).toBeUndefined()
   })
 
   it('knows the step that follows for its own pieces only', () => {
