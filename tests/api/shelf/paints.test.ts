@@ -6,6 +6,7 @@ import { listPaints } from '#server/services/shelf/list-paints'
 import { inTransaction } from '#server/services/in-transaction'
 import { paintOptics } from '#server/db/tables'
 import { testBody, addTestBlank } from '../scheme/ground'
+import { getMaterials } from '#server/services/scheme/get-materials'
 import { createScheme } from '#server/services/scheme/create-scheme'
 import { asOwner } from '../database'
 import { testPerson, testWorkshop } from '../factories'
@@ -22,6 +23,17 @@ describe('a paint put on the shelf', () => {
     expect(paint.swatches.lab.map(Math.round)).toEqual([42, 58, 36])
     expect(paint.trust.level).toBe(2)
     expect(await getPaint(ctx, paint.id)).toEqual(paint)
+  })
+
+  it('keeps its resin and hardener, also for a scheme, until it has none any more', async () => {
+    const { ctx } = await testWorkshop({ role: 'painter' })
+    const twoPart = { by: 'weight', resin: 100, hardener: 44, hardenerDensity: 1.02 } as const
+    const clear = paintDraft({ name: 'Clear', kind: 'clear', known: { how: 'clear', yellowing: 0 }, twoPart })
+    const { id } = await addPaint(ctx, clear)
+    expect((await getPaint(ctx, id)).twoPart).toEqual(twoPart)
+    const scheme = await createScheme(ctx, { name: 'Clear only', fish: '', blankId: await addTestBlank(ctx) })
+    expect((await getMaterials(ctx, scheme.id)).paints.find(paint => paint.id === id)?.twoPart).toEqual(twoPart)
+    expect((await changePaint(ctx, id, 1, { ...clear, twoPart: undefined })).twoPart).toBeUndefined()
   })
 
   it('is a pearl of the thickness whose face has the wanted hue', async () => {

@@ -33,6 +33,13 @@ describe('the form of a paint', () => {
     expect(draftOfForm(form).value!.pricePerMl).toBeUndefined()
   })
 
+  it('takes resin and hardener with a decimal comma, and marks a density that is none', () => {
+    const form = { ...emptyPaintForm(), name: 'Clear', how: 'clear' as const, isTwoPart: true, resinDensity: '1,16' }
+    expect(draftOfForm(form).value!.twoPart).toEqual({ by: 'volume', resin: 2, hardener: 1, resinDensity: 1.16 })
+    expect(draftOfForm({ ...form, hardenerDensity: '11' }).wrong).toEqual({ hardenerDensity: expect.stringContaining('0.5 to 3') })
+    expect(draftOfForm({ ...form, isTwoPart: false, hardenerDensity: '11' }).value!.twoPart).toBeUndefined()
+  })
+
   it('tells a pearl by the colour its face should have, and the engine finds the thickness', () => {
     const form = { ...emptyPaintForm(), how: 'pearl' as const, wanted: '50 5 -60' }
     const known = knownOfForm(form).value!
