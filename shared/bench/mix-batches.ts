@@ -1,11 +1,14 @@
-/** Share of the working time on the label that a mix is planned to be used within: the rest is for a warm room and a slow hand (common practice). */
-const USABLE = 2 / 3
-/** Minutes one pass of a setting clear takes on one piece, brushed or sprayed (common practice; a planning value). */
-const MINUTES_PER_PASS = 2
+import { PLANNING_VALUES } from '#shared/quantities/planning-values'
+import { LABEL_CELSIUS, type Mixes, mixesFor } from '#shared/scheme/amounts/mixes'
+
+/** The mixes of a run: planned for the room of the label, so that the steps of a run are the same in winter and summer. */
+function mixesOfRun(pieces: number, potLifeMinutes: number, passes: number): Mixes {
+  return mixesFor({ ...PLANNING_VALUES, room: LABEL_CELSIUS, pieces, potLifeMinutes, passes })
+}
 
 /** How many pieces one mix of a paint that sets can be laid on before it gels; at least 1. Pot life in minutes at 25 °C. */
 export function piecesPerMix(potLifeMinutes: number, passes: number): number {
-  return Math.max(1, Math.floor(potLifeMinutes * USABLE / (MINUTES_PER_PASS * passes)))
+  return Math.max(1, mixesOfRun(1, potLifeMinutes, passes).piecesPerMix)
 }
 
 /**
@@ -15,6 +18,5 @@ export function piecesPerMix(potLifeMinutes: number, passes: number): number {
  */
 export function mixBatches(pieces: number, potLifeMinutes: number | null, passes: number): [first: number, last: number][] {
   if (!Number.isInteger(pieces) || pieces < 1) throw new RangeError(`mixBatches: pieces must be a whole number of at least 1, got ${pieces}`)
-  const count = potLifeMinutes === null ? 1 : Math.ceil(pieces / piecesPerMix(potLifeMinutes, passes))
-  return Array.from({ length: count }, (_, k) => [Math.floor(k * pieces / count) + 1, Math.floor((k + 1) * pieces / count)])
+  return potLifeMinutes === null ? [[1, pieces]] : mixesOfRun(pieces, potLifeMinutes, passes).batches.map(([first, last]) => [first, last])
 }

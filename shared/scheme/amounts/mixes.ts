@@ -42,9 +42,6 @@ export interface MixesGiven {
   usable: number
 }
 
-/** A hair under one more piece is one more piece: what is added up from minutes is never quite whole. */
-const HAIR = 1e-9
-
 /**
  * Pieces 1 to N cut into mixes of which none outlives its pot life at the room's temperature.
  * @throws {RangeError} when pieces is not a whole number of at least 1
@@ -54,7 +51,7 @@ export function mixesFor({ pieces, potLifeMinutes, passes, room, setsFaster, min
   const potLife = potLifeAt(potLifeMinutes, room, setsFaster)
   const usableMinutes = potLife * usable
   const minutesPerPiece = minutesPerPass * passes
-  const piecesPerMix = Math.floor(usableMinutes / minutesPerPiece + HAIR)
+  const piecesPerMix = Math.floor(usableMinutes / minutesPerPiece)
   const count = Math.ceil(pieces / Math.max(1, piecesPerMix))
   const batches = Array.from({ length: count }, (_, k) => [Math.floor(k * pieces / count) + 1, Math.floor((k + 1) * pieces / count)] as const)
   return { potLife, usableMinutes, minutesPerPiece, piecesPerMix, batches }
