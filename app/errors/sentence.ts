@@ -36,7 +36,10 @@ export function sentence(problem: ProblemData): string {
     case 'scheme/not-publishable': return `Not ready to publish: ${problem.reasons.join(' ')}`
     case 'scheme/nothing-changed': return 'Nothing changed since the newest revision, so there is nothing to publish.'
     case 'scheme/never-published': return 'This scheme has no revision yet. Publish one first.'
+    case 'scheme/too-many-listening': return 'Too many screens have this draft open at once. This one does not show who else is here.'
     case 'revision/not-found': return 'This scheme has no revision of that number.'
+    case 'build-up/not-found': return 'This build-up is not in this workshop.'
+    case 'build-up/changed-meanwhile': return 'Somebody changed this build-up after you opened it. Load it again.'
     case 'run/not-found': return 'This run is not in this workshop.'
     case 'run/finished': return 'This run is finished; nothing more is noted in it.'
     case 'run/too-many-listening': return 'Too many screens follow this at once. This one asks for news every few seconds instead.'

@@ -32,12 +32,25 @@ describe.each(ACCESS_TABLE.map(row => ({ name: `${row.method} ${row.path}`, row 
     const ground = await groundFor(who)
     const { url, body, headers, secret = [] } = await row.make(ground)
     const response = await server.ask(row.method, url, { as: await asking(who, ground), body, headers })
-    const answer = await response.text()
+    const answer = await answerOf(response)
     expect({ status: response.status, answer: response.status === row.who[who] ? '' : answer }).toEqual({ status: row.who[who], answer: '' })
     if (who === 'stranger' && !row.letsIn) expectNothingOf(ground, secret, answer)
     if (response.status >= 400) expect(response.headers.get('content-type')).toMatch(/^(application\/problem\+json|text\/html)/)
   })
 })
+
+/** What was answered; of an answer that goes on, the first thing it tells. */
+async function answerOf(response: Response): Promise<string> {
+  if (!response.headers.get('content-type')?.startsWith('text/event-stream') || !response.body) return response.text()
+  const bytes = response.body.getReader()
+  for (let text = ''; ;) {
+    const { value, done } = await bytes.read()
+    text += new TextDecoder().decode(value)
+    if (!done && !/^data: .*\n\n/m.test(text)) continue
+    await bytes.cancel()
+    return text
+  }
+}
 
 async function asking(who: Who, ground: Ground): Promise<Ctx | null> {
   if (who === 'signedOut') return null

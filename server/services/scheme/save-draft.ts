@@ -7,6 +7,7 @@ import type { SchemeBody } from '#shared/scheme/body'
 import type { DraftSavedView } from '#shared/scheme/scheme-view'
 import { sameValue } from '#shared/scheme/canonical'
 import { blankInWorkshop } from './blank-in-workshop'
+import { tellDraftNews } from './draft-news'
 import { holdScheme, type SchemeRow } from './scheme-in-workshop'
 
 /** Saves a draft that was made from `version`. Refused when somebody saved meanwhile; the same body again changes nothing. */
@@ -25,5 +26,6 @@ export async function putDraft(tx: Ctx, scheme: SchemeRow, body: SchemeBody): Pr
   const [saved] = await tx.db.update(schemes)
     .set({ draft: body, blankId: body.blankId, version: scheme.version + 1, savedAt: new Date(), savedBy: tx.personId })
     .where(eq(schemes.id, scheme.id)).returning()
+  await tellDraftNews(tx, { is: 'saved', workshopId: tx.workshopId, schemeId: scheme.id })
   return saved!
 }

@@ -3,6 +3,7 @@ import { addTestBlank, testScheme } from '../scheme/ground'
 import type { AccessRow, Ground, Who } from './row'
 
 const SECRET = ['Perch in bars', 'planted coat']
+const TAB = '00000000-0000-4000-8000-0000000000aa'
 const V1 = { 'if-match': '"v1"' }
 
 /** Those who read recipes; the front desk may not, a stranger finds nothing. */
@@ -40,6 +41,11 @@ export const SCHEME_ACCESS: AccessRow[] = [
   get('/api/schemes/[schemeId]/revisions/[number]', '/revisions/1', readers(200)),
   get('/api/schemes/[schemeId]/compare', '/compare?from=1', readers(200)),
   get('/api/schemes/[schemeId]/picture', '/picture?width=32&upTo=ground', readers(200)),
+  get('/api/schemes/[schemeId]/live', `/live?tab=${TAB}`, readers(200)),
+  {
+    method: 'POST', path: '/api/schemes/[schemeId]/here', who: readers(204),
+    make: async ground => ({ url: `${(await published(ground)).url}/here`, body: { tab: TAB, coatId: null } }),
+  },
   {
     method: 'PATCH', path: '/api/schemes/[schemeId]', who: makers(200),
     make: async ground => ({ url: (await published(ground)).url, headers: V1, body: { name: 'Another' } }),
