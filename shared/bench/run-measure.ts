@@ -57,5 +57,21 @@ export const RunMeasureView = z.object({
   isSample: z.boolean(),
   by: Painter.nullable(),
   at: z.iso.datetime(),
+  /** It was wrong: kept to be read, and held against nothing. */
+  withdrawn: z.object({ by: Painter.nullable(), at: z.iso.datetime() }).nullable(),
 })
 export type RunMeasureView = z.output<typeof RunMeasureView>
+
+/** Which measure of which run, from its address. */
+export const RunMeasureParams = z.object({ runId: z.uuid(), measureId: z.uuid() })
+export type RunMeasureParams = z.output<typeof RunMeasureParams>
+
+/** The piece later ones are held against, and who said so when. */
+export const SampleRecord = z.object({
+  measureId: z.uuid(),
+  run: z.object({ id: z.uuid(), number: z.number().int() }),
+  piece: z.number().int(),
+  by: Painter.nullable(),
+  at: z.iso.datetime(),
+})
+export type SampleRecord = z.output<typeof SampleRecord>

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { RunMeasureView } from './run-measure'
+import { RunMeasureView, SampleRecord } from './run-measure'
 
 /** What taking a run into its scheme did: words of what was taken, and of what could not be. */
 export const TakenIn = z.object({
@@ -42,6 +42,8 @@ export const RunReport = z.object({
   lots: z.array(LotUsed),
   /** Newest first. */
   measures: z.array(RunMeasureView),
+  /** The sample of the scheme; null while none is marked. */
+  sample: SampleRecord.nullable(),
   /** Every run of the scheme, the newest first, this one among them. */
   yields: z.array(RunYield),
   /** The draft's version, to take the run into it; null for who may not. */

@@ -22,3 +22,9 @@ export function useRunMeasure(runId: string, schemeId: string): RunMeasure {
     },
   }
 }
+
+/** Withdraws a measure that was wrong; throws when it is refused. */
+export async function withdrawMeasure(runId: string, measureId: string): Promise<void> {
+  await api('/api/runs/:runId/measures/:measureId/withdraw', { params: { runId, measureId }, method: 'POST' })
+  await refreshNuxtData(`run ${runId} what came of it`)
+}

@@ -90,3 +90,11 @@ export const runMeasures = pgTable('run_measures', {
   measuredBy: uuid('measured_by').references(() => persons.id, { onDelete: 'set null' }),
   measuredAt: at('measured_at').notNull().defaultNow(),
 }, t => [index('run_measures_run').on(t.runId, t.measuredAt)])
+
+/** A measure that was wrong: it counts for nothing any more, and stays to be read. Written once. */
+export const runMeasuresWithdrawn = pgTable('run_measures_withdrawn', {
+  measureId: uuid('measure_id').primaryKey().references(() => runMeasures.id, { onDelete: 'cascade' }),
+  workshopId: uuid('workshop_id').notNull().references(() => workshops.id, { onDelete: 'cascade' }),
+  withdrawnBy: uuid('withdrawn_by').references(() => persons.id, { onDelete: 'set null' }),
+  withdrawnAt: at('withdrawn_at').notNull().defaultNow(),
+})

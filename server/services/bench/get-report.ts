@@ -10,7 +10,7 @@ import { benchMinutes } from '#shared/bench/step-times'
 import { may } from '#shared/people/may'
 import { eventsOfRuns } from './run-events'
 import { RUN_COLUMNS, runInWorkshop } from './run-in-workshop'
-import { runMeasuresOf } from './run-measures'
+import { runMeasuresOf, sampleOf } from './run-measures'
 
 /** Runs of a scheme whose yield is told, the newest. */
 const YIELDS_MAX = 40
@@ -23,6 +23,7 @@ export async function getReport(ctx: Ctx, runId: string): Promise<RunReport> {
     return {
       lots: await lotsOf(tx, runId, row.materials.paints),
       measures: await runMeasuresOf(tx, row),
+      sample: (await sampleOf(tx, row.run.schemeId))?.record ?? null,
       yields: await yieldsOf(tx, row.run.schemeId),
       draftVersion: may(tx.role, 'scheme:change') ? (await schemeInWorkshop(tx, row.run.schemeId)).version : null,
     }

@@ -1,3 +1,5 @@
+import { addMeasure } from '#server/services/bench/add-measure'
+import { RunMeasureDraft } from '#shared/bench/run-measure'
 import { recordActs } from '#server/services/bench/record-acts'
 import { act, publishedScheme, testRun } from '../bench/ground'
 import type { AccessRow, Ground, Who } from './row'
@@ -27,6 +29,14 @@ export const BENCH_ACCESS: AccessRow[] = [
   {
     method: 'POST', path: '/api/runs/[runId]/measures', who: atBench(201),
     make: async ground => ({ url: `/api/runs/${(await runOf(ground)).id}/measures`, body: { piece: 1, card: [118, 118, 118], zones: [{ zone: 'back', rgb: [90, 80, 60] }] } }),
+  },
+  {
+    method: 'POST', path: '/api/runs/[runId]/measures/[measureId]/withdraw', who: { ...atBench(200), bench: 403 }, // the owner's: a colleague's
+    make: async ({ owner }) => {
+      const { run } = await testRun(owner)
+      const measure = await addMeasure(owner, run.id, RunMeasureDraft.parse({ piece: 1, card: [118, 118, 118], zones: [{ zone: 'back', rgb: [90, 80, 60] }] }))
+      return { url: `/api/runs/${run.id}/measures/${measure.id}/withdraw` }
+    },
   },
   {
     method: 'POST', path: '/api/runs/[runId]/take-in', who: { ...atBench(200), bench: 403 },

@@ -3,6 +3,7 @@ import { addMeasure } from '#server/services/bench/add-measure'
 import { getReport } from '#server/services/bench/get-report'
 import { recordActs } from '#server/services/bench/record-acts'
 import { startRun } from '#server/services/bench/start-run'
+import { withdrawMeasure } from '#server/services/bench/withdraw-measure'
 import { takeIn } from '#server/services/bench/take-in'
 import { getScheme } from '#server/services/scheme/get-scheme'
 import { saveDraft } from '#server/services/scheme/save-draft'
@@ -62,6 +63,37 @@ describe('a piece measured from a photo', () => {
     const { ctx: stranger } = await testWorkshop()
     await expect(addMeasure(stranger, run.id, measure())).rejects.toMatchObject(code('run/not-found'))
     await expect(getReport(stranger, run.id)).rejects.toMatchObject(code('run/not-found'))
+  })
+})
+
+describe('a measure that was wrong', () => {
+  it('is withdrawn: it stays to be read with who withdrew it, and is the sample no longer', async () => {
+    const { ctx, workshopId } = await testWorkshop()
+    const { ctx: bench } = await testPerson({ workshopId, role: 'bench' })
+    const { run } = await testRun(ctx)
+    const right = await addMeasure(ctx, run.id, measure({ isSample: true, piece: 2 }))
+    const wrong = await addMeasure(ctx, run.id, measure({ isSample: true, zones: [{ zone: 'back', rgb: [20, 20, 20] }] }))
+    const own = await addMeasure(bench, run.id, measure({ piece: 3 }))
+    expect((await getReport(ctx, run.id)).sample).toMatchObject({ measureId: wrong.id, piece: 1, run: { number: run.number }, by: { id: ctx.personId } })
+
+    await expect(withdrawMeasure(bench, run.id, wrong.id)).rejects.toMatchObject(code('auth/not-allowed'))
+    expect(await withdrawMeasure(ctx, run.id, wrong.id)).toMatchObject({ withdrawn: { by: { id: ctx.personId } } })
+    await withdrawMeasure(ctx, run.id, wrong.id)
+    await withdrawMeasure(bench, run.id, own.id)
+    const { sample, measures } = await getReport(ctx, run.id)
+    expect(sample).toMatchObject({ measureId: right.id, piece: 2 })
+    expect(measures.map(each => [each.piece, each.withdrawn?.by?.id])).toEqual([[3, bench.personId], [1, ctx.personId], [2, undefined]])
+    // The one that was withdrawn is now held against the one that stands.
+    expect(measures[1]!.zones[0]!.toSample).toBeGreaterThan(10)
+  })
+
+  it('is not there for a stranger, nor under another run', async () => {
+    const { ctx } = await testWorkshop()
+    const [{ run }, other] = [await testRun(ctx), await testRun(ctx)]
+    const { id } = await addMeasure(ctx, run.id, measure())
+    await expect(withdrawMeasure(ctx, other.run.id, id)).rejects.toMatchObject(code('run/not-found'))
+    const { ctx: stranger } = await testWorkshop()
+    await expect(withdrawMeasure(stranger, run.id, id)).rejects.toMatchObject(code('run/not-found'))
   })
 })
 
