@@ -1,10 +1,14 @@
 import type { SchemeBody, StackItem } from '#shared/scheme/body'
+import type { Coat } from '#shared/scheme/coat'
+import { unlinked } from '#shared/scheme/build-up-lay'
 
 /** Which thing of a workshop each name of a file stands for. */
 export interface NewIds {
   paints: ReadonlyMap<string, string>
   blanks: ReadonlyMap<string, string>
   masks: ReadonlyMap<string, string>
+  /** Build-ups the workshop has: a link to any other is cut. */
+  buildUps: ReadonlySet<string>
 }
 
 /**
@@ -13,9 +17,7 @@ export interface NewIds {
  */
 export function bodyWithIds(body: SchemeBody, ids: NewIds): SchemeBody {
   const renamed = new Map([...ids.paints, ...ids.blanks, ...ids.masks])
-  const item = (each: StackItem): StackItem => each.act !== 'coat'
-    ? each
-    : { act: 'coat', coat: { ...each.coat, mix: { ...each.coat.mix, parts: each.coat.mix.parts.map(part => ({ ...part, paintId: ids.paints.get(part.paintId) ?? part.paintId })) } } }
+  const item = (each: StackItem): StackItem => each.act === 'coat' ? { act: 'coat', coat: coatWithIds(each.coat, ids) } : each
   return {
     ...body,
     blankId: ids.blanks.get(body.blankId) ?? body.blankId,
@@ -23,5 +25,12 @@ export function bodyWithIds(body: SchemeBody, ids: NewIds): SchemeBody {
     masks: body.masks.map(mask => ({ ...mask, fromMaskId: mask.fromMaskId === null ? null : ids.masks.get(mask.fromMaskId) ?? null })),
     // A warning that was answered names what it was about.
     ...body.answered ? { answered: body.answered.map(key => key.split(' ').map(word => renamed.get(word) ?? word).join(' ')) } : {},
+  }
+}
+
+function coatWithIds(coat: Coat, { paints, buildUps }: NewIds): Coat {
+  return {
+    ...coat.laidFrom && !buildUps.has(coat.laidFrom.buildUpId) ? unlinked(coat) : coat,
+    mix: { ...coat.mix, parts: coat.mix.parts.map(part => ({ ...part, paintId: paints.get(part.paintId) ?? part.paintId })) },
   }
 }

@@ -75,6 +75,19 @@ export const Mix = z.object({
 })
 export type Mix = z.output<typeof Mix>
 
+/** Which coat of which build-up of the workshop a coat was laid from. Coats that were laid together share `layingId`. */
+export const LaidFrom = z.object({
+  buildUpId: z.uuid(),
+  /** Edition of the build-up: it rises when its coats change. */
+  edition: z.number().int().min(1),
+  /** The coat of the build-up. */
+  coatId: z.uuid(),
+  layingId: z.uuid(),
+  /** The zones it was laid in instead of the build-up's own. */
+  onto: z.array(ZoneName).max(8).optional(),
+})
+export type LaidFrom = z.output<typeof LaidFrom>
+
 /** One application of paint. Its id lasts as long as the scheme and its forks, so that a moved coat stays the same coat. */
 export const Coat = z.object({
   id: z.uuid(),
@@ -91,5 +104,7 @@ export const Coat = z.object({
   rest: z.number().min(0).max(10_080).default(5),
   heatSet: z.object({ /** s */ seconds: z.number().min(1).max(3600), /** cm */ distance: z.number().min(5).max(100) }).nullable().default(null),
   note: z.string().trim().max(COAT_NOTE_MAX).default(''),
+  /** Its link to a build-up; absent for a coat that stands by itself. */
+  laidFrom: LaidFrom.optional(),
 })
 export type Coat = z.output<typeof Coat>

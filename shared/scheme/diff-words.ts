@@ -28,6 +28,7 @@ function fieldWord(coat: Coat, field: keyof Coat, materials: Pick<Materials, 'pa
     case 'passes': return { field: 'Passes', words: String(coat.passes) }
     case 'rest': return { field: 'Rest', words: restWords({ rest: coat.rest, heatSet: null }) }
     case 'heatSet': return { field: 'Heat-set', words: coat.heatSet ? `${coat.heatSet.seconds} s at ${coat.heatSet.distance} cm` : 'none' }
+    case 'laidFrom': return { field: 'Build-up', words: coat.laidFrom ? `edition ${coat.laidFrom.edition}` : 'none' }
     case 'note': return { field: 'Note', words: coat.note === '' ? 'none' : coat.note }
   }
 }

@@ -30,8 +30,8 @@ export type SchemeEdit
     | { do: 'choose-blank', blankId: string }
     /** Answers a warning of a second look, or takes the answer back. */
     | { do: 'answer', key: string, known: boolean }
-    /** Puts a whole body in place: an older revision, or the other of two versions. */
-    | { do: 'replace-body', body: SchemeBody }
+    /** Puts a whole body in place: an older revision, the other of two versions, or one that a build-up was laid into; `words` say which. */
+    | { do: 'replace-body', body: SchemeBody, words?: string }
 
 /** The body after an edit, or the reason why it cannot be done, as a sentence. */
 export type EditOutcome = { ok: true, body: SchemeBody } | { ok: false, because: string }
@@ -65,7 +65,10 @@ function addCoat(body: SchemeBody, coat: Coat, row: number): EditOutcome {
 function duplicateCoat(body: SchemeBody, coatId: string, newId: string): EditOutcome {
   const row = rowOfCoat(body.stack, coatId)
   const item = body.stack[row]
-  return item?.act === 'coat' ? addCoat(body, { ...item.coat, id: newId }, row + 1) : refuse(NO_COAT)
+  if (item?.act !== 'coat') return refuse(NO_COAT)
+  // The copy is the painter's own: it was not in the build-up.
+  const { laidFrom: _link, ...coat } = item.coat
+  return addCoat(body, { ...coat, id: newId }, row + 1)
 }
 
 /** The stack with a mask fitted just below the first coat of a span and lifted just above the last. */
@@ -194,6 +197,6 @@ export function editWords(body: SchemeBody, edit: SchemeEdit): string {
     case 'set-eyes': return 'Eyes'
     case 'choose-blank': return 'Another blank'
     case 'answer': return edit.known ? 'Answer a warning' : 'Open a warning again'
-    case 'replace-body': return 'Take over a version'
+    case 'replace-body': return edit.words ?? 'Take over a version'
   }
 }

@@ -5,7 +5,7 @@ import { countWords } from './coat-words'
 import { Mask } from './mask'
 
 const COAT_LABELS: Readonly<Record<keyof Coat, string>> = {
-  id: 'Coat', name: 'Name', mix: 'Mix', tool: 'Tool', gun: 'Aim', where: 'Where', marks: 'Marks', passes: 'Passes', rest: 'Rest', heatSet: 'Heat-set', note: 'Note',
+  id: 'Coat', name: 'Name', mix: 'Mix', tool: 'Tool', gun: 'Aim', where: 'Where', marks: 'Marks', passes: 'Passes', rest: 'Rest', heatSet: 'Heat-set', note: 'Note', laidFrom: 'Build-up',
 }
 const MASK_LABELS: Readonly<Record<keyof Mask, string>> = { id: 'Mask', name: 'Name', form: 'Form', seed: 'Fitting', fromMaskId: 'Origin' }
 const GROUND_LABELS: Readonly<Record<keyof Ground, string>> = { name: 'Name of the ground', colour: 'Colour of the ground', finish: 'Finish of the ground' }

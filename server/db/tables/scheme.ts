@@ -2,6 +2,7 @@ import { type AnyPgColumn, boolean, index, integer, jsonb, pgTable, text, timest
 import { persons, workshops } from './people'
 import { blanks } from './blank'
 import type { SchemeBody } from '#shared/scheme/body'
+import { BUILD_UP_NAME_MAX, type BuildUpSequence } from '#shared/scheme/build-up'
 import type { Materials } from '#shared/scheme/materials'
 
 const at = (name: string) => timestamp(name, { withTimezone: true, mode: 'date' })
@@ -40,3 +41,17 @@ export const revisions = pgTable('revisions', {
   publishedBy: uuid('published_by').references(() => persons.id, { onDelete: 'set null' }),
   publishedAt: at('published_at').notNull().defaultNow(),
 }, t => [uniqueIndex('revisions_number').on(t.schemeId, t.number)])
+
+/** A sequence of coats with their masks that is laid again and again, under a name of the workshop's own. */
+export const buildUps = pgTable('build_ups', {
+  id: uuid().primaryKey().defaultRandom(),
+  workshopId: uuid('workshop_id').notNull().references(() => workshops.id, { onDelete: 'cascade' }),
+  name: varchar({ length: BUILD_UP_NAME_MAX }).notNull(),
+  sequence: jsonb().$type<BuildUpSequence>().notNull(),
+  /** Rises when its coats change: coats that were laid from it name the edition. */
+  edition: integer().notNull().default(1),
+  version: integer().notNull().default(1),
+  retired: boolean().notNull().default(false),
+  createdAt: at('created_at').notNull().defaultNow(),
+  changedAt: at('changed_at').notNull().defaultNow(),
+}, t => [index('build_ups_workshop').on(t.workshopId, t.name)])

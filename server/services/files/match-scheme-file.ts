@@ -1,7 +1,7 @@
 import { eq } from 'drizzle-orm'
 import type { Ctx } from '#server/services/ctx'
 import { deriveOptics } from '#server/services/shelf/derive-optics'
-import { blanks, masks, paintOptics, paints, schemes } from '#server/db/tables'
+import { blanks, buildUps, masks, paintOptics, paints, schemes } from '#server/db/tables'
 import { Problem } from '#shared/errors/problem'
 import type { FilePaint, SchemeFile } from '#shared/files/scheme-file'
 import type { TakeInPlan } from '#shared/files/take-in-plan'
@@ -17,11 +17,13 @@ export interface Matches {
   paints: Map<string, { id: string, opticsId: string, optics: StoredOptics }>
   blanks: Map<string, string>
   masks: Map<string, string>
+  /** Build-ups of the workshop that coats of the file are linked to. */
+  buildUps: Set<string>
 }
 
 /** What taking a file in would do here. Refuses a paint whose colour the engine cannot use, with its place in the file. */
 export async function matchSchemeFile(tx: Ctx, file: SchemeFile): Promise<{ matches: Matches, plan: TakeInPlan }> {
-  const matches: Matches = { paints: new Map(), blanks: new Map(), masks: new Map() }
+  const matches: Matches = { paints: new Map(), blanks: new Map(), masks: new Map(), buildUps: new Set() }
   const shelf = await tx.db.select({ paint: paints, optics: paintOptics.data }).from(paints)
     .innerJoin(paintOptics, eq(paintOptics.id, paints.opticsId)).where(eq(paints.workshopId, tx.workshopId)).orderBy(paints.retired, paints.createdAt)
   const planned: TakeInPlan['paints'] = file.paints.map((paint, i) => {
@@ -36,6 +38,8 @@ export async function matchSchemeFile(tx: Ctx, file: SchemeFile): Promise<{ matc
   })
   const ownBlanks = await tx.db.select({ id: blanks.id, name: blanks.name, shape: blanks.shape }).from(blanks).where(eq(blanks.workshopId, tx.workshopId)).orderBy(blanks.retired, blanks.createdAt)
   const ownMasks = await tx.db.select({ id: masks.id, name: masks.name, form: masks.form }).from(masks).where(eq(masks.workshopId, tx.workshopId)).orderBy(masks.retired, masks.createdAt)
+  const ownBuildUps = await tx.db.select({ id: buildUps.id }).from(buildUps).where(eq(buildUps.workshopId, tx.workshopId))
+  for (const { id } of ownBuildUps) matches.buildUps.add(id)
   const names = await tx.db.select({ name: schemes.name }).from(schemes).where(eq(schemes.workshopId, tx.workshopId))
   const plan: TakeInPlan = {
     scheme: { ...file.scheme, coats: coatsOf(file.draft.stack).length, masks: file.draft.masks.length },
@@ -45,7 +49,7 @@ export async function matchSchemeFile(tx: Ctx, file: SchemeFile): Promise<{ matc
     masks: file.masks.map(mask => here(matches.masks, mask, ownMasks.find(own => own.name === mask.name && sameValue(own.form, mask.form)))),
     revisions: file.revisions.map(revision => revision.number),
     revisionsLeftOut: file.revisionsLeftOut,
-    notes: notesOf(file),
+    notes: notesOf(file, matches.buildUps),
   }
   return { matches, plan }
 }
@@ -76,8 +80,10 @@ function standing(paint: FilePaint, row: typeof paints.$inferSelect): string {
   ].join(' ')
 }
 
-function notesOf(file: SchemeFile): string[] {
+function notesOf(file: SchemeFile, own: ReadonlySet<string>): string[] {
+  const cut = coatsOf(file.draft.stack).some(({ laidFrom }) => laidFrom && !own.has(laidFrom.buildUpId))
   return [
+    ...cut ? ['Some coats are linked to a build-up that is not in this workshop. They come in standing by themselves.'] : [],
     ...file.engineVersion === ENGINE_VERSION ? [] : [`It was written by version ${file.engineVersion} of the colour engine. New paints are worked out anew by version ${ENGINE_VERSION}; revisions keep the colours they were published with.`],
     ...file.revisionsLeftOut > 0 ? [`${file.revisionsLeftOut} older revisions had no room in the file.`] : [],
   ]

@@ -59,7 +59,7 @@ async function addWhatIsMissing(tx: Ctx, file: SchemeFile, matches: Matches): Pr
     const [row] = await tx.db.insert(masks).values({ workshopId: tx.workshopId, name, form }).returning({ id: masks.id })
     matches.masks.set(id, row!.id)
   }
-  return { paints: new Map([...matches.paints].map(([id, paint]) => [id, paint.id])), blanks: matches.blanks, masks: matches.masks }
+  return { paints: new Map([...matches.paints].map(([id, paint]) => [id, paint.id])), blanks: matches.blanks, masks: matches.masks, buildUps: matches.buildUps }
 }
 
 /** The workshop's own optical data for those of the file's that a revision was made with; what no paint here has is kept as it was frozen. */
