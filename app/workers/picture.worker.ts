@@ -4,7 +4,7 @@ import type { Look } from '#shared/picture/look'
 import { pictureBench } from '#shared/picture/picture-bench'
 import type { PictureAnswer, PictureAsk, PictureQuestion } from '#shared/picture/picture-messages'
 import { zoneBench } from '#shared/picture/zone-bench'
-import { zoneColours } from '#shared/picture/zone-colours'
+import { zoneColours, zoneSpreads } from '#shared/picture/zone-colours'
 import type { SchemeBody } from '#shared/scheme/body'
 import type { Materials } from '#shared/scheme/materials'
 
@@ -13,7 +13,8 @@ import type { Materials } from '#shared/scheme/materials'
 /** A whole picture that takes no longer than this needs no coarse one before it, ms: going back to coarse would flicker. */
 const AT_ONCE_MS = 40
 
-type Work = Exclude<PictureQuestion, { ask: 'forget' }>
+/** What is wanted; of zones whose colours were told already, how sure they are. */
+type Work = Exclude<PictureQuestion, { ask: 'forget' }> & { isTold?: boolean }
 
 const { engine, tryGraphics } = chosenEngine()
 const bench = pictureBench('edits', engine)
@@ -53,15 +54,15 @@ function breath(): Promise<void> {
   return new Promise(resolve => setTimeout(resolve))
 }
 
-/** What somebody points at first, then the picture that was asked for last, then what is said about it. */
+/** What somebody points at first, then the picture that was asked for last, then what is said about it, then how sure that is. */
 function next(): Work | undefined {
   const all = [...wanted.values()]
-  return all.find(({ ask }) => ask === 'pick') ?? all.findLast(({ ask }) => ask === 'paint') ?? all.at(0)
+  return all.find(({ ask }) => ask === 'pick') ?? all.findLast(({ ask }) => ask === 'paint') ?? all.find(({ isTold }) => !isTold) ?? all.at(0)
 }
 
 /** What is said about a look, and can be between the stages of its picture. */
 function aside(): Work | undefined {
-  return [...wanted.values()].find(({ ask }) => ask !== 'paint')
+  return [...wanted.values()].find(({ ask, isTold }) => ask !== 'paint' && !isTold)
 }
 
 async function workAll(): Promise<void> {
@@ -70,7 +71,7 @@ async function workAll(): Promise<void> {
   for (let work = next(); work; work = next()) {
     await attempt(work)
     await breath()
-    if (wanted.size === 0 && work.ask === 'paint') tryGraphics()
+    if (wanted.size === 0 && lastWhole < Infinity) tryGraphics()
   }
   isAtWork = false
 }
@@ -90,9 +91,26 @@ async function answer(work: Work): Promise<void> {
   switch (work.ask) {
     case 'paint': return paint(work)
     case 'pick': return post({ answer: 'picked', picture, request, place: bench.pick(look, work.options, work.x, work.y) })
-    case 'zones': return post({ answer: 'zones', picture, request, zones: zoneColours(look, work.wish, measured) })
-    case 'let-down':
-      return post({ answer: 'let-down', picture, request, steps: letDown(look, work.coatId, work.zone, work.passesMost, work.clear, measured) })
+    case 'zones':
+      if (work.isTold) return tellSpreads(work)
+      post({ answer: 'zones', picture, request, zones: zoneColours(look, work.wish, measured) })
+      if (work.sure && !wanted.has(picture)) wanted.set(picture, { ...work, isTold: true })
+      return
+    case 'let-down': return post({ answer: 'let-down', picture, request, letDown: letDown(look, work.letDown, measured) })
+  }
+}
+
+/** How sure the promises are takes longer than the promises: whoever comes meanwhile goes first, and the rest waits its turn. */
+async function tellSpreads(work: Extract<Work, { ask: 'zones' }>): Promise<void> {
+  const { picture, request, look, wish } = work
+  const zones = zoneSpreads(look, wish, measured)
+  for (let step = zones.next(); ; step = zones.next()) {
+    if (step.done) return post({ answer: 'spreads', picture, request, spreads: step.value })
+    wanted.set(picture, work)
+    await breath()
+    // A newer question took its place, the page forgot it, or something else waits.
+    if (wanted.get(picture) !== work || wanted.size > 1) return
+    wanted.delete(picture)
   }
 }
 

@@ -37,7 +37,11 @@ export function bassMap(places: readonly BassPlace[], pairs: readonly (readonly 
 
 /** What the two cones take of a stack, lit from 45° and seen straight on, with what it gives off. */
 export function bassCatchOf(stack: Stack, seen: ExactSeen): BassCatch {
-  const { reflected, photons } = lightFrom(stack, seen)
+  return bassCatchIn(lightFrom(stack, seen), seen)
+}
+
+/** The same of light that leaves a stack, 36 bands each. */
+export function bassCatchIn({ reflected, photons }: ReturnType<typeof lightFrom>, seen: ExactSeen): BassCatch {
   const sent = photons.map((value, i) => value + seen.photons[i]! * reflected[i]!)
   const { green, red } = coneRows(seen)
   return { green: dot(green, sent), red: dot(red, sent) }

@@ -1,7 +1,7 @@
 import { coatLayer, flakeCoatAt } from './coat-layer'
 import type { Lab } from './colorimetry'
 import type { CoatLayer } from './film'
-import { flakeGeometry } from './flake-angles'
+import { type Aspecular, flakeGeometry } from './flake-angles'
 import { glowOf } from './fluorescence'
 import { glowPhotons } from './glow'
 import { weigh } from './light-power'
@@ -16,23 +16,26 @@ export interface QuickCoat {
   glows: boolean
   /** What a ray keeps that goes down and up again through the coat. */
   through: Float64Array
-  /** Only with flakes: what they mirror to the eye at 45°, less what the same flakes sent to all sides. */
-  mirrored?: Float64Array
+  /** Only with flakes: what they mirror to the eye at an angle, less what the same flakes sent to all sides. */
+  mirrored?: Readonly<Partial<Record<Aspecular, Float64Array>>>
 }
 
 /** A glow is cut this coarsely: only differences between stacks cut alike are looked at. */
 const SUBLAYERS = 2
 const BANDS = 36
 
-/** Works one coat out. */
-export function quickCoat(coat: Coat, { surface }: ExactSeen): QuickCoat {
+const AT_45: readonly Aspecular[] = [45]
+
+/** Works one coat out, for the angles it will be looked at from. */
+export function quickCoat(coat: Coat, { surface }: ExactSeen, angles: readonly Aspecular[] = AT_45): QuickCoat {
   const { optics, passes } = coat
   const layer = coatLayer(optics, passes), glows = glowOf(optics) !== undefined
   if (!optics.flake) return { coat, layer, glows, through: layer.T.map((_, b) => Math.exp(-2 * (optics.K[b]! + optics.S[b]!) * passes)) }
-  const { gain, cosine } = flakeGeometry(45, optics.flake.sigma, surface.index)
-  const lit = flakeCoatAt(optics, passes, [cosine])[0]!
+  const geometry = angles.map(angle => flakeGeometry(angle, optics.flake!.sigma, surface.index))
+  const lit = flakeCoatAt(optics, passes, geometry.map(({ cosine }) => cosine))
   const evenly = (1 - surface.outside) * (1 - surface.inside), share = 1 - optics.flake.edge
-  return { coat, layer, glows, through: layer.T.map(T => T * T), mirrored: lit.R.map((R, b) => share * (gain * R - evenly * layer.R[b]!)) }
+  const mirrored = Object.fromEntries(angles.map((angle, a) => [angle, lit[a]!.R.map((R, b) => share * (geometry[a]!.gain * R - evenly * layer.R[b]!))]))
+  return { coat, layer, glows, through: layer.T.map(T => T * T), mirrored }
 }
 
 /**
@@ -59,7 +62,7 @@ function addMirrored(coats: readonly QuickCoat[], light: Float64Array): void {
   if (lowest < 0) return
   const reaching = new Float64Array(BANDS).fill(1)
   for (let i = coats.length - 1; i >= lowest; i--) {
-    const { through, mirrored } = coats[i]!
+    const { through } = coats[i]!, mirrored = coats[i]!.mirrored?.[45]
     for (let b = 0; b < BANDS; b++) {
       if (mirrored) light[b]! += reaching[b]! * mirrored[b]!
       reaching[b]! *= through[b]!

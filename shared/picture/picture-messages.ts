@@ -1,13 +1,12 @@
-import type { ZoneName } from '#shared/blank/zone-names'
 import type { SchemeBody } from '#shared/scheme/body'
 import type { Materials } from '#shared/scheme/materials'
 import type { EngineName } from './engine/picture-engine'
-import type { LetDownStep } from './let-down'
+import type { LetDown, LetDownWish } from './let-down'
 import type { Look } from './look'
 import type { PickedPlace } from './pick-place'
 import type { PictureStage } from './picture-bench'
 import type { Picture, PictureOptions } from './picture-options'
-import type { ZoneColour, ZoneWish } from './zone-colours'
+import type { ZoneColour, ZoneSpread, ZoneWish } from './zone-colours'
 
 // A page and its thread are one program, so what they say to one another is held by its types alone: a check at the border would cost
 // every edit some milliseconds, and every page the download of the checker.
@@ -24,10 +23,10 @@ type About<L> = Asked<L> & (
   | { ask: 'paint', options: PictureOptions }
   /** What lies at a place of the picture, pixels. */
   | { ask: 'pick', options: PictureOptions, x: number, y: number }
-  /** The promised colours of every zone. */
-  | { ask: 'zones', wish: ZoneWish }
+  /** The promised colours of every zone; then, if wanted, how sure each is. */
+  | { ask: 'zones', wish: ZoneWish, sure: boolean }
   /** Colours of one coat over its ground, pass by pass. */
-  | { ask: 'let-down', coatId: string, zone: ZoneName, passesMost: number, clear: boolean }
+  | { ask: 'let-down', letDown: LetDownWish }
 )
 
 /** The page no longer shows this picture. */
@@ -48,5 +47,6 @@ export type PictureAnswer
   = | { answer: 'painted', picture: string, request: number, stage: PictureStage, painted: Picture, engine: EngineName }
     | { answer: 'picked', picture: string, request: number, place: PickedPlace | undefined }
     | { answer: 'zones', picture: string, request: number, zones: ZoneColour[] }
-    | { answer: 'let-down', picture: string, request: number, steps: LetDownStep[] }
+    | { answer: 'spreads', picture: string, request: number, spreads: ZoneSpread[] }
+    | { answer: 'let-down', picture: string, request: number, letDown: LetDown }
     | { answer: 'failed', picture: string, request: number, reason: string }

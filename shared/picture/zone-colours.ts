@@ -1,19 +1,16 @@
-import type { BassCatch } from '#shared/optics/bass-eyes'
-import { bassCatchOf } from '#shared/optics/bass-map'
-import { deltaE2000 } from '#shared/optics/delta-e'
-import { groundFromLab } from '#shared/optics/known-film'
-import { exactSeen } from '#shared/optics/seen-exact'
-import { DAYLIGHT_IN_AIR } from '#shared/optics/seen-key'
-import type { SeenWish } from '#shared/optics/seen-wish'
-import { type PromiseSpread, promiseSpread } from '#shared/optics/spread'
-import { coloursOnTheWayUp, promise, type Coat } from '#shared/optics/stack'
 import type { ZoneName } from '#shared/blank/zone-names'
+import type { BassCatch } from '#shared/optics/bass-eyes'
+import { bassCatchIn } from '#shared/optics/bass-map'
+import { deltaE2000 } from '#shared/optics/delta-e'
+import { quickPromise } from '#shared/optics/quick-promise'
+import { type PromiseSpread, promiseSpread } from '#shared/optics/spread'
 import { colourAtAngle, colourShown, type ColourShown } from './colour-shown'
 import { aspecularOf } from './light-rig'
 import type { Look } from './look'
-import type { PictureOptions } from './picture-options'
-import { finishShown, shownCoats } from './shown-coats'
 import { zoneBench, type ZoneBench } from './zone-bench'
+import { zoneStacks, type ZoneWish } from './zone-stacks'
+
+export type { ZoneWish } from './zone-stacks'
 
 /** One step on the way up in a zone. */
 export interface CoatColour extends ColourShown {
@@ -31,8 +28,6 @@ export interface ZoneColour {
   label: string
   /** The promise: seen straight on, lit from 45°, gloss excluded, in daylight unless wished otherwise. With flakes as the chosen light shows them. */
   promised: ColourShown
-  /** How sure it is: at 45° where flakes lie. Its words call coats by their numbers in the scheme. */
-  spread: PromiseSpread
   /** What a largemouth bass's two cones take of it, flakes as at 45°; `verdictOn` compares two. */
   cones: BassCatch
   /** Only where flakes lie: toward the gloss, and far from it. */
@@ -42,44 +37,54 @@ export interface ZoneColour {
   wayUp: CoatColour[]
 }
 
-/** Fewer passes than this leave no trace. */
-const TRACE = 0.01
-
-/** What of a look decides its promised colours. */
-export type ZoneWish = Pick<PictureOptions, 'upTo' | 'clear' | 'light'> & {
-  /** What it is seen by; daylight in air when left out. */
-  seen?: SeenWish | undefined
-}
+/** A zone and how sure its promise is. */
+export type ZoneSpread = readonly [zone: ZoneName, spread: PromiseSpread]
 
 /**
- * The promised colour of every zone: numbers of the engine, not pixels of a picture.
+ * The promised colour of every zone: numbers of the engine, not pixels of a picture. What an edit leaves as it was is not worked out again.
  *
  * @param bench keeps what it measured from one call to the next
  */
 export function zoneColours(look: Look, wish: ZoneWish, bench: ZoneBench = zoneBench()): ZoneColour[] {
-  const { colour } = look.body.ground
-  const ground = groundFromLab(colour, look.body.ground.finish)
-  const finish = finishShown(look, wish)
-  const coats = shownCoats(look, wish)
-  const seen = exactSeen(wish.seen ?? DAYLIGHT_IN_AIR)
-  return bench.zones(look).map(({ zone, label }): ZoneColour => {
-    const here = coats
-      .map(coat => ({ coat, passes: coat.passes * bench.share(look, coat, zone) }))
-      .filter(({ passes }) => passes > TRACE)
-    const stack = { ground, finish, coats: here.map(({ coat, passes }): Coat => ({ optics: coat.paint, passes })) }
-    const promised = promise(stack, seen)
-    const wayUp = coloursOnTheWayUp(stack, seen).map((shown, i, all): CoatColour => ({
-      ...colourShown(shown),
-      coatId: here[i - 1]?.coat.laid.coat.id ?? null,
-      passes: here[i - 1]?.passes ?? 0,
-      change: i === 0 ? 0 : deltaE2000(shown.lab, all[i - 1]!.lab),
-    }))
-    return {
-      zone, label, wayUp,
-      promised: colourAtAngle(promised, aspecularOf(wish.light), seen),
-      cones: bassCatchOf(stack, seen),
-      spread: promiseSpread(stack, seen, here.map(({ coat }) => coat.laid.number)),
-      ...(promised.face && promised.flop ? { face: colourShown(promised.face), flop: colourShown(promised.flop) } : {}),
-    }
+  const { seen, zones } = zoneStacks(look, wish, bench)
+  const angle = aspecularOf(wish.light)
+  return zones.map(({ zone, label, here, stack, quick, keys }): ZoneColour => {
+    const ids = here.map(({ laid }) => laid.coat.id)
+    return bench.colours([zone, label, angle, ...ids, ...keys].join(' | '), () => {
+      const { promised, wayUp, ...light } = quickPromise(stack, quick, seen, (count, cut, work) => bench.photons([cut, ...keys.slice(0, count + 1)].join(' | '), work))
+      return {
+        zone, label,
+        wayUp: wayUp.map((shown, i): CoatColour => ({
+          ...colourShown(shown),
+          coatId: ids[i - 1] ?? null,
+          passes: stack.coats[i - 1]?.passes ?? 0,
+          change: i === 0 ? 0 : deltaE2000(shown.lab, wayUp[i - 1]!.lab),
+        })),
+        promised: colourAtAngle(promised, angle, seen),
+        cones: bassCatchIn(light, seen),
+        ...(promised.face && promised.flop ? { face: colourShown(promised.face), flop: colourShown(promised.flop) } : {}),
+      }
+    })
   })
+}
+
+/**
+ * How sure the promise of every zone is, zone by zone: a thread can hear what came meanwhile after each. At 45° where flakes lie;
+ * words call coats by their numbers in the scheme.
+ *
+ * @param bench keeps what it measured, and what it worked out of stacks that come again
+ */
+export function* zoneSpreads(look: Look, wish: ZoneWish, bench: ZoneBench = zoneBench()): Generator<undefined, ZoneSpread[], undefined> {
+  const { seen, zones } = zoneStacks(look, wish, bench)
+  const spreads: ZoneSpread[] = []
+  for (const { zone, here, stack, quick, keys } of zones) {
+    const numbers = here.map(({ laid }) => laid.number)
+    let isNew = false
+    spreads.push([zone, bench.spreads([...numbers, ...keys].join(' | '), () => {
+      isNew = true
+      return promiseSpread(stack, seen, numbers, quick)
+    })])
+    if (isNew) yield
+  }
+  return spreads
 }

@@ -4,10 +4,11 @@ import { type FilmRow, filmRows } from './film-rows'
 import { type UseSeen, useSeen } from './use-seen'
 import { useToast } from '~/composables/ui/use-toast'
 import { useSpoken } from '~/composables/ui/use-spoken'
-import { useZoneColours } from '~/composables/picture/use-zone-colours'
+import { useZonePromises } from '~/composables/picture/use-zone-colours'
 import type { SchemeDraft } from '~/composables/scheme/use-scheme-draft'
 import { type PreparedBlank, prepareBlank } from '#shared/blank/prepared-blank'
 import type { ZoneName } from '#shared/blank/zone-names'
+import type { PromiseSpread } from '#shared/optics/spread'
 import type { Look } from '#shared/picture/look'
 import type { PictureSide } from '#shared/picture/picture-sides'
 import type { ZoneColour } from '#shared/picture/zone-colours'
@@ -47,6 +48,8 @@ export interface Build {
   number: ComputedRef<number>
   zone: Ref<ZoneName>
   zones: ShallowRef<ZoneColour[] | null>
+  /** How sure each zone's promise is; null while it is being worked out. */
+  spreads: ShallowRef<ReadonlyMap<ZoneName, PromiseSpread> | null>
   upTo: Ref<string>
   clear: Ref<boolean>
   side: Ref<PictureSide>
@@ -105,7 +108,7 @@ export function provideBuild(given: Pick<Build, 'scheme' | 'draft' | 'whyNot' | 
     coat: computed(() => coats.value.find(coat => coat.id === coatId.value) ?? null),
     number: computed(() => coats.value.findIndex(coat => coat.id === coatId.value) + 1),
     zone: ref<ZoneName>('upper-flank'),
-    zones: useZoneColours(() => import.meta.client ? look.value : null, () => ({ upTo: upTo.value, clear: clear.value, light: { tilt: tilt.value }, seen: seen.wish.value })),
+    ...useZonePromises(() => import.meta.client ? look.value : null, () => ({ upTo: upTo.value, clear: clear.value, light: { tilt: tilt.value }, seen: seen.wish.value })),
     upTo, clear, tilt,
     seen,
     side: ref<PictureSide>('left flank'),

@@ -39,7 +39,7 @@ export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOr
       picks.delete(answer.request)
       return
     }
-    if (answer.answer === 'zones' || answer.answer === 'let-down') return
+    if (answer.answer === 'zones' || answer.answer === 'spreads' || answer.answer === 'let-down') return
     if (answer.answer === 'failed') {
       failed.value = answer.reason
       if (answer.request === Infinity) thread = undefined

@@ -2,10 +2,13 @@ import { describe, expect, it } from 'vitest'
 import type { ZoneName } from '#shared/blank/zone-names'
 import type { Lab } from '#shared/optics/colorimetry'
 import { deltaE2000 } from '#shared/optics/delta-e'
+import { exactSeen } from '#shared/optics/seen-exact'
+import { coloursOnTheWayUp, promise } from '#shared/optics/stack'
 import { letDown } from '#shared/picture/let-down'
 import { pictureText } from '#shared/picture/picture-hash'
 import { zoneBench } from '#shared/picture/zone-bench'
-import { zoneColours } from '#shared/picture/zone-colours'
+import { zoneColours, zoneSpreads } from '#shared/picture/zone-colours'
+import { zoneStacks } from '#shared/picture/zone-stacks'
 import { ember, perch, roach } from '../../fixtures/demo-looks'
 
 const bench = zoneBench()
@@ -24,6 +27,38 @@ describe('promised colours', { timeout: 30_000 }, () => {
       expect(deltaE2000(wayUp.at(-1)!.lab, promised.lab)).toBeLessThan(1e-6)
       const ids = wayUp.slice(1).map(step => step.coatId)
       expect(ids).toEqual(coatIds(roach).filter(id => ids.includes(id)))
+    }
+  })
+
+  it('is what the whole stacks promise, each worked out for itself, in daylight and under water', () => {
+    const under = { light: 'D65', water: { type: '5C', depth: 3, distance: 1, adapted: true } } as const
+    for (const [look, seen] of [[roach, { light: 'A' }], [ember, under]] as const) {
+      const wish = { ...ALL, light: { tilt: 45 }, seen }
+      const { zones } = zoneStacks(look, wish, bench)
+      for (const { promised, wayUp, zone } of zoneColours(look, wish, bench)) {
+        const { stack } = zones.find(each => each.zone === zone)!
+        expect(deltaE2000(promised.lab, promise(stack, exactSeen(seen)).lab)).toBeLessThan(1e-6)
+        coloursOnTheWayUp(stack, exactSeen(seen)).forEach(({ lab }, i) => expect(deltaE2000(wayUp[i]!.lab, lab)).toBeLessThan(0.03))
+      }
+    }
+  })
+
+  it('is the same on a bench that has seen other looks before', () => {
+    const more = structuredClone(ember)
+    const [first] = more.body.stack.filter(item => item.act === 'coat')
+    first!.coat.passes += 2
+    expect(zoneColours(more, ALL, bench)).toEqual(zoneColours(more, ALL))
+  })
+
+  it('tells how sure each is, by the numbers of the coats in the scheme', () => {
+    const steps = zoneSpreads(perch, ALL, bench)
+    let step = steps.next()
+    while (!step.done) step = steps.next()
+    const spreads = new Map(step.value)
+    expect([...spreads.keys()]).toEqual([...of(perch).keys()])
+    for (const { typical, most, words } of spreads.values()) {
+      expect(most).toBeGreaterThan(typical)
+      expect(words).toMatch(/within/)
     }
   })
 
@@ -71,9 +106,28 @@ it.each(GOLDEN)('promises of the %s: %s', (name, zone, lab) => {
 })
 
 describe('a let-down', () => {
+  it('says which passes come out alike, and how sure the chosen one is', () => {
+    const coatId = coatIds(perch)[5]!
+    const { steps, spread, alike } = letDown(perch, { coatId, zone: 'upper-flank', passesMost: 8, chosen: 3, clear: true }, bench)
+    const [from, to] = alike!
+    expect(from).toBeLessThanOrEqual(3)
+    expect(to).toBeGreaterThanOrEqual(3)
+    const within = Math.max(1, spread!.typical)
+    for (const step of steps.slice(from, to + 1)) expect(deltaE2000(step.lab, steps[3]!.lab)).toBeLessThanOrEqual(within)
+    if (to < 8) expect(deltaE2000(steps[to + 1]!.lab, steps[3]!.lab)).toBeGreaterThan(within)
+  })
+
+  it('is seen in the light and the water it is asked for in', () => {
+    const wish = { coatId: coatIds(perch)[5]!, zone: 'back', passesMost: 3, chosen: 3, clear: true } as const
+    const by = { light: 'A', water: { type: 'tea-stained', depth: 2, distance: 1, adapted: false } } as const
+    const laid = of(perch, { ...ALL, upTo: wish.coatId, seen: by }).get('back')!.promised.lab
+    expect(deltaE2000(letDown(perch, { ...wish, seen: by }, bench).steps[3]!.lab, laid)).toBeLessThan(1e-6)
+    expect(deltaE2000(letDown(perch, wish, bench).steps[3]!.lab, laid)).toBeGreaterThan(5)
+  })
+
   it('starts at the present ground and moves less and less', () => {
     const coatId = coatIds(perch)[5]!
-    const steps = letDown(perch, coatId, 'upper-flank', 24, true, bench)
+    const steps = letDown(perch, { coatId, zone: 'upper-flank', passesMost: 24, chosen: 3, clear: true }, bench).steps
     const below = of(perch, { ...ALL, upTo: coatIds(perch)[4]! }).get('upper-flank')!.promised.lab
     expect(deltaE2000(steps[0]!.lab, below)).toBeLessThan(1e-6)
     expect(steps.map(step => step.passes)).toEqual([...Array(25).keys()])
@@ -83,11 +137,11 @@ describe('a let-down', () => {
   it('ends at the promise with as many passes as the coat has', () => {
     const coatId = coatIds(perch)[5]!
     const laid = of(perch, { ...ALL, upTo: coatId }).get('back')!.promised.lab
-    expect(deltaE2000(letDown(perch, coatId, 'back', 3, true, bench)[3]!.lab, laid)).toBeLessThan(1e-6)
+    expect(deltaE2000(letDown(perch, { coatId, zone: 'back', passesMost: 3, chosen: 3, clear: true }, bench).steps[3]!.lab, laid)).toBeLessThan(1e-6)
   })
 
   it('has nothing to say of a coat that is not there', () => {
-    expect(letDown(perch, coatIds(ember)[0]!, 'back', 3, true, bench)).toEqual([])
+    expect(letDown(perch, { coatId: coatIds(ember)[0]!, zone: 'back', passesMost: 3, chosen: 3, clear: true }, bench).steps).toEqual([])
   })
 })
 
