@@ -1,91 +1,17 @@
+import { createNewsLink, type LiveLine, type LiveLink, type NewsLinkPorts } from '~/composables/live/news-link'
 import { RunEventsView } from '#shared/bench/run-view'
 
-const RETRY_FIRST_MS = 1_000
-const RETRY_LONGEST_MS = 30_000
-
-/** A line on which a server tells things; `EventSource` is one. */
-export interface LiveLine {
-  addEventListener: (name: string, hear: (event: { data?: unknown }) => void) => void
-  close: () => void
-}
+export type { LiveLine, LiveLink }
 
 /** What the link needs from the world. */
-export interface LiveLinkPorts {
+export interface LiveLinkPorts extends Pick<NewsLinkPorts<RunEventsView>, 'onNews' | 'onLive' | 'later'> {
   /** Opens a line that tells what is done from after a place in the order of arrival. */
   open: (since: number) => LiveLine
   /** The highest place heard so far, wherever from. */
   since: () => number
-  onNews: (view: RunEventsView) => void
-  /** Whether news comes by itself now; while it does not, one has to ask. */
-  onLive: (isLive: boolean) => void
-  /** Runs something later; the answer calls it off. */
-  later: (ms: number, run: () => void) => () => void
 }
 
-/** Keeps a line open for as long as it is wanted, and says when there is none. */
-export interface LiveLink {
-  /** Opens the line now: the page is seen, or the network is back. */
-  start: () => void
-  /** Lets go of the line until it is started again: the page is out of sight, or left. */
-  stop: () => void
-}
-
-/** A link to what is done in a run. A line that breaks is opened again, later and later; one that is over stays closed. */
-export function createLiveLink(ports: LiveLinkPorts): LiveLink {
-  let line: LiveLine | null = null
-  let callOff: (() => void) | null = null
-  let retryMs = RETRY_FIRST_MS
-  let isOver = false
-
-  function letGo(): void {
-    callOff?.()
-    callOff = null
-    line?.close()
-    line = null
-    ports.onLive(false)
-  }
-
-  function open(): void {
-    callOff = null
-    const opened = ports.open(ports.since())
-    line = opened
-    const isCurrent = () => line === opened
-    opened.addEventListener('acts', ({ data }) => {
-      const view = readView(data)
-      if (!isCurrent() || !view) return
-      retryMs = RETRY_FIRST_MS
-      ports.onLive(true)
-      ports.onNews(view)
-    })
-    opened.addEventListener('over', () => {
-      if (!isCurrent()) return
-      isOver = true
-      letGo()
-    })
-    opened.addEventListener('error', () => {
-      if (!isCurrent()) return
-      letGo()
-      callOff = ports.later(retryMs, open)
-      retryMs = Math.min(RETRY_LONGEST_MS, retryMs * 2)
-    })
-  }
-
-  return {
-    start() {
-      if (isOver || line) return
-      callOff?.()
-      open()
-    },
-    stop: letGo,
-  }
-}
-
-function readView(data: unknown): RunEventsView | null {
-  if (typeof data !== 'string') return null
-  try {
-    return RunEventsView.safeParse(JSON.parse(data)).data ?? null
-  }
-  catch {
-    return null
-  }
+/** A link to what is done in a run, which goes on where one is. */
+export function createLiveLink({ open, since, ...ports }: LiveLinkPorts): LiveLink {
+  return createNewsLink({ ...ports, event: 'acts', form: RunEventsView, open: () => open(since()) })
 }

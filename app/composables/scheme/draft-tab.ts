@@ -20,11 +20,18 @@ async function hold(name: string): Promise<boolean> {
   })
 }
 
+let claimed: Promise<DraftTab> | undefined
+
 /**
- * The name of this tab: the same after a reload, another in a tab that was made by copying this one. Where the browser has no
- * locks a name is taken on trust, and no other tab counts as open.
+ * This tab, claimed once a page: the same name after a reload, another in a tab that was made by copying this one. Where the
+ * browser has no locks a name is taken on trust, and no other tab counts as open.
  */
-export async function claimTab(): Promise<DraftTab> {
+export function thisTab(): Promise<DraftTab> {
+  claimed ??= claimTab()
+  return claimed
+}
+
+async function claimTab(): Promise<DraftTab> {
   const remembered = readName()
   if (!('locks' in navigator)) return { name: remembered ?? rename(), isOpen: async () => false }
   const isOpen = async (name: string) => {

@@ -2,7 +2,7 @@ import { onBeforeUnmount, onMounted, watch } from 'vue'
 import { api } from '~/composables/api/api'
 import { draftDevice } from './draft-device'
 import { draftShelf } from './draft-shelf'
-import { claimTab } from './draft-tab'
+import { thisTab } from './draft-tab'
 import type { DraftShelf } from './kept-draft'
 import { schemeKey, SCHEMES_KEY } from './scheme-keys'
 import { type DraftPorts, type SchemeDraft, workOnDraft } from './work-on-draft'
@@ -40,7 +40,7 @@ async function openShelf(personId: string): Promise<DraftShelf> {
   })
   const opening = async () => {
     // Opened before the first change: a page that goes away cannot wait for it any more.
-    const [tab] = await Promise.all([claimTab(), draftDevice()])
+    const [tab] = await Promise.all([thisTab(), draftDevice()])
     return draftShelf({ open: draftDevice, tab, personId, now: () => Date.now(), old: window.localStorage })
   }
   return Promise.race([opening(), late])
