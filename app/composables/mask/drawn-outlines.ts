@@ -8,7 +8,7 @@ import { simplifyTo } from '#shared/scheme/outline/simplify-line'
 /** A stencil has so many outlines. */
 export const OUTLINES_MAX = 120
 /** How far a kept outline may lie from what was drawn or brought, mm. */
-const TOLERANCE = 0.05
+const TOLERANCE = 0.02
 
 /** Outlines that were drawn or brought in, mm on the flat skin of a blank, and how they are laid there. */
 export interface DrawnOutlines { outlines: readonly (readonly FlatPoint[])[], placing: Placing }
