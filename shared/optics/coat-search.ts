@@ -55,6 +55,16 @@ export function bestPasses(colourAt: (passes: number) => Lab, target: Lab, passe
   return found.deltaE < seeds[best]!.deltaE ? found : seeds[best]!
 }
 
+/** How far round passes that are nearly the nearest the nearest may lie, as a share. */
+const AROUND = 0.15
+
+/** The nearest close to passes that come near already. */
+export function nearestAround(colourAt: (passes: number) => Lab, target: Lab, near: Reached, passesMost: number): Reached {
+  const distance = (passes: number) => deltaE2000(colourAt(passes), target)
+  const found = golden(distance, near.passes * (1 - AROUND), Math.min(passesMost, near.passes * (1 + AROUND)))
+  return found.deltaE < near.deltaE ? found : near
+}
+
 function golden(distance: (passes: number) => number, from: number, to: number): Reached {
   let low = from, high = to
   let left = high - GOLDEN * (high - low), right = low + GOLDEN * (high - low)

@@ -1,5 +1,5 @@
 import { assertWithin, type Spectrum } from './bands'
-import { bestPasses } from './coat-search'
+import { bestPasses, nearestAround } from './coat-search'
 import { type Lab, labFromReflectance, type Light } from './colorimetry'
 import { deltaE2000 } from './delta-e'
 import { type Cup, nearestCups } from './find-cups'
@@ -51,8 +51,15 @@ export interface FoundCoat {
 /** Single paints and drop mixes, nearest first; mixes of different paints only. */
 export interface FoundCoats { paints: FoundCoat[], mixes: FoundCoat[] }
 
-/** How far a search has come, in shares of 1. */
-export interface FindProgress { done: number }
+/** How far a search has come. */
+export interface FindProgress {
+  /** In shares of 1. */
+  done: number
+  /** The nearest so far, for whoever stops here; worked out when asked for. */
+  soFar: () => FoundCoats
+  /** Another number when something nearer was found. */
+  found: number
+}
 
 /** Film per pass varies by so much from hand to hand and day to day: the largest error of a promise. Common practice. */
 export const FILM_SPREAD = 0.15
@@ -70,16 +77,23 @@ export function* findCoat(wish: FindCoatWish): Generator<FindProgress, FoundCoat
   const search = prepare(wish)
   const { shelf, answers } = search
   const ranked: { paint: ShelfPaint, reached: Reached }[] = []
+  const paintsNow = () => [...ranked].sort((a, b) => a.reached.deltaE - b.reached.deltaE).slice(0, answers)
+    .map(({ paint, reached }) => described(search, [{ id: paint.id, drops: 1 }], paint.optics, reached))
   for (const [i, paint] of shelf.entries()) {
     ranked.push({ paint, reached: single(search, paint) })
-    if (!isFilm(paint)) yield { done: 0.1 * (i + 1) / shelf.length }
+    if (!isFilm(paint)) yield { done: 0.1 * (i + 1) / shelf.length, soFar: () => ({ paints: paintsNow(), mixes: [] }), found: 0 }
   }
-  const paints = ranked.sort((a, b) => a.reached.deltaE - b.reached.deltaE).slice(0, answers)
-    .map(({ paint, reached }) => described(search, [{ id: paint.id, drops: 1 }], paint.optics, reached))
-  yield { done: 0.1 }
-  const films = search.scene.hasGlow ? [] : shelf.filter(isFilm)
-  const cups = search.partsMost > 1 ? yield* nearestCups(films, search.films, search) : []
-  return { paints, mixes: cups.map(cup => described(search, partsOf(cup), mixedIn(cup), cup.reached)) }
+  const paints = paintsNow()
+  const mixesOf = (cups: readonly Cup<ShelfPaint>[]) => cups.map(cup => described(search, partsOf(cup), mixedIn(cup), cup.reached))
+  yield { done: 0.1, soFar: () => ({ paints, mixes: [] }), found: 0 }
+  const films = search.scene.hasGlow || search.partsMost === 1 ? [] : shelf.filter(isFilm)
+  const cups = nearestCups(films, search.films, search)
+  for (;;) {
+    const step = cups.next()
+    if (step.done) return { paints, mixes: mixesOf(step.value) }
+    const { done, found, nearest } = step.value
+    yield { done, found, soFar: () => ({ paints, mixes: mixesOf(nearest()) }) }
+  }
 }
 
 /** `findCoat` without a rest. */
@@ -144,9 +158,11 @@ function colourOf({ scene }: Search, optics: PaintOptics, light: Light): (passes
   }, light).lab
 }
 
-function described(search: Search, parts: FoundCoat['parts'], optics: PaintOptics, { passes }: Reached): FoundCoat {
+function described(search: Search, parts: FoundCoat['parts'], optics: PaintOptics, reached: Reached): FoundCoat {
   const { target, second, targetUnderSecond } = search
   const colourAt = colourOf(search, optics, search.light)
+  // A film is looked for to within 0.02, which is many passes of one that nearly hides.
+  const { passes } = search.passes.whole ? reached : nearestAround(colourAt, target, reached, search.passes.most)
   const at = (amount: number) => {
     const lab = colourAt(amount)
     return { lab, deltaE: deltaE2000(lab, target) }

@@ -8,6 +8,9 @@ export interface Cup<P> { set: readonly P[], drops: Drops, reached: Reached }
 /** How much of it is tried: drops and paints in a cup at most, and how many cups are wanted. */
 export interface CupLimits { dropsMost: number, partsMost: number, answers: number }
 
+/** How far it has come, in shares of a whole search; how often something nearer was found, and the nearest so far. */
+export interface CupProgress<P> { done: number, found: number, nearest: () => Cup<P>[] }
+
 /** Cups with so few drops are tried first, of every set: they say which sets are worth more. */
 const FEW_DROPS = 4
 /** Work between two rests, in cups: about a millisecond. */
@@ -21,7 +24,7 @@ interface Tried<P> { set: readonly P[], mixes: readonly Drops[], least: number, 
  * A set is left out only where no mix of its paints can come near enough, a cup only where none of its passes can. Sets that
  * came nearest with few drops go first, so that the rest has a short distance to beat.
  */
-export function* nearestCups<P extends { optics: PaintOptics, cup?: string }>(paints: readonly P[], films: FilmSearch, { dropsMost, partsMost, answers }: CupLimits): Generator<{ done: number }, Cup<P>[], undefined> {
+export function* nearestCups<P extends { optics: PaintOptics, cup?: string }>(paints: readonly P[], films: FilmSearch, { dropsMost, partsMost, answers }: CupLimits): Generator<CupProgress<P>, Cup<P>[], undefined> {
   const endless = new Map(paints.map(paint => [paint, films.endless(paint.optics.K, paint.optics.S)]))
   const mixesOf = new Map([2, 3].map(size => [size, dropMixes(size, dropsMost)]))
   const tried = sharedCups(paints).flatMap(together => [2, 3].filter(size => size <= partsMost)
@@ -31,7 +34,7 @@ export function* nearestCups<P extends { optics: PaintOptics, cup?: string }>(pa
     })))
   const nearest: Tried<P>[] = []
   const K = new Float64Array(36), S = new Float64Array(36)
-  let work = 0
+  let work = 0, found = 0
 
   for (const isFew of [true, false]) {
     const order = isFew ? [...tried].sort((a, b) => a.least - b.least) : [...tried].sort((a, b) => distanceOf(a) - distanceOf(b) || a.least - b.least)
@@ -46,8 +49,9 @@ export function* nearestCups<P extends { optics: PaintOptics, cup?: string }>(pa
         if (reached) {
           one.best = { set: one.set, drops, reached }
           rank(nearest, one, answers)
+          found++
         }
-        if (++work % SLICE === 0) yield { done: 0.1 + (isFew ? 0.2 * i / order.length : 0.2 + 0.7 * i / order.length) }
+        if (++work % SLICE === 0) yield { done: 0.1 + (isFew ? 0.2 * i / order.length : 0.2 + 0.7 * i / order.length), found, nearest: () => nearest.map(({ best }) => best!) }
       }
     }
   }

@@ -12,6 +12,8 @@ export interface UseFindCoat {
   percent: ComputedRef<number>
   /** The newest report; while a newer question is looked into, the one before. */
   report: ShallowRef<FindReport | null>
+  /** The report is the nearest so far of a search that goes on or was stopped. */
+  isSoFar: Ref<boolean>
   /** Why it failed, as a sentence. */
   failed: Ref<string | null>
   /** Asks; a question that was under way is dropped. */
@@ -24,18 +26,24 @@ export function useFindCoat(start: (hear: (answer: FindAnswer) => void) => FindT
   const state = ref<FindState>('nothing asked')
   const done = ref(0)
   const report = shallowRef<FindReport | null>(null)
+  const isSoFar = ref(false)
   const failed = ref<string | null>(null)
   let thread: FindThread | undefined
   let latest = 0
 
   function hear(answer: FindAnswer): void {
     if (answer.answer === 'failed' && answer.request === Infinity) thread = undefined
-    else if (answer.request !== latest || state.value !== 'searching') return
+    else if (answer.request !== latest || (state.value !== 'searching' && !(state.value === 'stopped' && answer.answer === 'so far'))) return
     switch (answer.answer) {
       case 'progress':
         done.value = answer.done
         return
+      case 'so far':
+        report.value = answer.report
+        isSoFar.value = true
+        return
       case 'found':
+        isSoFar.value = false
         report.value = answer.report
         state.value = 'found'
         return
@@ -48,12 +56,13 @@ export function useFindCoat(start: (hear: (answer: FindAnswer) => void) => FindT
   onScopeDispose(() => thread?.end())
 
   return {
-    state, report, failed,
+    state, report, isSoFar, failed,
     percent: computed(() => Math.round(100 * done.value)),
     ask(question) {
       thread ??= start(hear)
       done.value = 0
       failed.value = null
+      isSoFar.value = false
       state.value = 'searching'
       thread.ask({ ask: 'find', request: ++latest, ...question })
     },

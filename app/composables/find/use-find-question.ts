@@ -1,7 +1,7 @@
 import { computed, type ComputedRef, type Ref, ref, watch } from 'vue'
 import { watchDebounced } from '@vueuse/core'
 import { useFindCoat, type UseFindCoat } from './use-find-coat'
-import type { FoundCoat } from '#shared/optics/find-coat'
+import type { SureCoat } from '#shared/optics/find-spread'
 import type { Light } from '#shared/optics/lights'
 import type { Look } from '#shared/picture/look'
 import type { ZoneColour } from '#shared/picture/zone-colours'
@@ -25,7 +25,7 @@ export interface FindGiven {
 }
 
 /** A proposal and its name in the list. */
-export interface Proposal { key: string, kind: 'bottle' | 'cup', found: FoundCoat }
+export interface Proposal { key: string, kind: 'bottle' | 'cup', found: SureCoat }
 
 /** The sheet's question, and what came of it. */
 export interface FindDesk {
@@ -96,7 +96,7 @@ export function useFindQuestion(given: FindGiven): FindDesk {
   const proposals = computed((): Proposal[] => {
     const report = search.report.value
     if (!report) return []
-    const named = (kind: Proposal['kind'], all: readonly FoundCoat[]) => all.map(found => ({ key: found.parts.map(part => `${part.id} ${part.drops}`).join('+'), kind, found }))
+    const named = (kind: Proposal['kind'], all: readonly SureCoat[]) => all.map(found => ({ key: found.parts.map(part => `${part.id} ${part.drops}`).join('+'), kind, found }))
     return [...named('bottle', report.paints), ...named('cup', report.mixes)]
   })
   // The nearest is taken up by itself; a choice that is still proposed stays.

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import type { FoundCoat } from '#shared/optics/find-coat'
+import type { SureCoat } from '#shared/optics/find-spread'
 import { LIGHTS } from '#shared/optics/lights'
 import { SchemeBody } from '#shared/scheme/body'
 import { Coat } from '#shared/scheme/coat'
@@ -36,8 +37,8 @@ export type FindQuestion = Omit<Extract<FindAsk, { ask: 'find' }>, 'ask' | 'requ
 export interface FindReport {
   /** What the zone looks like before the coat. */
   ground: FoundCoat['lab']
-  paints: FoundCoat[]
-  mixes: FoundCoat[]
+  paints: SureCoat[]
+  mixes: SureCoat[]
   /** Something below gives off light, so no mixes were tried. */
   overGlow: boolean
   /** The coat hardly reaches the zone; it was judged as if it did. */

@@ -6,7 +6,6 @@ import { pictureSize } from '#shared/picture/picture-size'
 import { saveShown } from '~/composables/build/save-words'
 import { schemeState } from '~/composables/build/scheme-state'
 import { onArc, tiltAt, tiltWords } from '~/composables/build/tilt-arc'
-import { spreadWords } from '~/composables/build/zone-words'
 import { zoneRing } from '~/composables/build/zone-ring'
 import { BUILT_IN_BLANKS } from '#shared/blank/built-in-blanks'
 import { fitView } from '#shared/blank/fit-view'
@@ -81,11 +80,6 @@ describe('marks laid by their numbers', () => {
 describe('words of the build', () => {
   it('hold an airbrush where they say', () => {
     for (const { value } of AIM_PLACES) expect(aimPlace(aimAt(value, { aim: 'all over' }))).toBe(value)
-  })
-
-  it('promise a spread only for paints that are known well', () => {
-    expect(spreadWords([3, 3])).toMatch(/within 2/)
-    expect(spreadWords([3, 2])).not.toMatch(/within/)
   })
 
   it('count a coat that was moved and changed once', () => {

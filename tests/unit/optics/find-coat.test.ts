@@ -4,6 +4,7 @@ import { filmColours } from '../../../shared/optics/coat-search'
 import { deltaE2000 } from '../../../shared/optics/delta-e'
 import { dropMixes, setsOf } from '../../../shared/optics/drop-mixes'
 import { findCoat, findCoatNow, type FindCoatWish, type ShelfPaint } from '../../../shared/optics/find-coat'
+import { sureCoat } from '../../../shared/optics/find-spread'
 import { CARD_WHITE, groundFromLab } from '../../../shared/optics/known-film'
 import { mixOptics, paintOpticsFrom } from '../../../shared/optics/paint-optics'
 import { promise, stackReflectance } from '../../../shared/optics/stack'
@@ -82,6 +83,33 @@ describe('finding a coat', { timeout: 60_000 }, () => {
     stopped.next()
     stopped.return({ paints: [], mixes: [] })
     expect(stopped.next().done).toBe(true)
+  })
+  it('has the nearest so far to give at every stop, nearer and nearer', () => {
+    const search = findCoat(wish([50, 10, 20]))
+    const nearest: number[] = []
+    let last = -1
+    for (let step = search.next(); !step.done; step = search.next()) {
+      const { found, soFar } = step.value
+      if (found === last) continue
+      last = found
+      const { paints, mixes } = soFar()
+      nearest.push(Math.min(...[...paints, ...mixes].map(({ deltaE }) => deltaE)))
+    }
+    expect(nearest.length).toBeGreaterThan(2)
+    expect(nearest).toEqual([...nearest].sort((a, b) => b - a))
+    expect(nearest.at(-1)!).toBeLessThan(nearest[0]!)
+  })
+  it('says how sure it is over the ground it is laid on, whose doubts it shares', () => {
+    const target = promise(laid({ blue: 1 }, 2)).lab
+    const below = [{ optics: shelf[2]!.optics, passes: 1 }]
+    const alone = wish(target, { wholePasses: true, partsMost: 1 }), over = { ...alone, below }
+    const found = (where: FindCoatWish) => findCoatNow(where).paints.find(({ parts }) => parts[0]!.id === 'blue')!
+    const sure = (where: FindCoatWish, numbers?: number[]) => sureCoat(where, found(where), numbers).spread
+    expect(sure(over, [3, 4]).typical).toBeGreaterThan(0.5)
+    expect(sure(over, [3, 4]).causes.some(({ coats }) => coats.includes(0))).toBe(true)
+    expect(sure(alone).causes.every(({ coats }) => coats.every(coat => coat === 0))).toBe(true)
+    // A hand that lays a fifth goes over it five times: the same film, as sure.
+    expect(sure({ ...alone, laid: 0.2 }).typical).toBeCloseTo(sure(alone).typical, 9)
   })
   it('has each set of paints once, nearest first, and no clears', () => {
     const clear: ShelfPaint = { id: 'clear', optics: paintOpticsFrom({ how: 'clear' }) }

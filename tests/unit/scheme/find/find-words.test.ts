@@ -81,6 +81,18 @@ describe('a search away from the page', () => {
     say({ answer: 'found', request: 1, report })
     expect([search.state.value, search.report.value, asked.at(-1)]).toEqual(['stopped', null, { ask: 'stop' }])
   })
+  it('keeps the nearest so far when it is stopped', () => {
+    const { search, say } = desk()
+    search.ask(question)
+    say({ answer: 'so far', request: 1, report })
+    expect([search.state.value, search.isSoFar.value, search.report.value]).toEqual(['searching', true, report])
+    search.stop()
+    const nearer = { ...report }
+    say({ answer: 'so far', request: 1, report: nearer })
+    expect([search.state.value, search.report.value]).toEqual(['stopped', nearer])
+    search.ask(question)
+    expect(search.isSoFar.value).toBe(false)
+  })
   it('says what failed and starts anew when its thread has died', () => {
     const { search, say, started } = desk()
     search.ask(question)
