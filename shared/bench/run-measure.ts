@@ -71,6 +71,8 @@ export const SampleRecord = z.object({
   measureId: z.uuid(),
   run: z.object({ id: z.uuid(), number: z.number().int() }),
   piece: z.number().int(),
+  /** The photo it was measured from. */
+  photoId: z.uuid().nullable(),
   by: Painter.nullable(),
   at: z.iso.datetime(),
 })

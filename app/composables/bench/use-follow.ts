@@ -3,7 +3,7 @@ import { useBenchClock } from './use-bench-clock'
 import { type RunActs, useRunActs } from './use-run-acts'
 import type { RunHere } from './use-run-here'
 import { goingOn, leavingEarly, type LeavingEarly, type Readiness, readiness } from '~/bench/going-on'
-import type { RunAct } from '#shared/bench/run-event'
+import type { RunAct, RunEvent } from '#shared/bench/run-event'
 import { type Part, partsOf } from '#shared/bench/run-parts'
 import { onceFor, workNow } from '#shared/bench/work-now'
 import { newActs } from '~/bench/new-acts'
@@ -41,7 +41,8 @@ export interface Follow {
   goOn: (pieces?: readonly number[]) => Promise<boolean>
   /** Does an act, then looks at what there is to do. */
   doAndLook: (act: RunAct) => Promise<void>
-  takeBack: () => Promise<void>
+  /** Takes one act back, whoever did it. */
+  takeBack: (act: RunEvent) => Promise<void>
 }
 
 /** Follows a run: where it stands, what there is to do now, and the acts that do it. Called in the set-up of its page, in a browser. */
@@ -108,9 +109,8 @@ export function useFollow(here: RunHere): Follow {
     async doAndLook(act) {
       if (await acts.do(act)) lookAround()
     },
-    async takeBack() {
-      const last = acts.last.value
-      if (last && await acts.do({ v: 1, kind: 'taken-back', eventId: last.id })) lookAround()
+    async takeBack({ id }) {
+      if (await acts.do({ v: 1, kind: 'taken-back', eventId: id })) lookAround()
     },
   }
 }

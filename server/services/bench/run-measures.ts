@@ -37,7 +37,7 @@ export async function sampleOf(tx: Ctx, schemeId: string): Promise<{ record: Sam
   if (!found) return undefined
   const { measure, number, byName } = found
   return {
-    record: { measureId: measure.id, run: { id: measure.runId, number }, piece: measure.piece, by: personOf(measure.measuredBy, byName), at: measure.measuredAt.toISOString() },
+    record: { measureId: measure.id, run: { id: measure.runId, number }, piece: measure.piece, photoId: measure.photoId, by: personOf(measure.measuredBy, byName), at: measure.measuredAt.toISOString() },
     zones: measure.zones,
   }
 }
