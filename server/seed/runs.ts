@@ -46,7 +46,8 @@ export async function runDemo(bench: Ctx, wall: readonly PublishedDemo[], now: D
     if (!finish) throw new Error(`The demo has no finish called ${plan.finish}.`)
     const run = await startRun(bench, { schemeId: finish.schemeId, revision: finish.revision.number, pieces: plan.pieces })
     const acts = actsOf(plan, finish)
-    const start = now.getTime() - plan.hoursAgo * 3_600_000
+    // Long enough ago that nothing of it lies ahead, however many acts it has.
+    const start = now.getTime() - Math.max(plan.hoursAgo * 60, acts.length * PACE) * 60_000
     // It began when its first act was done, which the service cannot know of a run of the past.
     await inTransaction(bench, tx => tx.db.update(runs).set({ startedAt: new Date(start) }).where(eq(runs.id, run.id)))
     const events = acts.map((act, i): RunEvent => ({ id: randomUUID(), doneAt: new Date(start + i * PACE * 60_000).toISOString(), act }))

@@ -4,6 +4,10 @@ import { StoredOptics } from '#shared/shelf/stored-optics'
 
 const Srgb = z.string().regex(/^#[0-9a-f]{6}$/)
 
+/** How sure a swatch's colour is: half of all swatches sprayed so lie within `typical` of it, nineteen in twenty within `most`, CIEDE2000. */
+export const SwatchSpread = z.object({ typical: z.number(), most: z.number() })
+export type SwatchSpread = z.output<typeof SwatchSpread>
+
 /** How a paint looks by itself: what a swatch shows. */
 export const PaintSwatches = z.object({
   /** Many passes: its own colour. */
@@ -18,6 +22,10 @@ export const PaintSwatches = z.object({
   words: z.string(),
   /** CIELAB of the masstone (of the face, for a flake), D65. */
   lab: z.tuple([z.number(), z.number(), z.number()]),
+  /** How sure the two swatches are, at two passes by hand. */
+  sure: z.object({ overBlack: SwatchSpread, overWhite: SwatchSpread }).optional(),
+  /** A screen cannot show its own colour and draws it paler. */
+  unshown: z.boolean().optional(),
 })
 export type PaintSwatches = z.output<typeof PaintSwatches>
 
@@ -39,7 +47,11 @@ export const PaintView = PaintDraft.extend({
 export type PaintView = z.output<typeof PaintView>
 
 /** A row of the shelf: a paint without its spectra. */
-export const PaintListItem = PaintView.omit({ optics: true, note: true }).extend({ schemes: z.number().int() })
+export const PaintListItem = PaintView.omit({ optics: true, note: true }).extend({
+  schemes: z.number().int(),
+  /** Bottles of it in use: retired ones do not count. */
+  bottles: z.number().int(),
+})
 export type PaintListItem = z.output<typeof PaintListItem>
 
 /** Where a paint is used. */

@@ -12,6 +12,8 @@ export interface TestServer {
   url: string
   /** Sends a request as our own pages send it: same origin, JSON where the body is an object. */
   ask: (method: string, path: string, options?: AskOptions) => Promise<Response>
+  /** Tells it to stop, as whoever runs it does, and waits until its process has ended; answers with its exit code. */
+  stop: () => Promise<number | null>
 }
 
 export interface AskOptions {
@@ -44,6 +46,7 @@ export async function testServer(environment: Record<string, string> = {}): Prom
   await listening(child, `${url}/api/session`, said)
   return {
     url,
+    stop: () => stopped(child),
     async ask(method, path, { as, body, headers } = {}) {
       const isPlain = body === undefined || body instanceof Uint8Array || body instanceof FormData || typeof body === 'string'
       return fetch(new URL(path, url), {
@@ -69,12 +72,16 @@ export async function cookieOf({ sessionId }: Pick<PersonCtx, 'sessionId'>): Pro
 }
 
 afterAll(async () => {
-  await Promise.all(running.splice(0).map(child => new Promise<void>((resolve) => {
-    if (child.exitCode !== null || child.signalCode !== null) return resolve()
-    child.once('exit', () => resolve())
-    child.kill('SIGTERM')
-  })))
+  await Promise.all(running.splice(0).map(stopped))
 })
+
+function stopped(child: ChildProcess): Promise<number | null> {
+  return new Promise((resolve) => {
+    if (child.exitCode !== null || child.signalCode !== null) return resolve(child.exitCode)
+    child.once('exit', code => resolve(code))
+    child.kill('SIGTERM')
+  })
+}
 
 async function listening(child: ChildProcess, url: string, said: string[]): Promise<void> {
   for (let patience = 0; patience < 400; patience++) {

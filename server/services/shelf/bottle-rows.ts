@@ -16,6 +16,9 @@ export const takenFromBottle = sql<number>`${usedOf}`
 export const leftOfPaint = sql<number>`coalesce((select sum(greatest(0, b.ml + b.used_before - coalesce((select sum(u.ml) from ${bottleUses} u where u.bottle_id = b.id), 0)))
   from ${bottles} b where b.paint_id = ${paints.id} and b.state <> 'retired'), 0)`
 
+/** How many bottles of a paint are in use: not retired. For a query on `paints`. */
+export const bottlesOfPaintInUse = sql<number>`(select count(*)::int from ${bottles} b where b.paint_id = ${paints.id} and b.state <> 'retired')`
+
 const COLUMNS = {
   id: bottles.id, paintId: bottles.paintId, code: bottles.code, lot: bottles.lot, ml: leftOfBottle,
   state: bottles.state, openedOn: bottles.openedOn, version: bottles.version,

@@ -4,7 +4,7 @@ import { inTransaction } from '#server/services/in-transaction'
 import { assertMay } from '#server/services/people/assert-may'
 import { paintOptics, paints } from '#server/db/tables'
 import type { PaintListItem } from '#shared/shelf/paint-view'
-import { leftOfPaint } from './bottle-rows'
+import { bottlesOfPaintInUse, leftOfPaint } from './bottle-rows'
 import { paintListItem } from './paint-view'
 import { renewOptics } from './renew-optics'
 
@@ -16,10 +16,10 @@ export async function listPaints(ctx: Ctx): Promise<PaintListItem[]> {
     const used = sql<number>`(select count(*)::int from schemes s
       where s.workshop_id = ${tx.workshopId} and not s.retired
         and jsonb_path_exists(s.draft, '$.stack[*].coat.mix.parts[*] ? (@.paintId == $id)', jsonb_build_object('id', ${paints.id})))`
-    const rows = await tx.db.select({ paint: paints, optics: paintOptics.data, schemes: used, volumeLeft: leftOfPaint })
+    const rows = await tx.db.select({ paint: paints, optics: paintOptics.data, schemes: used, bottles: bottlesOfPaintInUse, volumeLeft: leftOfPaint })
       .from(paints).innerJoin(paintOptics, eq(paintOptics.id, paints.opticsId))
       .where(eq(paints.workshopId, tx.workshopId))
       .orderBy(asc(paints.name), asc(paints.id))
-    return rows.map(row => paintListItem({ ...row.paint, volumeLeft: row.volumeLeft }, row.optics, row.schemes, tx.role))
+    return rows.map(row => paintListItem({ ...row.paint, volumeLeft: row.volumeLeft }, row.optics, row.schemes, row.bottles, tx.role))
   })
 }

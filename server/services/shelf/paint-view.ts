@@ -39,7 +39,7 @@ export function paintView(row: PaintRow, optics: StoredOptics, role: Role): Pain
 }
 
 /** A row of the shelf: what the table shows, without spectra and notes. */
-export function paintListItem(row: PaintRow, optics: StoredOptics, schemes: number, role: Role): PaintListItem {
+export function paintListItem(row: PaintRow, optics: StoredOptics, schemes: number, bottles: number, role: Role): PaintListItem {
   const { optics: _spectra, note: _note, ...shown } = paintView(row, optics, role)
-  return { ...shown, schemes }
+  return { ...shown, schemes, bottles }
 }

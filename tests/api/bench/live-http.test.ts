@@ -50,6 +50,21 @@ class Reader {
 
 const ids = (told: Told | null) => told?.data.events?.map(event => event.id)
 
+describe('a server that is told to stop while somebody follows a run', () => {
+  it('ends the stream and its process, and is not held up for the hours a stream may last', async () => {
+    const server = await testServer()
+    const { ctx } = await testWorkshop()
+    const { run } = await testRun(ctx)
+    const reader = await Reader.open(server, ctx, run.id)
+    await reader.next()
+    const stopped = server.stop()
+    // A stream that held it up would run into the end of this test.
+    expect(await reader.next().catch(() => null)).toBeNull()
+    await stopped
+    await expect(server.ask('GET', '/api/session')).rejects.toThrow()
+  }, 30_000)
+})
+
 describe('two painters on two processes', () => {
   it('see each other\'s acts as they are done, and nothing twice after a break', async () => {
     const { ctx, workshopId } = await testWorkshop()

@@ -6,7 +6,7 @@ const paint = (name: string, more: Partial<PaintListItem> = {}): PaintListItem =
   id: name, opticsId: name, name, kind: 'opaque', base: 'water', known: { how: 'masstone-hide', masstone: [50, 0, 0], passesToHide: 4 },
   reducerPer100: 25, filmPerPass: 4, volumeSolids: 25, density: 1.05, restMinutes: 5, hazards: [], volumeLeft: 30,
   swatches: { masstone: '#777777', overBlack: '#777777', overWhite: '#777777', words: 'mid grey', lab: [50, 0, 0] },
-  trust: { level: 2, words: '' }, retired: false, version: 1, changedAt: '2026-01-01T00:00:00Z', schemes: 0, ...more,
+  trust: { level: 2, words: '' }, retired: false, version: 1, changedAt: '2026-01-01T00:00:00Z', schemes: 0, bottles: 1, ...more,
 })
 const coloured = (name: string, lab: [number, number, number], words: string) =>
   paint(name, { swatches: { masstone: '#777777', overBlack: '#777777', overWhite: '#777777', words, lab } })
