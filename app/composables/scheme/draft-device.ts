@@ -22,9 +22,16 @@ export type DraftDevice = IDBPDatabase<DraftSchema>
 
 const NAME = 'countershade-drafts'
 let opened: Promise<DraftDevice> | undefined
+let isShut = false
 
-/** The drawer, opened once a page. @throws {DOMException} where the browser keeps nothing */
-export function draftDevice(): Promise<DraftDevice> {
+/** Nothing more is kept by this page: whoever worked on it signs out. */
+export function shutDraftDevice(): void {
+  isShut = true
+}
+
+/** The drawer, opened once a page. @throws {DOMException} where the browser keeps nothing, or when it was shut */
+export async function draftDevice(): Promise<DraftDevice> {
+  if (isShut) throw new DOMException('The drafts of this page were taken from the device.', 'InvalidStateError')
   opened ??= openDraftDevice().catch((error: unknown) => {
     opened = undefined
     throw error

@@ -1,7 +1,8 @@
 import 'fake-indexeddb/auto'
 import { beforeEach, describe, expect, it } from 'vitest'
-import { type DraftDevice, openDraftDevice } from '~/composables/scheme/draft-device'
+import { type DraftDevice, draftDevice, openDraftDevice } from '~/composables/scheme/draft-device'
 import { draftShelf, UNDO_KEPT_MS } from '~/composables/scheme/draft-shelf'
+import { draftsOnlyHere, emptyDrafts } from '~/composables/scheme/empty-drafts'
 import { type KeptDraft, openingOf } from '~/composables/scheme/kept-draft'
 import { sameValue } from '#shared/scheme/canonical'
 import { record, startHistory, undo } from '#shared/scheme/history'
@@ -101,6 +102,16 @@ describe('drafts on the device', () => {
       expect(await tab('one').read('s9')).toBeNull()
     }
   })
+})
+
+it('signing out takes every draft from the device, and first says how many are nowhere else', async () => {
+  const here = await draftDevice()
+  const shelf = draftShelf({ open: draftDevice, tab: { name: 'one', isOpen: async () => true }, personId: 'ann', now: () => now, old: { getItem: () => null, removeItem: () => undefined } })
+  await shelf.write('s1', draft(1))
+  await shelf.write('s2', draft(2, { isUnsaved: false }))
+  expect(await draftsOnlyHere()).toBe(1)
+  await emptyDrafts()
+  expect([await draftsOnlyHere(), await here.count('slots')]).toEqual([0, 0])
 })
 
 describe('opening a scheme', () => {
