@@ -5,6 +5,9 @@ import { SvgRefusal, SVG_LIMITS } from './svg-refusal'
 /** A straight piece to a place, or a curve by two handles to a place. */
 export type PathPiece = readonly [to: FlatPoint] | readonly [first: FlatPoint, second: FlatPoint, to: FlatPoint]
 
+/** The last handle of a curve, which a shorthand mirrors. */
+type Handle = { point: FlatPoint, of: 'C' | 'Q' } | null
+
 /** One line of a path, in the drawing's own units. */
 export interface PathLine { start: FlatPoint, pieces: PathPiece[] }
 
@@ -22,7 +25,7 @@ export function readPathData(data: string): PathLine[] {
   let at = 0
   let [x, y] = [0, 0]
   let line: PathLine | null = null
-  let handle: { point: FlatPoint, of: 'C' | 'Q' } | null = null
+  let handle: Handle = null
   let command = ''
 
   const skip = () => {
@@ -60,8 +63,9 @@ export function readPathData(data: string): PathLine[] {
     const numbers = Array.from({ length: ARGUMENTS[upper] ?? 0 }, (_, i) => read(upper === 'A' && (i === 3 || i === 4) ? FLAG : NUMBER))
     const place = (i: number): FlatPoint => [ox + (numbers[i] ?? 0), oy + (numbers[i + 1] ?? 0)]
     const here: FlatPoint = [x, y]
-    const mirrored = (of: 'C' | 'Q'): FlatPoint => handle?.of === of ? [2 * x - handle.point[0], 2 * y - handle.point[1]] : here
-    let next: typeof handle = null
+    const last: Handle = handle
+    const mirrored = (of: 'C' | 'Q'): FlatPoint => last?.of === of ? [2 * x - last.point[0], 2 * y - last.point[1]] : here
+    let next: Handle = null
     switch (upper) {
       case 'M':
         ;[x, y] = place(0)

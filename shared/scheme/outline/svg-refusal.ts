@@ -20,12 +20,12 @@ const REFERENCE = 'It refers to something outside its outlines (a link, a copy o
 const PAINT_REFERENCE = 'It is filled by a reference (a gradient, a pattern or a file). Give its outlines a plain fill, and save it as plain SVG.'
 const LETTERS = 'It has letters in it. Turn them into paths first: a letter is no outline until then.'
 
-const REFUSED: Readonly<Record<string, string>> = {
+const REFUSED: ReadonlyMap<string, string> = new Map(Object.entries({
   script: SCRIPT, handler: SCRIPT, listener: SCRIPT, foreignObject: SCRIPT, iframe: SCRIPT,
   animate: SCRIPT, animateTransform: SCRIPT, animateMotion: SCRIPT, set: SCRIPT,
   use: REFERENCE, image: REFERENCE, a: REFERENCE, feImage: REFERENCE, video: REFERENCE, audio: REFERENCE,
   text: LETTERS, textPath: LETTERS, tspan: LETTERS,
-}
+}))
 
 /** Refuses a file before it is parsed: by its size, and for what only markup has. */
 export function refuseText(text: string): void {
@@ -44,7 +44,7 @@ export function refuseNodes(root: SvgNode): void {
     count++
     if (count > SVG_LIMITS.elements) throw new SvgRefusal(`It has more than ${SVG_LIMITS.elements} parts. Simplify it first.`)
     if (deep > SVG_LIMITS.deep) throw new SvgRefusal('Its groups are nested too deep. Ungroup it, and save it as plain SVG.')
-    const because = REFUSED[node.name]
+    const because = REFUSED.get(node.name)
     if (because) throw new SvgRefusal(because)
     if (node.name === 'svg' && deep > 0) throw new SvgRefusal('It has a drawing within the drawing. Ungroup it, and save it as plain SVG.')
     refuseAttributes(node)

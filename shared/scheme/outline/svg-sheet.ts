@@ -8,7 +8,7 @@ const MM: Readonly<Record<string, number>> = { 'mm': 1, 'cm': 10, 'Q': 0.25, 'in
 export function lengthOr(written: string | undefined, usual: number): number {
   if (written === undefined || written.trim() === '' || written === 'auto') return usual
   const [, figure, unit] = /^\s*([+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?)\s*([a-zA-Z%]*)\s*$/i.exec(written) ?? []
-  const mm = MM[unit ?? '']
+  const mm = Object.hasOwn(MM, unit ?? '') ? MM[unit ?? ''] : undefined
   if (figure === undefined || mm === undefined) throw new SvgRefusal(`A length in it cannot be read: “${written.slice(0, 20)}”.`)
   return Number(figure) * (mm / MM.px!)
 }
