@@ -9,6 +9,7 @@ import { blanks, masks, paintOptics, paints, revisions } from '#server/db/tables
 import { type FilePicture, type FileRevision, SCHEME_FILE_FORMAT, SCHEME_FILE_ROOM, SCHEME_FILE_VERSION, type SchemeFile } from '#shared/files/scheme-file'
 import { ENGINE_VERSION } from '#shared/optics/engine-version'
 import type { Look } from '#shared/picture/look'
+import type { SchemeBody } from '#shared/scheme/body'
 import type { Materials } from '#shared/scheme/materials'
 import { usedMaterials, usedPaintIds } from '#shared/scheme/used-materials'
 import type { StoredOptics } from '#shared/shelf/stored-optics'
@@ -72,7 +73,7 @@ async function fileOf(tx: Ctx, scheme: SchemeRow, kept: readonly RevisionRow[], 
 }
 
 /** A mask whose origin is not among the workshop's own says nothing about one. */
-function withKnownMasks<B extends SchemeFile['draft']>(body: B, own: readonly { id: string }[]): B {
+function withKnownMasks(body: SchemeBody, own: readonly { id: string }[]): SchemeBody {
   return { ...body, masks: body.masks.map(mask => own.some(each => each.id === mask.fromMaskId) ? mask : { ...mask, fromMaskId: null }) }
 }
 
