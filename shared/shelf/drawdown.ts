@@ -12,6 +12,8 @@ export interface Drawn {
   hex: string
   lab: Lab
   words: string
+  /** A screen cannot show it: say so beside it. */
+  outOfGamut: boolean
 }
 
 /** One ground of a card at some passes: what is seen straight on, and a flake's face and flop. */
@@ -57,6 +59,6 @@ export function drawnLab(lab: Lab): Drawn {
   return bareGround([Math.min(100, lab[0]), lab[1], lab[2]])
 }
 
-function drawn({ lab, srgb }: Pick<Colour, 'lab' | 'srgb'>): Drawn {
-  return { hex: hexFromSrgb([...srgb]), lab: [...lab], words: colourWords(lab) }
+function drawn({ lab, srgb, outOfGamut }: Pick<Colour, 'lab' | 'srgb' | 'outOfGamut'>): Drawn {
+  return { hex: hexFromSrgb([...srgb]), lab: [...lab], words: colourWords(lab), outOfGamut }
 }

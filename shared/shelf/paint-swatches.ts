@@ -1,6 +1,9 @@
-import type { PaintSwatches } from './paint-view'
+import type { PaintSwatches, SwatchSpread } from './paint-view'
 import { cardOf, drawnOver, type DrawnOver } from './drawdown'
+import { groundFromLab } from '#shared/optics/known-film'
 import type { PaintOptics } from '#shared/optics/paint-optics'
+import { promiseSpread } from '#shared/optics/spread'
+import type { Lab } from './paint'
 
 const CARD_PASSES = 2
 /** So many passes hide any ground that the paint can hide. */
@@ -19,7 +22,15 @@ export function paintSwatches(optics: PaintOptics): PaintSwatches {
     ...(overBlack.face && overBlack.flop ? { face: overBlack.face.hex, flop: overBlack.flop.hex } : {}),
     words: own.words,
     lab: own.lab,
+    sure: { overBlack: swatchSpread(optics, card.black), overWhite: swatchSpread(optics, card.white) },
+    ...(own.outOfGamut ? { unshown: true } : {}),
   }
+}
+
+/** How far off two passes by hand over one ground of a card may come out. */
+function swatchSpread(optics: PaintOptics, ground: Lab): SwatchSpread {
+  const { typical, most } = promiseSpread({ ground: groundFromLab(ground), coats: [{ optics, passes: CARD_PASSES }], finish: 'gloss' })
+  return { typical, most }
 }
 
 /** A flake is its face, a see-through paint its look over white, anything else its masstone. */

@@ -15,7 +15,7 @@ export function paintTrust(known: PaintKnown, optics: Pick<StoredOptics, 'clippe
 function byHow(known: PaintKnown, { fluorescent }: Pick<StoredOptics, 'fluorescent'>): PaintTrust {
   switch (known.how) {
     case 'two-swatches':
-      return { level: 3, words: 'Known over black and over white: typically within 2, mostly within 6.' }
+      return { level: 3, words: 'Known over black and over white, which tells the most about a paint.' }
     case 'masstone-hide':
       return { level: 2, words: 'Known by its own colour and its passes to hide: good for opaque paint, a guess for a see-through one.' }
     case 'dye-over-white':

@@ -1,3 +1,5 @@
+import { spreadWords } from '#shared/optics/spread-words'
+import type { PaintSwatches } from './paint-view'
 import type { PaintBase, PaintKind, PaintKnown, TwoPart } from './paint'
 
 /** A paint's carrier as a painter says it. */
@@ -40,6 +42,13 @@ export function knownWords(known: PaintKnown): string {
   const words = KNOWN_WORDS[known.how]
   if (known.how === 'two-swatches' || known.how === 'dye-over-white') return `${words}, ${passesWords(known.passes)}`
   return words
+}
+
+/** How sure a paint's swatches are, the less sure of the two: "Typically within 2, mostly within 6."; empty where it is not known. */
+export function sureWords({ sure }: Pick<PaintSwatches, 'sure'>): string {
+  if (!sure) return ''
+  const worse = sure.overBlack.most > sure.overWhite.most ? sure.overBlack : sure.overWhite
+  return spreadWords({ ...worse, causes: [] })
 }
 
 /** A count of passes in words. */

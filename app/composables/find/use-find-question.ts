@@ -3,6 +3,7 @@ import { watchDebounced } from '@vueuse/core'
 import { useFindCoat, type UseFindCoat } from './use-find-coat'
 import type { SureCoat } from '#shared/optics/find-spread'
 import type { Light } from '#shared/optics/lights'
+import type { SeenLamp } from '#shared/optics/seen-wish'
 import type { Look } from '#shared/picture/look'
 import type { ZoneColour } from '#shared/picture/zone-colours'
 import { applyEdit } from '#shared/scheme/edits'
@@ -21,6 +22,8 @@ export interface FindGiven {
   paints: () => readonly PaintListItem[]
   zones: () => readonly ZoneColour[]
   zone: () => string
+  /** The lamp it is looked at by; daylight when left out. */
+  lamp?: () => SeenLamp | undefined
   coatId: () => string | null
 }
 
@@ -68,7 +71,9 @@ export function useFindQuestion(given: FindGiven): FindDesk {
   const place = ref<StackPlace>('top')
   const clear = ref(true)
   const partsMost = ref<1 | 2 | 3>(2)
-  const second = ref<Light>('A')
+  // A colour is wanted as daylight shows it; whoever looks by another lamp wants to know how it holds there.
+  const lamp = given.lamp?.()
+  const second = ref<Light>(typeof lamp === 'string' && lamp !== 'D65' ? lamp : 'A')
   const withAbsent = ref(false)
   const chosenKey = ref<string | null>(null)
 

@@ -4,6 +4,7 @@ import { opticsOfKnown } from '#shared/shelf/optics-of-known'
 import { PaintDraft } from '#shared/shelf/paint'
 import { paintSwatches } from '#shared/shelf/paint-swatches'
 import { paintTrust } from '#shared/shelf/paint-trust'
+import { sureWords } from '#shared/shelf/paint-words'
 
 const swatchesOf = (name: DemoPaintName) => paintSwatches(opticsOfKnown(demoPaint(name).known))
 
@@ -28,6 +29,19 @@ describe('the swatches of a paint', () => {
   it('show a pearl brighter at its face than at its flop', () => {
     const silver = swatchesOf('Silver pearl')
     expect(lightness(silver.face!)).toBeGreaterThan(lightness(silver.flop!) + 0.15)
+  })
+
+  it('say how sure they are: a hiding red more than a pearl that was worked out from its flake', () => {
+    const red = swatchesOf('Signal red'), pearl = swatchesOf('Silver pearl')
+    expect(red.sure!.overWhite.most).toBeGreaterThan(red.sure!.overWhite.typical)
+    expect(pearl.sure!.overBlack.typical).toBeGreaterThan(red.sure!.overWhite.typical)
+    expect(sureWords(red)).toMatch(/^Typically within [\d.]+, mostly within \d+\.$/)
+    expect(sureWords({})).toBe('')
+  })
+
+  it('say which colours a screen cannot show', () => {
+    expect(paintSwatches(opticsOfKnown({ how: 'dye-over-white', overWhite: [60, 85, 95], passes: 2 })).unshown).toBe(true)
+    expect(swatchesOf('Silver pearl').unshown).toBeUndefined()
   })
 
   it('put the masstone where it was typed', () => {
