@@ -20,6 +20,11 @@ async function hold(name: string): Promise<boolean> {
   })
 }
 
+/** After a reload the page before may take a moment to let go of its name. */
+const lettingGo = () => new Promise<void>((resolve) => {
+  window.setTimeout(resolve, 200)
+})
+
 let claimed: Promise<DraftTab> | undefined
 
 /**
@@ -38,7 +43,7 @@ async function claimTab(): Promise<DraftTab> {
     const { held = [] } = await navigator.locks.query()
     return held.some(lock => lock.name === lockOf(name))
   }
-  if (remembered !== null && await hold(remembered)) return { name: remembered, isOpen }
+  if (remembered !== null && (await hold(remembered) || (await lettingGo(), await hold(remembered)))) return { name: remembered, isOpen }
   const name = rename()
   await hold(name)
   return { name, isOpen }

@@ -198,8 +198,19 @@ export function workOnDraft(scheme: SchemeView, draft: OpenDraft, ports: DraftPo
     undoWords: computed(() => history.value.past.at(-1)?.words ?? null),
     redoWords: computed(() => history.value.future[0]?.words ?? null),
     async publish(note) {
+      const seen = takenIn.value
       await saveAll()
-      return ports.publish(note, draft.keeper?.version() ?? scheme.version)
+      const version = draft.keeper?.version() ?? scheme.version
+      // Nobody freezes what they have not looked at.
+      if (takenIn.value !== seen) throw new Problem({ code: 'scheme/changed-meanwhile', version })
+      try {
+        return await ports.publish(note, version)
+      }
+      catch (error) {
+        const problem = problemOf(error)
+        if (problem?.code === 'scheme/changed-meanwhile') draft.keeper?.heard(problem.version)
+        throw error
+      }
     },
     async restore(number) {
       if (!mayChange) throw new Problem({ code: 'auth/not-allowed', action: 'scheme:change' })

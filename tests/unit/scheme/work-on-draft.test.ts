@@ -302,6 +302,20 @@ describe('two painters on one draft', () => {
     expect(rows(server.draft)).toEqual([1, 3, 2])
   })
 
+  it('publish nothing they have not looked at: what the other saved comes in first', async () => {
+    const ann = await painter(server)
+    await server.save(body(9, 1), 1)
+    await expect(ann.publish('done')).rejects.toMatchObject({ data: { code: 'scheme/changed-meanwhile' } })
+    await ann.wait()
+    expect(rows(ann.body.value)).toEqual([9, 1])
+    ann.lay(2)
+    await server.save(body(9, 8, 1), server.version)
+    await expect(ann.publish('done')).rejects.toMatchObject({ data: { code: 'scheme/changed-meanwhile' } })
+    expect(server.published).toEqual([])
+    await ann.publish('done')
+    expect(server.published.map(each => rows(each.draft))).toEqual([[9, 8, 1, 2]])
+  })
+
   it('are not asked when both did the same, or when only the name was changed', async () => {
     const ann = await painter(server)
     server.version = 2
