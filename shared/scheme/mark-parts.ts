@@ -1,4 +1,4 @@
-import type { Mark, Place } from './mark'
+import type { Mark, OnlySide, Place } from './mark'
 
 /** One thing drawn by hand, by its places in a coat: which mark, and which stroke or dot of it. */
 export interface PartAt { mark: number, part: number }
@@ -15,6 +15,8 @@ export interface MarkPart {
   isClosed: boolean
   /** mm at its start and its end: a gun's bell (σ), a brush's half width, a dot's radius; a ray's at a body of 100 mm. */
   width: readonly [number, number]
+  /** The one flank that carries it; both when there is none. */
+  only?: OnlySide
 }
 
 /** A coat carries so many marks (a sheet of strokes is one). */
@@ -23,13 +25,14 @@ export const MARKS_MAX = 60
 /** Everything drawn by hand that has places of its own; what falls from a seed has none. */
 export function markParts(marks: readonly Mark[]): MarkPart[] {
   return marks.flatMap((mark, place): MarkPart[] => {
+    const only = 'only' in mark && mark.only ? { only: mark.only } : {}
     switch (mark.kind) {
       case 'strokes': return mark.strokes.map(({ points, width }, part) => ({
-        at: { mark: place, part }, kind: mark.with === 'brush' ? 'brush line' : Math.abs(width[0] - width[1]) < 1e-9 ? 'airbrush line' : 'dagger stroke', points, isClosed: false, width,
+        at: { mark: place, part }, kind: mark.with === 'brush' ? 'brush line' : Math.abs(width[0] - width[1]) < 1e-9 ? 'airbrush line' : 'dagger stroke', points, isClosed: false, width, ...only,
       }))
-      case 'dots': return mark.dots.map(([u, v, radius], part) => ({ at: { mark: place, part }, kind: 'dot', points: [[u, v]], isClosed: false, width: [radius, radius] }))
-      case 'fan': return [{ at: { mark: place, part: 0 }, kind: 'fin rays', points: [mark.root], isClosed: false, width: [mark.width[0] ?? 0.5, mark.width[1] ?? 0.5] }]
-      case 'outline': return [{ at: { mark: place, part: 0 }, kind: 'filled shape', points: mark.points, isClosed: true, width: [mark.soft, mark.soft] }]
+      case 'dots': return mark.dots.map(([u, v, radius], part) => ({ at: { mark: place, part }, kind: 'dot', points: [[u, v]], isClosed: false, width: [radius, radius], ...only }))
+      case 'fan': return [{ at: { mark: place, part: 0 }, kind: 'fin rays', points: [mark.root], isClosed: false, width: mark.width, ...only }]
+      case 'outline': return [{ at: { mark: place, part: 0 }, kind: 'filled shape', points: mark.points, isClosed: true, width: [mark.soft, mark.soft], ...only }]
       case 'scatter':
       case 'worm tracks':
       case 'torn sponge':
@@ -86,6 +89,15 @@ export type Fan = Extract<Mark, { kind: 'fan' }>
 /** The marks with one fan otherwise. */
 export function withFan(marks: readonly Mark[], at: PartAt, change: Partial<Pick<Fan, 'count' | 'length' | 'angle'>>): Mark[] {
   return changed(marks, at, mark => mark.kind === 'fan' ? { ...mark, ...change } : mark)
+}
+
+/** The marks with the mark of one part on both flanks, or on one alone: strokes and dots of one sheet go together. */
+export function withSide(marks: readonly Mark[], at: PartAt, only: OnlySide): Mark[] {
+  return changed(marks, at, (mark) => {
+    if (mark.kind === 'scatter' || mark.kind === 'worm tracks' || mark.kind === 'torn sponge') return mark
+    const { only: _, ...both } = mark
+    return only ? { ...both, only } : both
+  })
 }
 
 /** The marks without one part; a mark left without any goes too. */

@@ -2,7 +2,7 @@ import { flatOf, heldPlace, placeOfFlat } from './flat-blank'
 import type { PreparedBlank } from '#shared/blank/prepared-blank'
 import { gillEdge } from '#shared/blank/zones'
 import { placeInSideView } from '#shared/blank/surface-coordinates'
-import type { Mark, Place } from '#shared/scheme/mark'
+import type { Mark, OnlySide, Place } from '#shared/scheme/mark'
 import { layDot, layMark, layStrokes, type LaidMark } from '#shared/scheme/mark-lay'
 import { pressedEnds, strokeAlong, TRACE_TOLERANCE, tracedLine, type TracePoint } from '#shared/scheme/outline/trace'
 
@@ -19,6 +19,8 @@ export interface HandSettings {
   /** Rays of a fan, and the angle they spread over, degrees. */
   rays: number
   spread: number
+  /** The one flank it is drawn on; both when there is none. */
+  only?: OnlySide
 }
 
 export const USUAL_SETTINGS: Readonly<Record<HandTool, HandSettings>> = {
@@ -43,22 +45,24 @@ export function draw(blank: PreparedBlank, marks: readonly Mark[], tool: HandToo
   const [first] = trace
   const last = trace.at(-1)
   if (!first || !last) return { ok: false, because: NOWHERE }
-  if (tool === 'dot') return layDot(marks, [...first.place, pressedEnds([first], settings.width)[0]], settings.soft)
+  if (tool === 'dot') return layDot(marks, [...first.place, pressedEnds([first], settings.width)[0]], settings.soft, settings.only)
   if (tool === 'fin rays') return drawFan(blank, marks, settings, first, last)
   const line = tracedLine(trace, tool === 'filled shape')
   if (!line) return { ok: false, because: NOWHERE }
   const said = line.tolerance > TRACE_TOLERANCE ? { said: `A long line: it is kept within ${line.tolerance} mm of your hand.` } : {}
   const [start, end] = pressedEnds(trace, settings.width)
   switch (tool) {
-    case 'airbrush line': return { ...layStrokes(marks, 'airbrush', [strokeAlong(line.points, [start, end])]), ...said }
-    case 'dagger stroke': return { ...layStrokes(marks, 'airbrush', [strokeAlong(line.points, [start, Math.max(0.05, end * DAGGER.thin)], DAGGER.amount)]), ...said }
-    case 'brush line': return { ...layStrokes(marks, 'brush', [strokeAlong(line.points, [start, end])]), ...said }
-    case 'filled shape': return { ...layMark(marks, { kind: 'outline', points: line.points, soft: settings.soft, wobble: 0, amount: 1 }), ...said }
+    case 'airbrush line': return { ...layStrokes(marks, 'airbrush', [strokeAlong(line.points, [start, end])], settings.only), ...said }
+    case 'dagger stroke': return { ...layStrokes(marks, 'airbrush', [strokeAlong(line.points, [start, Math.max(0.05, end * DAGGER.thin)], DAGGER.amount)], settings.only), ...said }
+    case 'brush line': return { ...layStrokes(marks, 'brush', [strokeAlong(line.points, [start, end])], settings.only), ...said }
+    case 'filled shape': return { ...layMark(marks, { kind: 'outline', points: line.points, soft: settings.soft, wobble: 0, amount: 1, ...sided(settings.only) }), ...said }
   }
 }
 
+const sided = (only: OnlySide) => only ? { only } : {}
+
 /** A fan from where the hand began toward where it ended; lengths and widths are kept at a body of 100 mm. */
-function drawFan(blank: PreparedBlank, marks: readonly Mark[], { width, rays, spread }: HandSettings, first: TracePoint, last: TracePoint): Drawn {
+function drawFan(blank: PreparedBlank, marks: readonly Mark[], { width, rays, spread, only }: HandSettings, first: TracePoint, last: TracePoint): Drawn {
   const [dx, dy] = [last.flat[0] - first.flat[0], last.flat[1] - first.flat[1]]
   const reach = Math.hypot(dx, dy)
   if (reach < 1) return { ok: false, because: 'Fin rays start at their root: press there, and draw out to the tip of the middle one.' }
@@ -68,7 +72,7 @@ function drawFan(blank: PreparedBlank, marks: readonly Mark[], { width, rays, sp
   const at100 = [width * scale, width * scale * 0.5].map(each => Math.max(0.02, Math.round(each * 1000) / 1000)) as [number, number] // two
   return layMark(marks, {
     kind: 'fan', root: first.place, count: rays, length: [toTenth(reach * scale), toTenth(reach * scale)],
-    angle: [toTenth(middle - spread / 2), toTenth(middle + spread / 2)], width: at100, amount: [...RAY_AMOUNT],
+    angle: [toTenth(middle - spread / 2), toTenth(middle + spread / 2)], width: at100, amount: [...RAY_AMOUNT], ...sided(only),
   })
 }
 
@@ -80,7 +84,7 @@ export type ReadyMark = typeof READY_MARKS[number]
 const EYE = { pupil: 0.5, rim: 0.09, ring: 1.0, places: 28 } as const
 
 /** Lays a mark where the blank says it belongs: behind the gill cover, or at the eye. An eye takes one coat for each of its colours. */
-export function layReady(blank: PreparedBlank, marks: readonly Mark[], what: ReadyMark): LaidMark {
+export function layReady(blank: PreparedBlank, marks: readonly Mark[], what: ReadyMark, only?: OnlySide): LaidMark {
   const { shape } = blank
   if (what === 'gill mark') {
     const { top, bottom } = shape.gill
@@ -88,14 +92,14 @@ export function layReady(blank: PreparedBlank, marks: readonly Mark[], what: Rea
       const v = top + (bottom - top) * i / 8
       return heldPlace([gillEdge(shape.gill, v), v])
     })
-    return layStrokes(marks, 'airbrush', [strokeAlong(points, [shape.length * 0.012, shape.length * 0.005], [1, 0.8])])
+    return layStrokes(marks, 'airbrush', [strokeAlong(points, [shape.length * 0.012, shape.length * 0.005], [1, 0.8])], only)
   }
   const { x, y, radius } = shape.eye
   const { u, v } = placeInSideView(blank, x, y, 1)
   const middle = heldPlace([u, v])
   switch (what) {
-    case 'iris': return layDot(marks, [...middle, radius], 0.05)
-    case 'pupil': return layDot(marks, [...middle, radius * EYE.pupil], 0.05)
+    case 'iris': return layDot(marks, [...middle, radius], 0.05, only)
+    case 'pupil': return layDot(marks, [...middle, radius * EYE.pupil], 0.05, only)
     case 'rim of the eye': {
       const [along, up] = flatOf(blank, middle)
       const ring = Array.from({ length: EYE.places + 1 }, (_, i): Place => {
@@ -103,7 +107,7 @@ export function layReady(blank: PreparedBlank, marks: readonly Mark[], what: Rea
         return placeOfFlat(blank, [along + radius * EYE.ring * Math.cos(angle), up + radius * EYE.ring * Math.sin(angle)])
       })
       const width = Math.max(0.05, radius * EYE.rim)
-      return layStrokes(marks, 'brush', [strokeAlong(ring, [width, width])])
+      return layStrokes(marks, 'brush', [strokeAlong(ring, [width, width])], only)
     }
   }
 }

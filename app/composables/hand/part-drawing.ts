@@ -81,9 +81,10 @@ export const WIDTH_WORDS: Readonly<Record<PartKind, readonly [start: string, end
 }
 
 /** A part in a few words: what it is, and where its middle lies. */
-export function partWords({ kind, points, width }: MarkPart): string {
+export function partWords({ kind, points, width, only }: MarkPart): string {
   const mean = (of: 0 | 1) => points.reduce((sum, place) => sum + place[of], 0) / Math.max(1, points.length)
   const where = `${Math.round(100 * mean(0))} % along, ${Math.round(100 * mean(1))} % down`
   const size = kind === 'dot' || kind === 'filled shape' || Math.abs(width[0] - width[1]) < 0.05 ? `${figure(width[0])} mm` : `${figure(width[0])} to ${figure(width[1])} mm`
-  return kind === 'filled shape' ? `Filled shape, ${where}` : `${kind.replace(/^./, first => first.toUpperCase())}, ${size}, ${where}`
+  const side = only ? `, ${only} side only` : ''
+  return kind === 'filled shape' ? `Filled shape, ${where}${side}` : `${kind.replace(/^./, first => first.toUpperCase())}, ${size}, ${where}${side}`
 }

@@ -5,7 +5,7 @@ import { partDrawer, type PartDrawing, partWords } from './part-drawing'
 import { useSpoken } from '~/composables/ui/use-spoken'
 import type { PreparedBlank } from '#shared/blank/prepared-blank'
 import type { DrawingPoint } from '#shared/blank/side-outline'
-import type { Mark, Place } from '#shared/scheme/mark'
+import type { Mark, OnlySide, Place } from '#shared/scheme/mark'
 import type { LaidMark } from '#shared/scheme/mark-lay'
 import { type Fan, partAt, type MarkPart, type PartAt, withFan, withoutPart, withPlaces, withWidth } from '#shared/scheme/mark-parts'
 import type { TracePoint } from '#shared/scheme/outline/trace'
@@ -23,6 +23,8 @@ export interface Hand {
   point: Ref<number>
   /** The line being drawn. */
   trace: ShallowRef<readonly TracePoint[]>
+  /** The one flank that is worked on; both when there is none. */
+  only: Ref<OnlySide>
   /** What was refused, or should be known about the last line; empty otherwise. */
   said: Ref<string>
   /** Adds to the line being drawn: a place in the drawing (mm, y down) and how hard it is pressed. */
@@ -66,6 +68,7 @@ export function provideHand(given: { blank: () => PreparedBlank, marks: () => re
   const point = ref(0)
   const trace = shallowRef<readonly TracePoint[]>([])
   const said = ref('')
+  const only = ref<OnlySide>()
   const part = computed(() => chosen.value && partAt(marks.value, chosen.value))
 
   watch(tool, (now) => {
@@ -90,10 +93,10 @@ export function provideHand(given: { blank: () => PreparedBlank, marks: () => re
     said.value = ''
     given.change(next)
   }
-  const lay = (line: readonly TracePoint[], by: HandTool) => take(draw(blank.value, marks.value, by, settingsOf[by], line))
+  const lay = (line: readonly TracePoint[], by: HandTool) => take(draw(blank.value, marks.value, by, { ...settingsOf[by], only: only.value }, line))
 
   const hand: Hand = {
-    blank, tool, chosen, part, point, trace, said,
+    blank, tool, chosen, part, point, trace, only, said,
     settings: computed(() => settingsOf[tool.value ?? lastTool.value]),
     drawings: computed(() => drawer.value(marks.value)),
     draws(at, pressure) {
@@ -105,7 +108,7 @@ export function provideHand(given: { blank: () => PreparedBlank, marks: () => re
       trace.value = []
       if (tool.value && line.length > 0) lay(line, tool.value)
     },
-    lays: what => take(layReady(blank.value, marks.value, what)),
+    lays: what => take(layReady(blank.value, marks.value, what, only.value)),
     types(from, to) {
       const by = tool.value ?? lastTool.value
       lay(typedTrace(blank.value, by, from, to), by)

@@ -6,7 +6,7 @@ import { builtInBlank } from '#shared/blank/built-in-blanks'
 import { prepareBlank } from '#shared/blank/prepared-blank'
 import { fanStrokes } from '#shared/picture/deposit/mark-map'
 import { Mark } from '#shared/scheme/mark'
-import { markParts } from '#shared/scheme/mark-parts'
+import { markParts, withSide } from '#shared/scheme/mark-parts'
 
 const blank = prepareBlank(builtInBlank('minnow-90'))
 
@@ -63,4 +63,15 @@ it('draws each part once for as long as its mark stands, wherever it comes to st
   expect(moved.map(one => one.part.at)).toEqual([{ mark: 1, part: 0 }])
   expect(moved[0]!.line).toBe(first!.line)
   expect(partWords(first!.part)).toMatch(/^Dagger stroke, 1\.1 to 0\.5 mm, \d+ % along, \d+ % down$/)
+})
+
+it('draws on one side apart from what both sides carry, and turns it to both and back', () => {
+  const trace = typedTrace(blank, 'airbrush line', [0.3, 0.4], [0.6, 0.5])
+  const both = draw(blank, [], 'airbrush line', USUAL_SETTINGS['airbrush line'], trace)
+  const left = draw(blank, both.ok ? both.marks : [], 'airbrush line', { ...USUAL_SETTINGS['airbrush line'], only: 'left' }, trace)
+  if (!left.ok) throw new Error(left.because)
+  expect(left.marks.map(mark => 'only' in mark ? mark.only : undefined)).toEqual([undefined, 'left'])
+  expect(partWords(markParts(left.marks)[1]!)).toMatch(/, left side only$/)
+  expect(withSide(withSide(left.marks, left.at, undefined), left.at, 'left')).toEqual(left.marks)
+  expect(left.marks.map(mark => Mark.parse(mark))).toEqual(left.marks)
 })
