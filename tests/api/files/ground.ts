@@ -56,7 +56,7 @@ export async function carriedScheme(ctx: Ctx, wish: Carried): Promise<string> {
     ...wish.eyes ? {} : { eyes: null },
     stack: wish.masked ? [{ act: 'fit', maskId }, ...laid, { act: 'lift', maskId }] : laid,
     masks: wish.masked ? [{ id: maskId, name: 'Net', form: NET, seed: 9, fromMaskId: net?.id ?? null }] : [],
-    ...wish.ahead ? { answered: [`not-on-shelf ${coats[0]!.id} ${paints[0]!.id}`] } : {},
+    ...wish.ahead ? { answered: [`not-on-shelf ${coats[0]!.id} ${coats[0]!.mix.parts[0]!.paintId}`] } : {},
   }
   const scheme = await createScheme(ctx, { name: wish.name, fish: 'Perch', blankId: blank.id, body })
   let { version } = scheme
