@@ -44,8 +44,13 @@ export interface Hand {
   /** Gives the chosen fan other rays. */
   spreads: (change: Partial<Pick<Fan, 'count' | 'length' | 'angle'>>) => void
   takesOut: () => void
+  /** Whether something done here can be taken back, and taking it back, step by step. */
+  canTakeBack: ComputedRef<boolean>
+  takesBack: () => void
 }
 
+/** Steps that can be taken back. */
+const PAST_MAX = 100
 const KEY: InjectionKey<Hand> = Symbol('hand')
 
 /** What the parts of the desk share. */
@@ -56,10 +61,10 @@ export function useHand(): Hand {
 }
 
 /** Lays the marks that are given on the desk, for everything below this component; what comes of the work is handed to `change`. */
-export function provideHand(given: { blank: () => PreparedBlank, marks: () => readonly Mark[], change: (marks: Mark[]) => void }): Hand {
+export function provideHand(work: { blank: () => PreparedBlank, marks: () => readonly Mark[], change: (marks: Mark[]) => void }): Hand {
   const { speak } = useSpoken()
-  const blank = computed(given.blank)
-  const marks = computed(() => toRaw(given.marks()).map(mark => toRaw(mark)))
+  const blank = computed(work.blank)
+  const marks = computed(() => toRaw(work.marks()).map(mark => toRaw(mark)))
   const drawer = computed(() => partDrawer(blank.value))
   const settingsOf = reactive(structuredClone(USUAL_SETTINGS) as Record<HandTool, HandSettings>)
   const tool = ref<HandTool | null>('airbrush line')
@@ -69,6 +74,9 @@ export function provideHand(given: { blank: () => PreparedBlank, marks: () => re
   const trace = shallowRef<readonly TracePoint[]>([])
   const said = ref('')
   const only = ref<OnlySide>()
+  /** What stood before each thing done here; it goes when somebody else changes the same marks meanwhile. */
+  const past = shallowRef<readonly (readonly Mark[])[]>([])
+  let given: readonly Mark[] = []
   const part = computed(() => chosen.value && partAt(marks.value, chosen.value))
 
   watch(tool, (now) => {
@@ -78,20 +86,29 @@ export function provideHand(given: { blank: () => PreparedBlank, marks: () => re
     point.value = 0
   })
 
+  function give(next: Mark[]) {
+    past.value = [...past.value, marks.value].slice(-PAST_MAX)
+    given = next
+    work.change(next)
+  }
+  watch(marks, (now) => {
+    if (now !== given && JSON.stringify(now) !== JSON.stringify(given)) past.value = []
+  })
+
   function take(laid: LaidMark & { said?: string }) {
     if (!laid.ok) {
       said.value = laid.because
       return
     }
     said.value = laid.said ?? ''
-    given.change(laid.marks)
+    give(laid.marks)
     chosen.value = laid.at
     const now = partAt(laid.marks, laid.at)
     if (now) speak(`Laid: ${partWords(now)}`)
   }
   const change = (next: Mark[]) => {
     said.value = ''
-    given.change(next)
+    give(next)
   }
   const lay = (line: readonly TracePoint[], by: HandTool) => take(draw(blank.value, marks.value, by, { ...settingsOf[by], only: only.value }, line))
 
@@ -135,6 +152,17 @@ export function provideHand(given: { blank: () => PreparedBlank, marks: () => re
       chosen.value = null
       change(withoutPart(marks.value, gone))
       if (was) speak(`Taken out: ${partWords(was)}`)
+    },
+    canTakeBack: computed(() => past.value.length > 0),
+    takesBack() {
+      const before = past.value.at(-1)
+      if (!before) return
+      past.value = past.value.slice(0, -1)
+      given = before
+      chosen.value = null
+      said.value = ''
+      work.change([...before])
+      speak('Taken back')
     },
   }
   provide(KEY, hand)
