@@ -63,7 +63,7 @@ export function useLaying(build: Build, buildUps: ComputedRef<readonly BuildUpVi
     }
   })
 
-  const buildUp = computed(() => buildUps.value.find(each => each.id === buildUpId.value) ?? null)
+  const buildUp = computed(() => buildUps.value.find(each => each.id === buildUpId.value && !each.retired) ?? null)
   const sequence = computed<BuildUpSequence | null>(() => {
     if (from.value === 'build-up') return buildUp.value?.sequence ?? null
     const body = from.value === 'here' ? build.draft.body.value : other.value?.draft
