@@ -58,6 +58,8 @@ export default defineNuxtConfig({
       },
     },
   },
+  // The turning view has a name of its own, so that a tablet at the bench can leave it out.
+  vite: { $client: { build: { rollupOptions: { output: { chunkFileNames: ({ name }) => name === 'turn-scene' ? '_nuxt/turn-scene-[hash].js' : '_nuxt/[hash].js' } } } } },
   typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
   telemetry: false,
   hooks: {
@@ -78,6 +80,8 @@ export default defineNuxtConfig({
     client: { registerPlugin: false },
     injectManifest: {
       globPatterns: ['**/*.{js,mjs,css,woff2,wasm,svg,webp}', 'icon-*.png'],
+      // Nothing is turned at the bench: a tablet need not hold three.js.
+      globIgnores: ['**/turn-scene-*.js'],
       maximumFileSizeToCacheInBytes: 6 * 1024 ** 2,
     },
     manifest: {

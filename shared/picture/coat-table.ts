@@ -6,7 +6,7 @@ import { flakeCoat } from '#shared/optics/flake-coat'
 import { FLAKE_TABLE_COSINES } from '#shared/optics/flake-table'
 import { meanFlake, meanFlakeInDiffuse } from '#shared/optics/mean-flake'
 import type { PaintOptics } from '#shared/optics/paint-optics'
-import { SURFACE_INSIDE, SURFACE_OUTSIDE } from '#shared/optics/surface'
+import { AIR_SURFACE, type SurfaceLoss } from '#shared/optics/surface'
 import { glowLevels, type GlowLevels } from './glow-levels'
 import { BANDS, fillBetween, LEVELS } from './level-table'
 
@@ -49,12 +49,12 @@ export interface CoatTable {
  *
  * @param passes passes where the deposit is thickest: level j stands for passes·(j/255)²
  */
-export function coatTable(paint: PaintOptics, passes: number): CoatTable {
+export function coatTable(paint: PaintOptics, passes: number, surface: Pick<SurfaceLoss, 'outside' | 'inside'> = AIR_SURFACE): CoatTable {
   const { K, S } = coefficientsIn(paint, 'picture16')
   const table: CoatTable = {
     R: new Float32Array(LEVELS * BANDS), T: new Float32Array(LEVELS * BANDS), Q: new Float32Array(LEVELS * BANDS), through: new Float32Array(LEVELS * BANDS), empty: 0,
   }
-  if (paint.flake) fillFlakes(table, paint.flake, K, S, passes)
+  if (paint.flake) fillFlakes(table, paint.flake, K, S, passes, (1 - surface.outside) * (1 - surface.inside))
   else fillFilm(table, K, S, passes)
   table.empty = emptyLevel(table)
   const glow = glowOf(paint)
@@ -81,7 +81,7 @@ function fillFilm({ R, T, Q, through }: CoatTable, K: Float64Array, S: Float64Ar
   }
 }
 
-function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64Array, passes: number): void {
+function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64Array, passes: number, crossing: number): void {
   const { R, T, Q, through } = table
   const rows = FLAKE_TABLE_COSINES.length
   const mirrored = new Float32Array(LEVELS * rows * BANDS), diffuse = new Float32Array(LEVELS * BANDS)
@@ -90,7 +90,6 @@ function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64A
     R: all.R.subarray(c * BANDS, (c + 1) * BANDS), T: all.T.subarray(c * BANDS, (c + 1) * BANDS),
   }))
   const even = meanFlakeInDiffuse(flake, 'picture16')
-  const surface = (1 - SURFACE_OUTSIDE) * (1 - SURFACE_INSIDE)
 
   for (let step = 0; step * FLAKE_STEP < LEVELS; step++) {
     const level = Math.min(LEVELS - 1, step * FLAKE_STEP)
@@ -112,7 +111,7 @@ function fillFlakes(table: CoatTable, flake: Flake, K: Float64Array, S: Float64A
       T[at] = t
       Q[at] = t * t - r * r
       through[at] = t * t
-      diffuse[at] = (1 - flake.edge) * surface * r
+      diffuse[at] = (1 - flake.edge) * crossing * r
     }
     angled.forEach((one, row) => {
       const lit = flakeCoat(one, flake.flakesPerPass, K, S, X)

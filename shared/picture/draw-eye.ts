@@ -1,9 +1,7 @@
 import type { DrawnEye } from '#shared/blank/drawn-parts'
-import { linearFromXyz } from '#shared/optics/screen-colour'
-import { xyzFromLab, type Lab } from '#shared/optics/colorimetry'
-import type { Eyes } from '#shared/scheme/body'
 import { layOver, type Canvas } from './canvas'
 import { noise2 } from './deposit/noise'
+import type { EyeColours } from './eye-colours'
 import { atNormal, type LightTables } from './light-tables'
 import { glossLight } from './paint-light'
 import { addGloss, tonePaint } from './tone'
@@ -28,15 +26,13 @@ const FOIL = 0.78
 /** An eye is polished: its highlight outshines the clear round it. */
 const SHINE = 1.25
 
-const linear = (lab: Lab) => linearFromXyz(xyzFromLab(lab)).map(value => Math.max(0, value))
 const smooth = (from: number, to: number, x: number) => {
   const t = Math.min(1, Math.max(0, (x - from) / (to - from)))
   return t * t * (3 - 2 * t)
 }
 
 /** Draws a fitted eye: foil iris with its streaks, pupil, rim and the highlight of its dome. */
-export function drawEye(canvas: Canvas, eye: DrawnEye, eyes: Eyes, tables: LightTables, plain: boolean): void {
-  const colours = { iris: linear(eyes.iris), pupil: linear(eyes.pupil), rim: linear(eyes.rim) }
+export function drawEye(canvas: Canvas, eye: DrawnEye, colours: EyeColours, tables: LightTables, plain: boolean): void {
   const [i00, i01, i10, i11] = eye.inverse
   const determinant = Math.abs(i00 * i11 - i01 * i10)
   if (!(determinant > 0)) return
@@ -67,8 +63,6 @@ export function drawEye(canvas: Canvas, eye: DrawnEye, eyes: Eyes, tables: Light
     }
   }
 }
-
-type EyeColours = Record<'iris' | 'pupil' | 'rim', number[]>
 
 function eyeLight(eye: DrawnEye, colours: EyeColours, a: number, b: number, soft: number, tables: LightTables, plain: boolean, rgb: Float32Array): void {
   const q = Math.hypot(a, b)

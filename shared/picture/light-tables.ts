@@ -1,7 +1,7 @@
 import { lightRig, tentRadiance, type LightRig } from './light-rig'
 import { facingIrradiance, lightSamples, type LightSamples } from './light-samples'
 import type { PictureLight } from './picture-options'
-import { flakeLobe, flakeSlope, mattLobe, type LobeReading } from './surface-lobes'
+import { FILM_INDEX, flakeLobe, flakeSlope, mattLobe, type LobeReading } from './surface-lobes'
 
 /** Places of a table in each direction, over the two sideways parts of the normal, -1 to 1. */
 const GRID = 37
@@ -21,8 +21,8 @@ export interface LightTables {
   irradiance: NormalTable
   /** Mirrored light of a matt film. */
   matt: () => NormalTable
-  /** Flake lobe of a tilt spread, degrees. */
-  flakes: (sigma: number) => FlakeTable
+  /** Flake lobe of a tilt spread, degrees, under a film of an index against what lies outside: air when left out. */
+  flakes: (sigma: number, index?: number) => FlakeTable
 }
 
 /** Tabulates a light. Lobes are worked out when first asked for and kept. */
@@ -34,18 +34,17 @@ export function lightTables(light: PictureLight): LightTables {
 export function tablesOf(rig: LightRig): LightTables {
   const samples = lightSamples(rig)
   const gain = 1 / facingIrradiance(samples)
-  const kept = new Map<number, FlakeTable>()
+  const kept = new Map<string, FlakeTable>()
   let mattKept: NormalTable | undefined
   return {
     rig,
     gain,
     irradiance: overNormals(normal => gain * irradianceOf(samples, normal)),
     matt: () => mattKept ??= overNormals(normal => gain * mattOf(samples, normal)),
-    flakes(sigma) {
-      const found = kept.get(sigma)
-      if (found) return found
-      const made = flakeTable(samples, gain, sigma)
-      kept.set(sigma, made)
+    flakes(sigma, index = FILM_INDEX) {
+      const key = `${sigma} ${index}`
+      const made = kept.get(key) ?? flakeTable(samples, gain, sigma, index)
+      kept.set(key, made)
       return made
     },
   }
@@ -97,7 +96,7 @@ function mattOf({ count, direction, weight }: LightSamples, [x, y, z]: Normal): 
   return sum
 }
 
-function flakeTable({ count, direction, weight }: LightSamples, gain: number, sigma: number): FlakeTable {
+function flakeTable({ count, direction, weight }: LightSamples, gain: number, sigma: number, index: number): FlakeTable {
   const slope = flakeSlope(sigma)
   const strength = new Float32Array(GRID * GRID), local = new Float32Array(GRID * GRID)
   const reading: LobeReading = { flake: 0, local: 1 }
@@ -109,7 +108,7 @@ function flakeTable({ count, direction, weight }: LightSamples, gain: number, si
       const dz = direction[3 * i + 2]!
       const cosine = x * direction[3 * i]! + y * direction[3 * i + 1]! + z * dz
       if (cosine <= 0) continue
-      flakeLobe(cosine, eye, dz, slope, reading)
+      flakeLobe(cosine, eye, dz, slope, reading, index)
       const share = cosine * weight[i]! * reading.flake
       sum += share
       angle += share * reading.local

@@ -10,6 +10,7 @@ import { coatTable, type CoatTable } from './coat-table'
 import { drawHardware } from './draw-hardware'
 import type { PictureEngine } from './engine/picture-engine'
 import { plainEngine } from './engine/plain-engine'
+import { eyeColours } from './eye-colours'
 import { eyeLayer, layEyes, type EyeLayer } from './eye-layer'
 import { keepSome } from './keep-some'
 import { aspecularOf, lightKey } from './light-rig'
@@ -128,10 +129,12 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
 
   /** Light of every sample of a kit. */
   function lit(kit: ViewKit, look: Look, options: PictureOptions): Float32Array {
+    const seen = seenBy(options)
     const coats = shownOf(look, options).map((coat): KeyedCoat => {
       const { codes, peak } = keptMap(kit, coat)
-      const paintKey = `${coat.passes * peak} ${keyOf(coat.paint)}`
-      return { codes, key: `${coat.placeKey}${paintKey}`, table: tables(paintKey, () => coatTable(coat.paint, coat.passes * peak)) }
+      // Only of flakes is what their surface does in the table.
+      const paintKey = `${coat.passes * peak} ${coat.paint.flake ? seen.surface.index : ''} ${keyOf(coat.paint)}`
+      return { codes, key: `${coat.placeKey}${paintKey}`, table: tables(paintKey, () => coatTable(coat.paint, coat.passes * peak, seen.surface)) }
     })
     tidyMaps(kit, coats.length)
     const { colour, finish } = look.body.ground
@@ -139,7 +142,7 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
     const groundKey = canonicalJson(look.body.ground)
     const lighting: Lighting = {
       tables: lightOf(options.light), finish: finishShown(look, options), plain: options.plain, aspecular: aspecularOf(options.light),
-      seen: seenBy(options),
+      seen,
     }
     const form = eyesAreFitted(look, options.upTo) ? kit.form : kit.blindForm
     return engine.light(kit, { groundKey, ground, coats, form, lighting })
@@ -170,12 +173,13 @@ export function pictureBench(work: 'edits' | 'orders' = 'edits', engine: Picture
     const { key, kit, view } = kitOf(look, options)
     const canvas = copyCanvas(painted)
     const { eyes } = look.body
-    const { white } = seenBy(options)
+    const seen = seenBy(options), { white } = seen
     // Eyes and wire are drawn as a white lamp shows them, so for as long everything is counted against the white there.
     tint(canvas, white.map(channel => 1 / Math.max(DARKEST, channel)))
     if (eyes && eyesAreFitted(look, options.upTo)) {
-      const eyesKey = `${key} ${lightKey(options.light)} ${options.plain} ${canonicalJson(eyes)}`
-      layEyes(canvas, eyeLayers(eyesKey, () => eyeLayer(canvas, kit.parts.eyes, eyes, lightOf(options.light), options.plain)))
+      const colours = eyeColours(eyes, options.seen, seen)
+      const eyesKey = `${key} ${lightKey(options.light)} ${options.plain} ${canonicalJson(colours)}`
+      layEyes(canvas, eyeLayers(eyesKey, () => eyeLayer(canvas, kit.parts.eyes, colours, lightOf(options.light), options.plain)))
     }
     drawHardware(canvas, kit.parts)
     tint(canvas, white.map(channel => Math.max(DARKEST, channel)))

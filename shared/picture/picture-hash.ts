@@ -5,7 +5,7 @@ import { pictureOptions, type PictureWish } from './picture-options'
 import { shownCoats, eyesAreFitted } from './shown-coats'
 
 /** Version of how pictures are drawn; it rises whenever the same look would be drawn visibly otherwise. */
-export const PICTURE_VERSION = '2'
+export const PICTURE_VERSION = '3'
 
 /**
  * Everything that decides what a picture shows, as one text to hash for caches; alike for looks that are drawn alike.

@@ -38,10 +38,11 @@ export interface LobeReading {
  *
  * Both directions are refracted into the film, the flake lies on their true half vector.
  * @param slope `flakeSlope` of the paint
+ * @param index refractive index of the film against what lies outside
  * @source geometry of ASTM E2539 readings; Beckmann distribution; Fresnel transmission at the film's surface
  */
-export function flakeLobe(cosLamp: number, cosEye: number, cosBetween: number, slope: number, out: LobeReading): LobeReading {
-  const n2 = FILM_INDEX * FILM_INDEX
+export function flakeLobe(cosLamp: number, cosEye: number, cosBetween: number, slope: number, out: LobeReading, index: number = FILM_INDEX): LobeReading {
+  const n2 = index * index
   const inLamp = Math.sqrt(1 - (1 - cosLamp * cosLamp) / n2)
   const inEye = Math.sqrt(1 - (1 - cosEye * cosEye) / n2)
   // Tangential parts shrink by the index; what is left of the angle between them follows.
@@ -54,7 +55,7 @@ export function flakeLobe(cosLamp: number, cosEye: number, cosBetween: number, s
     out.flake = 0
     return out
   }
-  const through = (1 - fresnel(cosLamp)) * (1 - fresnel(cosEye)) / n2
+  const through = (1 - fresnel(cosLamp, index)) * (1 - fresnel(cosEye, index)) / n2
   out.flake = through * Math.PI * facetShare(tilt, slope) / (4 * inLamp * inEye)
   return out
 }

@@ -25,7 +25,7 @@ export interface SampleLight {
 }
 
 /** Works out a light at every sample. */
-export function sampleLight(form: SampleForm, { tables, finish, plain, aspecular }: Lighting): SampleLight {
+export function sampleLight(form: SampleForm, { tables, finish, plain, aspecular, seen: { surface } }: Lighting): SampleLight {
   const { samples: { count, occlusion }, normal, sparkle } = form
   const kept = new Map<string, Mirroring>()
   return {
@@ -51,18 +51,18 @@ export function sampleLight(form: SampleForm, { tables, finish, plain, aspecular
   }
 
   function evenLight(): Float32Array | undefined {
-    if (plain) return VEIL[finish] > 0 ? new Float32Array(count).fill(VEIL[finish]) : undefined
+    if (plain) return VEIL[finish] > 0 ? new Float32Array(count).fill(surface.veil * VEIL[finish]) : undefined
     if (finish === 'gloss') return undefined
-    const matt = tables.matt(), share = MATT_SHARE * VEIL[finish] / VEIL.matt
+    const matt = tables.matt(), share = surface.veil * MATT_SHARE * VEIL[finish] / VEIL.matt
     return overSamples(i => share * atForm(matt, i) * occlusion[i]!)
   }
 
   function mirroringOf({ sigma, sparkle: glints }: Pick<FlakeLevels, 'sigma' | 'sparkle'>): Mirroring {
     if (plain) {
-      const { gain, cosine } = flakeGeometry(aspecular, sigma)
+      const { gain, cosine } = flakeGeometry(aspecular, sigma, surface.index)
       return { strength: new Float32Array(count).fill(gain), place: new Float32Array(count).fill(mirroringPlace(cosine)) }
     }
-    const { strength, local } = tables.flakes(sigma)
+    const { strength, local } = tables.flakes(sigma, surface.index)
     return {
       strength: overSamples(i => atForm(strength, i) * Math.max(GLINT_LEAST, 1 + glints * sparkle[i]!) * occlusion[i]!),
       place: overSamples(i => mirroringPlace(atForm(local, i))),
@@ -82,7 +82,8 @@ export function sampleLightKeep(): (form: SampleForm, lighting: Lighting) => Sam
   }
 }
 
-/** Whether two lightings do the same at every sample; what the light is seen as is not asked here. */
+/** Whether two lightings do the same at every sample: what the light is seen as is not asked here, but against what the film ends is. */
 function isSameTent(a: Lighting, b: Lighting): boolean {
   return a.tables === b.tables && a.finish === b.finish && a.plain === b.plain && a.aspecular === b.aspecular
+    && a.seen.surface.index === b.seen.surface.index && a.seen.surface.veil === b.seen.surface.veil
 }

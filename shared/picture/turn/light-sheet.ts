@@ -17,9 +17,9 @@ export interface LightSheet {
   gain: number
 }
 
-/** Lays a light out for flakes of up to two spreads, degrees. */
-export function lightSheet(tables: LightTables, sigmas: readonly number[]): LightSheet {
-  const [one, two] = sigmas.map(sigma => tables.flakes(sigma))
+/** Lays a light out for flakes of up to two spreads, degrees, under a film of an index against what lies outside. */
+export function lightSheet(tables: LightTables, sigmas: readonly number[], index: number): LightSheet {
+  const [one, two] = sigmas.map(sigma => tables.flakes(sigma, index))
   return {
     side: Math.sqrt(tables.irradiance.length),
     first: interleaved([tables.irradiance, tables.matt(), one?.strength, one?.local]),

@@ -1,7 +1,8 @@
 import type { BlankShape } from '#shared/blank/blank-shape'
 import { pictureSize } from '../picture-size'
-import { SCALE } from './turn-messages'
 
+/** Coarsest and finest sheets, texels to the mm. */
+const SCALE = { least: 0.5, most: 24 }
 /** Sheets come in sizes this far apart, so that a page that is drawn wider by a little keeps those it has. */
 const APART = 1.25
 

@@ -1,12 +1,13 @@
 import { prepareBlank, type PreparedBlank } from '#shared/blank/prepared-blank'
 import type { ViewSamples } from '#shared/blank/view-sample-lists'
 import { groundFromLab } from '#shared/optics/known-film'
-import { seenKey, seenLight, type SeenLight } from '#shared/optics/seen-light'
-import { VEIL } from '#shared/optics/surface'
+import { seenKey, seenLight, type SeenLight, type SeenWish } from '#shared/optics/seen-light'
+import { AIR_SURFACE, VEIL, WATER_SURFACE } from '#shared/optics/surface'
 import { toPictureBands } from '#shared/optics/to-picture-bands'
 import { canonicalJson } from '#shared/scheme/canonical'
 import { coatTable, type CoatTable } from '../coat-table'
 import { depositKeep, depositMap, type DepositKeep, type DepositMap } from '../deposit-map'
+import { eyeColours } from '../eye-colours'
 import { keepSome } from '../keep-some'
 import { lightKey } from '../light-rig'
 import { lightTables, type LightTables } from '../light-tables'
@@ -61,7 +62,8 @@ export interface TurnBench {
   sheets(look: Look, scale: number): { body: FormedSheet, fins: FormedSheet | undefined }
   /** The colours; hands over from time to time. */
   paint(look: Look, wish: TurnWish, scale: number): Generator<undefined, TurnPaint, undefined>
-  light(light: PictureLight, sigmas: readonly number[]): LightSheet
+  /** A light on flakes of some spreads; water bends it less than air. */
+  light(light: PictureLight, sigmas: readonly number[], seen: SeenWish): LightSheet
 }
 
 /** Puts up an empty bench. */
@@ -93,7 +95,7 @@ export function turnBench(): TurnBench {
     for (const coat of shown) {
       const { codes, peak } = kit.maps(coat.placeKey, () => depositMap(kit.keep, coat.laid))
       const passes = coat.passes * peak
-      coats.push({ codes, table: tables(canonicalJson([coat.paint, passes]), () => coatTable(coat.paint, passes)) })
+      coats.push({ codes, table: tables(canonicalJson([coat.paint, passes, ...coat.paint.flake ? [seen.surface.index] : []]), () => coatTable(coat.paint, passes, seen.surface)) })
       yield undefined
     }
     const { colour, finish } = look.body.ground
@@ -124,12 +126,12 @@ export function turnBench(): TurnBench {
       const { eyes } = look.body
       return {
         body: onBody, fins: onFins,
-        eye: eyes && eyesAreFitted(look, wish.upTo) ? eyeSheet(eyes, lights('bench', () => lightTables('bench'))) : undefined,
+        eye: eyes && eyesAreFitted(look, wish.upTo) ? eyeSheet(eyeColours(eyes, wish.seen, seen), lights('bench', () => lightTables('bench'))) : undefined,
         sigmas: onBody.paint.flakes.map(({ sigma }) => sigma),
-        isGlossy: finish === 'gloss', mattShare: MATT_SHARE * VEIL[finish] / VEIL.matt, white: seen.white,
+        isGlossy: finish === 'gloss', mattShare: seen.surface.veil * MATT_SHARE * VEIL[finish] / VEIL.matt, white: seen.white,
       }
     },
-    light: (light, sigmas) => lightSheet(lights(lightKey(light), () => lightTables(light)), sigmas),
+    light: (light, sigmas, { water }) => lightSheet(lights(lightKey(light), () => lightTables(light)), sigmas, water ? WATER_SURFACE.index : AIR_SURFACE.index),
   }
 }
 

@@ -1,22 +1,20 @@
-import { z } from 'zod'
-import { SchemeBody } from '#shared/scheme/body'
-import { Materials } from '#shared/scheme/materials'
-import { PictureOptions } from '../picture-options'
+import type { PictureOptions } from '../picture-options'
+import type { Look } from '../look'
 import type { LightSheet } from './light-sheet'
 import type { FormedSheet, TurnPaint } from './turn-bench'
 import type { TurnForm } from './turn-form'
 
-/** Coarsest and finest sheets a page may ask for, texels to the mm. */
-export const SCALE = { least: 0.5, most: 24 }
+// A page and its thread are one program, so what they say to one another is held by its types alone: a check at the border would cost
+// every request some milliseconds, and every page the download of the checker.
 
 /** What the turning view asks of its thread: a look, what of it is shown, and how fine. The newest request takes over. */
-export const TurnAsk = PictureOptions.pick({ upTo: true, clear: true, light: true, seen: true }).extend({
+export interface TurnAsk extends Pick<PictureOptions, 'upTo' | 'clear' | 'light' | 'seen'> {
   /** Rises with every request. */
-  request: z.number().int(),
-  look: z.object({ body: SchemeBody, materials: Materials }),
-  scale: z.number().min(SCALE.least).max(SCALE.most),
-})
-export type TurnAsk = z.output<typeof TurnAsk>
+  request: number
+  look: Look
+  /** Texels to the mm. */
+  scale: number
+}
 
 /** How fine sheets are. */
 export type TurnStage = 'coarse' | 'fine'
