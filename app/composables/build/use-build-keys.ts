@@ -1,15 +1,13 @@
-import { useEventListener } from '@vueuse/core'
+import { useScreenKeys } from '~/composables/keys/use-keys'
 import type { SchemeDraft } from '~/composables/scheme/use-scheme-draft'
 
 /** Undo and redo from the keyboard, but for where somebody types and undoes letters. */
 export function useBuildKeys(draft: Pick<SchemeDraft, 'undo' | 'redo'>): void {
-  useEventListener(() => import.meta.client ? window : null, 'keydown', (event: KeyboardEvent) => {
-    if (!(event.ctrlKey || event.metaKey) || event.altKey || event.key.toLowerCase() !== 'z') return
-    const { target } = event
-    const types = target instanceof HTMLTextAreaElement || (target instanceof HTMLInputElement && !['radio', 'checkbox', 'range'].includes(target.type))
-    if (types || document.querySelector('dialog[open]')) return
-    event.preventDefault()
-    if (event.shiftKey) draft.redo()
-    else draft.undo()
+  useScreenKeys({
+    place: 'Scheme',
+    keys: [
+      { press: ['Mod+Z'], words: 'Undo', run: () => draft.undo() },
+      { press: ['Mod+Shift+Z', 'Mod+Y'], words: 'Redo', run: () => draft.redo() },
+    ],
   })
 }

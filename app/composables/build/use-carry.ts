@@ -2,6 +2,7 @@ import { nextTick, type Ref, ref } from 'vue'
 import { carryWords } from './carry-words'
 import type { FilmRow } from './film-rows'
 import type { Build } from './use-build'
+import { useKeys } from '~/composables/keys/use-keys'
 import { useSpoken } from '~/composables/ui/use-spoken'
 
 /** Carrying rows of the section by keyboard: picked up, carried row by row, laid or brought back. */
@@ -34,6 +35,8 @@ export function useCarry(build: Build): Carry {
 
   function pickUp(row: FilmRow) {
     if (build.whyNot.value) return tell(build.whyNot.value)
+    // What one picks up is what one has in hand.
+    if (row.is === 'coat') build.choose(row.coat.id)
     carried.value = row.key
     steps = 0
     tell(`${nameOf(row)}, picked up. ${where(row.key)}. Arrows carry it, Space lays it, Escape brings it back.`)
@@ -73,29 +76,30 @@ export function useCarry(build: Build): Carry {
     said.value = ''
   }
 
-  return {
-    carried, said, lay,
-    onKey(event, row) {
-      const isCarried = carried.value === row.key
-      switch (event.key) {
-        case ' ':
-        case 'Enter':
-          event.preventDefault()
-          if (isCarried) lay()
+  /** Only what is carried goes anywhere; otherwise the key is the page's. */
+  const whileCarried = (row: FilmRow, work: () => void) => carried.value === row.key && work()
+  const onKey = useKeys<[row: FilmRow]>({
+    place: 'Film section', on: 'a row’s handle or an end of a mask’s bracket',
+    keys: [
+      {
+        press: [' ', 'Enter'], words: 'Pick up, and lay',
+        run(_, row) {
+          if (carried.value === row.key) lay()
           else pickUp(row)
-          return
-        case 'ArrowUp':
-        case 'ArrowDown':
-          if (!isCarried) return
-          event.preventDefault()
-          carry(row, event.key === 'ArrowUp' ? 'up' : 'down')
-          return
-        case 'Escape':
-          if (!isCarried) return
-          event.preventDefault()
+        },
+      },
+      { press: ['ArrowUp'], words: 'Carry one row up', run: (_, row) => whileCarried(row, () => carry(row, 'up')) },
+      { press: ['ArrowDown'], words: 'Carry one row down', run: (_, row) => whileCarried(row, () => carry(row, 'down')) },
+      {
+        press: ['Escape'], words: 'Bring back to where it lay',
+        run: (event, row) => whileCarried(row, () => {
           event.stopPropagation()
           bringBack(row)
-      }
-    },
-  }
+        }),
+      },
+    ],
+    drag: { what: 'Coats, and where masks are fitted and lifted,', instead: 'the menu of a coat and the two lists of each mask on the coat sheet' },
+  })
+
+  return { carried, said, lay, onKey }
 }
