@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { SchemeBody } from './body'
+import { WallWish } from './wall/wall-wish'
 
 export const SCHEME_NAME_MAX = 80
 export const FISH_MAX = 80
@@ -48,22 +49,16 @@ export type Restore = z.output<typeof Restore>
 export const Fork = z.object({ name: Name, fish: Fish.optional(), number: z.number().int().min(1).max(2 ** 31 - 1).optional() })
 export type Fork = z.output<typeof Fork>
 
-/** What one looks for in the list. */
-export const SchemeQuery = z.object({
-  /** Words in the name, the fish or the blank; for those who read recipes also in the coats. */
-  words: z.string().trim().max(120).default(''),
-  blankId: z.uuid().optional(),
-  /** A paint that is used in the draft. */
-  paintId: z.uuid().optional(),
-  retired: z.enum(['with', 'without']).default('without'),
+/** What one looks for in the list, and which page of it. */
+export const SchemeQuery = WallWish.extend({
   after: z.string().max(200).optional(),
   limit: z.coerce.number().int().min(1).max(SCHEMES_PAGE_MAX).default(24),
 })
 export type SchemeQuery = z.output<typeof SchemeQuery>
 
-/** Which two versions to compare; `draft` is the working copy. */
+/** Which two versions to compare; `draft` is the working copy. The second is of `other` where another scheme is named. */
 const Side = z.union([z.literal('draft'), z.coerce.number().int().min(1).max(2 ** 31 - 1)])
-export const CompareQuery = z.object({ from: Side, to: Side.default('draft') })
+export const CompareQuery = z.object({ from: Side, to: Side.default('draft'), other: z.uuid().optional() })
 export type CompareQuery = z.output<typeof CompareQuery>
 
 /** Which blank the materials are wanted for; the draft's own when none is named. */

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { SchemeBody } from './body'
 import { Materials } from './materials'
+import { NearView } from './wall/wall-wish'
 
 /** Where a colourway came from. */
 export const Origin = z.object({ schemeId: z.uuid(), schemeName: z.string(), number: z.number().int() })
@@ -40,6 +41,8 @@ export const SchemeListItem = z.object({
   draftIsAhead: z.boolean(),
   savedAt: z.iso.datetime(),
   savedBy: Painter.nullable(),
+  /** Put away: out of the lists until asked for. */
+  retired: z.boolean(),
   pictureTag: z.string(),
 })
 export type SchemeListItem = z.output<typeof SchemeListItem>
@@ -49,7 +52,14 @@ export const SchemeRowView = z.discriminatedUnion('sees', [SchemeListItem, Schem
 export type SchemeRowView = z.output<typeof SchemeRowView>
 
 /** A page of the list and where the next one starts. */
-export const SchemeListPage = z.object({ items: z.array(SchemeRowView), next: z.string().nullable() })
+export const SchemeListPage = z.object({
+  items: z.array(SchemeRowView),
+  next: z.string().nullable(),
+  /** By scheme, when a colour was looked for. */
+  near: z.record(z.string(), NearView),
+  /** Looks whose colours are still to be worked out, when a colour was looked for. */
+  waiting: z.number().int(),
+})
 export type SchemeListPage = z.output<typeof SchemeListPage>
 
 /** One revision in a list. */
@@ -97,10 +107,13 @@ export type SchemeView = z.output<typeof SchemeView>
 export const DraftSavedView = z.object({ version: z.number().int(), savedAt: z.iso.datetime() })
 export type DraftSavedView = z.output<typeof DraftSavedView>
 
-/** Two versions side by side, each with what it was made with. */
-export const CompareView = z.object({
+const ComparedSide = z.object({
   scheme: z.object({ id: z.uuid(), name: z.string() }),
-  from: z.object({ number: z.number().int().nullable(), note: z.string(), body: SchemeBody, materials: Materials }),
-  to: z.object({ number: z.number().int().nullable(), note: z.string(), body: SchemeBody, materials: Materials }),
+  /** Null for the draft. */
+  number: z.number().int().nullable(),
+  note: z.string(), body: SchemeBody, materials: Materials,
 })
+
+/** Two versions side by side, of one scheme or of two, each with what it was made with. */
+export const CompareView = z.object({ from: ComparedSide, to: ComparedSide })
 export type CompareView = z.output<typeof CompareView>

@@ -6,7 +6,7 @@ export function schemeKey(schemeId: string): string {
   return `scheme ${schemeId}`
 }
 
-/** Key of two versions side by side. */
-export function compareKey(schemeId: string, from: string, to: string): string {
-  return `scheme ${schemeId} ${from} ${to}`
+/** Key of two versions side by side; the second of another scheme where one is named. */
+export function compareKey(schemeId: string, from: string, to: string, other?: string): string {
+  return `scheme ${schemeId} ${from} ${to}${other ? ` of ${other}` : ''}`
 }

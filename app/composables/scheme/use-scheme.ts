@@ -25,9 +25,10 @@ export async function useSchemeLook(schemeId: string): Promise<SchemeOnPage<Sche
   return { scheme: computed(() => data.value ?? null), error, refresh: () => refresh() }
 }
 
-/** Two versions of a scheme; `draft` or a revision's number. */
-export async function useSchemeCompare(schemeId: string, from: string, to: string): Promise<{ two: ComputedRef<CompareView | null>, error: Ref<unknown> }> {
+/** Two versions of a scheme, or one of it and one of another; `draft` or a revision's number. */
+export async function useSchemeCompare(schemeId: string, from: string, to: string, other?: string): Promise<{ two: ComputedRef<CompareView | null>, error: Ref<unknown> }> {
   const request = useApi()
-  const { data, error } = await useAsyncData(compareKey(schemeId, from, to), () => request('/api/schemes/:schemeId/compare', { params: { schemeId }, query: { from, to } }), { deep: false })
+  const query = { from, to, ...other ? { other } : {} }
+  const { data, error } = await useAsyncData(compareKey(schemeId, from, to, other), () => request('/api/schemes/:schemeId/compare', { params: { schemeId }, query }), { deep: false })
   return { two: computed(() => data.value ?? null), error }
 }

@@ -7,24 +7,22 @@ import { usedMaterials } from '#shared/scheme/used-materials'
 import { materialsToday } from './materials-today'
 import { revisionInWorkshop, schemeInWorkshop, type SchemeRow } from './scheme-in-workshop'
 
-/** Two versions of one scheme, each with what it was made with (the draft: with today's shelf). */
-export async function compareRevisions(ctx: Ctx, schemeId: string, query: CompareQuery): Promise<CompareView> {
+/** Two versions of one scheme or of two, each with what it was made with (a draft: with today's shelf). */
+export async function compareRevisions(ctx: Ctx, schemeId: string, { from, to, other }: CompareQuery): Promise<CompareView> {
   assertMay(ctx, 'scheme:read')
   return inTransaction(ctx, async (tx) => {
     const scheme = await schemeInWorkshop(tx, schemeId)
-    return {
-      scheme: { id: scheme.id, name: scheme.name },
-      from: await sideOf(tx, scheme, query.from),
-      to: await sideOf(tx, scheme, query.to),
-    }
+    const second = other === undefined || other === schemeId ? scheme : await schemeInWorkshop(tx, other)
+    return { from: await sideOf(tx, scheme, from), to: await sideOf(tx, second, to) }
   })
 }
 
-async function sideOf(tx: Ctx, scheme: SchemeRow, which: CompareQuery['from']): Promise<CompareView['from']> {
+async function sideOf(tx: Ctx, { id, name, draft }: SchemeRow, which: CompareQuery['from']): Promise<CompareView['from']> {
+  const scheme = { id, name }
   if (which === 'draft') {
-    const materials = usedMaterials(scheme.draft, await materialsToday(tx, scheme.draft, 'used'))
-    return { number: null, note: '', body: scheme.draft, materials }
+    const materials = usedMaterials(draft, await materialsToday(tx, draft, 'used'))
+    return { scheme, number: null, note: '', body: draft, materials }
   }
-  const { number, note, body, materials } = await revisionInWorkshop(tx, scheme.id, which)
-  return { number, note, body, materials }
+  const { number, note, body, materials } = await revisionInWorkshop(tx, id, which)
+  return { scheme, number, note, body, materials }
 }

@@ -39,7 +39,14 @@ export const SCHEME_ACCESS: AccessRow[] = [
   get('/api/schemes/[schemeId]/materials', '/materials', readers(200)),
   get('/api/schemes/[schemeId]/revisions', '/revisions', readers(200)),
   get('/api/schemes/[schemeId]/revisions/[number]', '/revisions/1', readers(200)),
-  get('/api/schemes/[schemeId]/compare', '/compare?from=1', readers(200)),
+  {
+    method: 'GET', path: '/api/schemes/[schemeId]/compare', who: readers(200),
+    make: async (ground) => {
+      const { url } = await published(ground)
+      const { scheme } = await testScheme(ground.owner, { name: 'Another, beside it' })
+      return { url: `${url}/compare?from=1&other=${scheme.id}`, secret: SECRET }
+    },
+  },
   get('/api/schemes/[schemeId]/picture', '/picture?width=32&upTo=ground', readers(200)),
   get('/api/schemes/[schemeId]/live', `/live?tab=${TAB}`, readers(200)),
   {

@@ -127,6 +127,25 @@ describe('a revision', () => {
     expect(two.to).toMatchObject({ number: null, body: withPasses(body, 9) })
     expect(two.to.materials).toEqual(two.from.materials)
   })
+
+  it('is compared with a version of another scheme, whichever blank that is on', async () => {
+    const { ctx } = await testWorkshop({ role: 'bench' })
+    const painter = { ...ctx, role: 'painter' as const }
+    const [one, other] = [await testScheme(painter), await testScheme(painter, { name: 'Pike in tracks' })]
+    await publishScheme(painter, other.scheme.id, 1, { note: 'pale' })
+    const two = await compareRevisions(ctx, one.scheme.id, { from: 'draft', to: 1, other: other.scheme.id })
+    expect(two.from).toMatchObject({ scheme: { id: one.scheme.id, name: 'Perch in bars' }, number: null, body: one.body })
+    expect(two.to).toMatchObject({ scheme: { id: other.scheme.id, name: 'Pike in tracks' }, number: 1, note: 'pale', body: other.body })
+    expect([two.from, two.to].map(side => side.materials.blank.id)).toEqual([one.blankId, other.blankId])
+  })
+
+  it('is never compared with a scheme of another workshop, nor by the front desk', async () => {
+    const [{ ctx }, { ctx: stranger }, { ctx: desk }] = [await testWorkshop({ role: 'owner' }), await testWorkshop({ role: 'owner' }), await testWorkshop({ role: 'desk' })]
+    const [ours, theirs] = [await testScheme(ctx), await testScheme(stranger)]
+    const query = { from: 'draft', to: 'draft', other: theirs.scheme.id } as const
+    await expect(compareRevisions(ctx, ours.scheme.id, query)).rejects.toMatchObject(code('scheme/not-found'))
+    await expect(compareRevisions(desk, ours.scheme.id, query)).rejects.toMatchObject(code('auth/not-allowed'))
+  })
 })
 
 describe('a colourway', () => {
