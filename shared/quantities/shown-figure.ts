@@ -38,8 +38,14 @@ export function toDigits(value: number, digits = 3): string {
   return Math.abs(value) >= 10 ** digits ? value.toFixed(0) : String(Number(value.toPrecision(digits)))
 }
 
-/** A kept figure to read, to three digits (or as many as asked), and its unit; money to the hundredth. */
+/** Digits up to which a figure is for reading; more are for working it out again. */
+const READING = 3
+
+/** A kept figure to read, to three digits (or as many as asked) and no finer than its unit is usually told, and its unit; money to the hundredth. */
 export function readable(kept: number, quantity: Quantity, choices: UnitChoices, digits = 3): { value: string, unit: string } {
-  const { fromKept, sign } = unitOf(quantity, choices)
-  return { value: quantity === 'money' ? kept.toFixed(2) : toDigits(fromKept(kept), digits), unit: sign }
+  const { fromKept, sign, places } = unitOf(quantity, choices)
+  if (quantity === 'money') return { value: kept.toFixed(2), unit: sign }
+  const figure = toDigits(fromKept(kept), digits)
+  const coarse = Number(Number(figure).toFixed(places))
+  return { value: digits <= READING && coarse !== 0 ? String(coarse) : figure, unit: sign }
 }

@@ -78,6 +78,9 @@ describe('figures to read', () => {
 
   it('one fluid ounce of clear as mL, and what a mL of film is in square inches and mil', () => {
     expect(readable(29.5735, 'volume', inch)).toEqual({ value: '1', unit: 'fl oz' })
+    expect(readable(0.7933, 'volume', metric)).toEqual({ value: '0.79', unit: 'mL' })
+    expect(readable(0.0012, 'volume', metric)).toEqual({ value: '0.0012', unit: 'mL' })
+    expect(readable(2 / 3, 'share', metric, 4)).toEqual({ value: '0.6667', unit: '' })
     expect(readable(1e-4, 'film volume', metric)).toEqual({ value: '0.0001', unit: 'mL/(cm² · µm)' })
     // 128 fl oz are 231 in³.
     expect(Number(readable(1e-4, 'film volume', inch, 6).value)).toBeCloseTo(128 / 231 / 1000, 8)
