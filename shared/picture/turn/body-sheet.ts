@@ -1,15 +1,11 @@
-import { GLOSS_RELIEF } from '#shared/blank/body-sample'
-import { jointPlace, jointShade, jointTilt, type JointPlace } from '#shared/blank/joint-place'
+import { type BodyPen, goToSection, newBodyPen, writeBodyAt } from '#shared/blank/body-sample'
 import type { PreparedBlank } from '#shared/blank/prepared-blank'
 import { newSection } from '#shared/blank/profile'
-import { reliefOf, reliefPlace, type ReliefPlace } from '#shared/blank/relief'
 import { tOfU } from '#shared/blank/surface-coordinates'
-import { newSurfacePoint, surfacePoint } from '#shared/blank/surface-point'
-import { fillSurfaceRow, hermite, newSurfaceRow, rowU, TABLE_COLUMNS, type SurfaceRow } from '#shared/blank/surface-table'
-import { emptyViewSamples, PART_BODY, PART_GAP, type ViewSamples } from '#shared/blank/view-sample-lists'
-import { GAP_LIGHT } from '../paint-light'
+import { hermite, TABLE_COLUMNS } from '#shared/blank/surface-table'
+import { viewTurn } from '#shared/blank/view'
+import { emptyViewSamples, type ViewSamples } from '#shared/blank/view-sample-lists'
 import { eyeSeat, type EyeSeat } from './eye-seat'
-import { rootShade } from './root-shade'
 import { unitInto } from './unit-into'
 
 /** Size of a sheet, texels. */
@@ -39,12 +35,12 @@ export function bodySheet(blank: PreparedBlank, scale: number): ViewSamples & Sh
   const { width, height } = bodySheetSize(blank, scale)
   const samples = emptyViewSamples({ roll: 0, nose: 'left', width, height, scale, centreX: 0, centreY: 0 }, width * height)
   samples.coverage.fill(1)
-  const pen = newPen(blank)
+  const pen: SheetPen = { body: newBodyPen(blank, viewTurn(samples.view), newSection()), eye: eyeSeat(blank, 1), knot: 0 }
   const half = height / 2
   for (let column = 0; column < width; column++) {
     const t = Math.min(1 - 1e-6, Math.max(1e-6, tOfU(blank.table, (column + 0.5) / width)))
-    blank.profile.section(t, pen.section)
-    fillSurfaceRow(blank.table, t, pen.row)
+    blank.profile.section(t, pen.body.section)
+    goToSection(pen.body)
     pen.knot = 0
     for (let row = 0; row < half; row++) {
       const left = row * width + column, right = (height - 1 - row) * width + column
@@ -55,25 +51,11 @@ export function bodySheet(blank: PreparedBlank, scale: number): ViewSamples & Sh
   return { ...samples, width, height }
 }
 
-interface Pen {
-  blank: PreparedBlank
-  section: ReturnType<typeof newSection>
-  row: SurfaceRow
-  point: ReturnType<typeof newSurfacePoint>
-  relief: ReturnType<typeof reliefOf>
-  carved: ReliefPlace
-  joint: JointPlace
+interface SheetPen {
+  body: BodyPen
   eye: EyeSeat
   /** Column of the table the last texel lay in; texels come from the back down. */
   knot: number
-}
-
-function newPen(blank: PreparedBlank): Pen {
-  return {
-    blank, section: newSection(), row: newSurfaceRow(), point: newSurfacePoint(), relief: reliefOf(blank),
-    carved: { slopeTail: 0, slopeX: 0, slopeY: 0, light: 1 },
-    joint: { distance: Infinity, round: 1, towardX: 0, towardY: 0 }, eye: eyeSeat(blank, 1), knot: 0,
-  }
 }
 
 /** How a dome under paint leans away from its middle: evenly, and more at its rim. */
@@ -81,8 +63,8 @@ const BLIND_DOME = { lean: 0.55, rim: 0.3 }
 const STEP = Math.PI / (TABLE_COLUMNS - 1)
 
 /** Girth angle at an arc length V of the pen's section, from the column the last one lay in on. */
-function angleAt(pen: Pen, V: number): number {
-  const { row } = pen
+function angleAt(pen: SheetPen, V: number): number {
+  const { row } = pen.body
   while (pen.knot < TABLE_COLUMNS - 2 && row.V[pen.knot + 1]! > V) pen.knot++
   const k = pen.knot
   const [a, b] = [row.V[k]!, row.V[k + 1]!]
@@ -97,32 +79,11 @@ function angleAt(pen: Pen, V: number): number {
 }
 
 /** Writes the texel at a share v of the left flank. */
-function writeTexel(pen: Pen, v: number, samples: ViewSamples, i: number): void {
-  const { blank, section, row, point, carved, joint } = pen
+function writeTexel(pen: SheetPen, v: number, samples: ViewSamples, i: number): void {
+  const { row, section, point } = pen.body
   const V = (1 - 2 * v) * (v < 0.5 ? row.V[0]! : -row.V[TABLE_COLUMNS - 1]!)
-  const phi = angleAt(pen, V)
-  surfacePoint(section, phi, point)
+  writeBodyAt(pen.body, angleAt(pen, V), samples, i)
   samples.pixel[i] = i
-  samples.U[i] = rowU(row, phi)
-  samples.V[i] = V
-  samples.u[i] = row.u
-  samples.v[i] = v
-  samples.side[i] = 1
-  samples.section.set([point.y - section.c, point.z], 2 * i)
-  samples.bodyNormal.set([point.nx, point.ny, point.nz], 3 * i)
-
-  reliefPlace(pen.relief, section.x, point.y, point.z, row.u, v, carved)
-  jointPlace(blank.shape.joints, section.x, point.y, joint)
-  const isGap = joint.distance < 0
-  samples.part[i] = isGap ? PART_GAP : PART_BODY
-  samples.occlusion[i] = isGap ? GAP_LIGHT : carved.light * (1 - jointShade(joint)) * rootShade(blank, row, section.x, V)
-
-  const tilt = jointTilt(joint)
-  const along = carved.slopeTail / Math.sqrt(section.xt ** 2 + point.yt ** 2 + point.zt ** 2)
-  const [x, y, z] = [point.nx + tilt * joint.towardX, point.ny + tilt * joint.towardY, point.nz]
-  const [cx, cy, cz] = [along * section.xt + carved.slopeX, along * point.yt + carved.slopeY, along * point.zt]
-  unitInto(samples.normal, i, x + cx, y + cy, z + cz)
-  unitInto(samples.glossNormal, i, x + GLOSS_RELIEF * cx, y + GLOSS_RELIEF * cy, z + GLOSS_RELIEF * cz)
   writeDome(pen.eye, section.x, point.y, point.z, samples, i)
 }
 

@@ -1,5 +1,5 @@
-import type { ViewSamples } from '#shared/blank/view-sample-lists'
-import { glossShare } from '../paint-light'
+import { PART_GAP, type ViewSamples } from '#shared/blank/view-sample-lists'
+import { GAP_LIGHT, glossShare } from '../paint-light'
 import { wavyNormals } from '../surface-grain'
 import type { HalfSheet } from './paint-sheet'
 import { toHalf } from './half-float'
@@ -14,13 +14,13 @@ export interface FormSheet {
 
 /** Forms a sheet of samples whose directions are those of the body. */
 export function formSheet(samples: ViewSamples): FormSheet {
-  const { count, normal, glossNormal, occlusion } = samples
+  const { count, normal, glossNormal, occlusion, part } = samples
   const paint = new Uint16Array(4 * count), gloss = new Uint16Array(4 * count)
   const waves = wavesOf(samples)
   for (let i = 0; i < count; i++) {
     const at = 4 * i, n = 3 * i
     for (let c = 0; c < 3; c++) paint[at + c] = toHalf(normal[n + c]!)
-    paint[at + 3] = toHalf(occlusion[i]!)
+    paint[at + 3] = toHalf(part[i] === PART_GAP ? GAP_LIGHT * occlusion[i]! : occlusion[i]!)
     const calm = fromRidge(samples.v[i]!)
     const [x, y, z] = tilted(glossNormal[n]!, glossNormal[n + 1]!, glossNormal[n + 2]!, calm * waves[n]!, calm * waves[n + 1]!)
     gloss[at] = toHalf(x)
