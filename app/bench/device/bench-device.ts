@@ -68,9 +68,9 @@ export function benchDevice(): Promise<BenchDevice> {
   return opened
 }
 
-/** Opens the drawers under a name; another page that wants to change their form closes them. */
-export function openBenchDevice(name = NAME): Promise<BenchDevice> {
-  return openDB<BenchSchema>(name, 1, {
+/** Opens the drawers under a name; another page that wants to change their form closes them. A browser that refuses at once refuses here too by the promise. */
+export async function openBenchDevice(name = NAME): Promise<BenchDevice> {
+  return await openDB<BenchSchema>(name, 1, {
     upgrade(device) {
       const acts = device.createObjectStore('acts', { autoIncrement: true })
       acts.createIndex('id', 'id', { unique: true })
