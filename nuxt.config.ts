@@ -47,7 +47,7 @@ export default defineNuxtConfig({
       // Pictures are painted and photos taken in on threads of their own, each of which starts from a file that stands by itself.
       compiled: async (nitro) => {
         await build({
-          entryPoints: [here('./server/pictures/paint-picture.ts'), here('./server/photos/take-in-photo.ts')],
+          entryPoints: [here('./server/pictures/paint-picture.ts'), here('./server/pictures/zone-promises.ts'), here('./server/photos/take-in-photo.ts')],
           outdir: join(nitro.options.output.serverDir, 'workers'),
           entryNames: '[name]',
           outExtension: { '.js': '.mjs' },

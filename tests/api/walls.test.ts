@@ -37,6 +37,9 @@ const ONE_OF_EACH: readonly string[] = [
   `insert into run_measures_withdrawn (measure_id, workshop_id) select id, $1 from run_measures where workshop_id = $1`,
   `insert into photos (workshop_id, scheme_id, sha256, format, bytes, width, height, position) select $1, id, 'h', 'jpeg', 1, 1, 1, 0 from schemes where workshop_id = $1`,
   `insert into cards (workshop_id, scheme_id, content, token_hash) select $1, id, '{}', 'c' || $3 from schemes where workshop_id = $1`,
+  `insert into scheme_colours (workshop_id, scheme_id, side, zone, label, lightness, a, b) select $1, id, 'draft', 'back', 'Back', 50, 0, 0 from schemes where workshop_id = $1`,
+  `insert into scheme_paints (workshop_id, scheme_id, paint_id) select $1, s.id, p.id from schemes s, paints p where s.workshop_id = $1 and p.workshop_id = $1`,
+  `insert into saved_searches (workshop_id, person_id, name, wish) values ($1, $2, $3, '{}')`,
   `insert into pictures (hash, workshop_id, engine_version, object_key) values ('h' || $3, $1, '1', 'k')`,
 ]
 
@@ -78,7 +81,7 @@ describe('a raw query as the server\'s own role', () => {
   })
 
   it('changes and removes nothing of another workshop', async () => {
-    for (const table of ['paints', 'bottles', 'bottle_uses', 'run_bottles', 'run_painters', 'schemes', 'blanks', 'masks', 'runs', 'photos', 'cards', 'invitations', 'memberships', 'sessions']) {
+    for (const table of ['paints', 'bottles', 'bottle_uses', 'run_bottles', 'run_painters', 'schemes', 'scheme_colours', 'colour_fills', 'scheme_paints', 'scheme_words', 'saved_searches', 'blanks', 'masks', 'runs', 'photos', 'cards', 'invitations', 'memberships', 'sessions']) {
       const { workshopId } = there
       const changed = await asHere(`update ${table} set workshop_id = workshop_id where workshop_id = '${workshopId}' returning 1`)
       const removed = await asHere(`delete from ${table} where workshop_id = '${workshopId}' returning 1`)

@@ -6,6 +6,8 @@ import { BUILD_UP_NAME_MAX, type BuildUpSequence } from '#shared/scheme/build-up
 import type { Materials } from '#shared/scheme/materials'
 
 const at = (name: string) => timestamp(name, { withTimezone: true, mode: 'date' })
+/** In whole milliseconds, as keys of pages travel, so that an index on it gives their order. */
+const orderedAt = (name: string) => timestamp(name, { withTimezone: true, mode: 'date', precision: 3 })
 
 export const schemes = pgTable('schemes', {
   id: uuid().primaryKey().defaultRandom(),
@@ -16,7 +18,7 @@ export const schemes = pgTable('schemes', {
   draft: jsonb().$type<SchemeBody>().notNull(),
   /** Goes up with every save of the draft, its name or its fish. */
   version: integer().notNull().default(1),
-  savedAt: at('saved_at').notNull().defaultNow(),
+  savedAt: orderedAt('saved_at').notNull().defaultNow(),
   savedBy: uuid('saved_by').references(() => persons.id, { onDelete: 'set null' }),
   /** Number of the newest revision, 0 when never published. */
   headNumber: integer('head_number').notNull().default(0),
@@ -24,7 +26,12 @@ export const schemes = pgTable('schemes', {
   forkedFrom: uuid('forked_from').references((): AnyPgColumn => revisions.id, { onDelete: 'set null' }),
   retired: boolean().notNull().default(false),
   createdAt: at('created_at').notNull().defaultNow(),
-}, t => [index('schemes_workshop').on(t.workshopId, t.savedAt)])
+}, t => [
+  index('schemes_workshop').on(t.workshopId, t.retired, t.savedAt, t.id),
+  index('schemes_person').on(t.workshopId, t.savedBy, t.savedAt),
+  index('schemes_blank').on(t.workshopId, t.blankId),
+  index('schemes_fish').on(t.workshopId, t.fish),
+])
 
 /** A numbered, frozen version. The database refuses to change one. */
 export const revisions = pgTable('revisions', {
@@ -39,7 +46,7 @@ export const revisions = pgTable('revisions', {
   bodyHash: text('body_hash').notNull(),
   engineVersion: text('engine_version').notNull(),
   publishedBy: uuid('published_by').references(() => persons.id, { onDelete: 'set null' }),
-  publishedAt: at('published_at').notNull().defaultNow(),
+  publishedAt: orderedAt('published_at').notNull().defaultNow(),
 }, t => [uniqueIndex('revisions_number').on(t.schemeId, t.number)])
 
 /** A sequence of coats with their masks that is laid again and again, under a name of the workshop's own. */

@@ -11,6 +11,7 @@ export interface ListedScheme {
   blankId: string
   blankName: string
   version: number
+  retired: boolean
   coats: number
   masks: number
   headNumber: number
@@ -40,6 +41,7 @@ export function schemeListItem(row: ListedScheme): SchemeListItem {
     draftIsAhead: row.publishedAt === null || row.savedAt > row.publishedAt,
     savedAt: row.savedAt.toISOString(),
     savedBy: painter(row.savedById, row.savedByName),
+    retired: row.retired,
     pictureTag: `d${row.version}`,
   }
 }

@@ -17,7 +17,7 @@ import { body } from '../scheme/bodies'
 
 const row = (more: Partial<SchemeListItem>): SchemeListItem => ({
   sees: 'recipe', id: 'x', name: 'Perch', fish: '', blank: { id: 'b', name: 'Minnow 90' }, coats: 3, masks: 0, headNumber: 2,
-  publishedAt: null, draftIsAhead: false, savedAt: '2026-05-02T10:00:00Z', savedBy: null, pictureTag: 't', ...more,
+  publishedAt: null, draftIsAhead: false, savedAt: '2026-05-02T10:00:00Z', savedBy: null, retired: false, pictureTag: 't', ...more,
 })
 
 describe('a finish on the wall', () => {
