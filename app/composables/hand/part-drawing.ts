@@ -29,13 +29,19 @@ function along(blank: PreparedBlank, points: readonly Place[], isClosed: boolean
   })
 }
 
-/** A line as wide as it runs from its start to its end, mm to each side. */
+/** A line as wide as it runs evenly over its length from its start to its end, mm to each side. */
 function ribbon(points: readonly DrawingPoint[], [start, end]: readonly [number, number]): string {
+  const run: number[] = []
+  points.forEach(([x, y], i) => {
+    const [bx, by] = points[i - 1] ?? [x, y]
+    run.push((run[i - 1] ?? 0) + Math.hypot(x - bx, y - by))
+  })
+  const total = run.at(-1) || 1
   const side = (turn: 1 | -1) => points.map(([x, y], i): DrawingPoint => {
     const [ax, ay] = points[i - 1] ?? [x, y]
     const [bx, by] = points[i + 1] ?? [x, y]
     const size = Math.hypot(bx - ax, by - ay) || 1
-    const width = start + (end - start) * i / Math.max(1, points.length - 1)
+    const width = start + (end - start) * (run[i] ?? 0) / total
     return [x - turn * width * (by - ay) / size, y + turn * width * (bx - ax) / size]
   })
   return svgPath([...side(1), ...side(-1).reverse()])
