@@ -1,6 +1,8 @@
+import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { brackets, carryCoat, coatNumber, masksOver, moveItem, stackFaults } from '#shared/scheme/stack-order'
-import { body, id, rows } from './bodies'
+import { applyEdit } from '#shared/scheme/edits'
+import { brackets, carryCoat, coatNumber, coatsOf, masksOver, moveItem, rowsOfMask, stackFaults } from '#shared/scheme/stack-order'
+import { anyBody, body, frozen, id, mask, rows } from './bodies'
 
 const c = (n: number) => id('coat', n)
 
@@ -55,6 +57,65 @@ describe('brackets', () => {
     expect(masksOver(b, c(2)).map(each => each.name)).toEqual(['Mask 1', 'Mask 2'])
     expect(masksOver(b, c(3)).map(each => each.name)).toEqual(['Mask 2'])
     expect(new Set(brackets(b).map(each => each.lane)).size).toBe(2)
+  })
+})
+
+describe('a mask that spans coats', () => {
+  const anyMasked = anyBody.filter(each => each.masks.length > 0 && coatsOf(each.stack).length > 0)
+  const m = id('mask', 1)
+
+  it('is on for exactly the coats between its fit and its lift, however it is nested', () => {
+    fc.assert(fc.property(anyMasked, (made) => {
+      for (const coat of coatsOf(made.stack)) {
+        const around = brackets(made).filter(span => span.coatIds.includes(coat.id)).map(span => span.mask.id)
+        expect(masksOver(made, coat.id).map(each => each.id).sort()).toEqual(around.sort())
+      }
+    }))
+  })
+
+  it('has its ends moved as asked, and nothing else; what cannot be is refused with the mask\'s name', () => {
+    fc.assert(fc.property(anyMasked, fc.nat(14), fc.nat(14), (made, from, to) => {
+      const moved = moveItem(frozen(made), from, to)
+      if (moved.ok) {
+        expect(stackFaults({ ...made, stack: moved.stack })).toEqual([])
+        expect(moved.stack[to]).toEqual(made.stack[from])
+        expect(moved.stack.toSpliced(to, 1)).toEqual(made.stack.toSpliced(from, 1))
+        return
+      }
+      expect(moved.because).toMatch(/^[“A-Z].*\.$/)
+      const item = made.stack[from]
+      if (item?.act !== 'coat' && item && to < made.stack.length) expect(moved.because).toContain(made.masks.find(each => each.id === item.maskId)?.name)
+    }))
+  })
+
+  it('comes round any run of coats row by row, so that the arrow keys reach all that a drag does', () => {
+    fc.assert(fc.property(fc.integer({ min: 2, max: 7 }), fc.nat(), fc.nat(), (count, a, b) => {
+      const coats = Array.from({ length: count }, (_, i) => i + 1)
+      const [first, last] = [Math.min(a % count, b % count), Math.max(a % count, b % count)]
+      let now = body('+1', 1, '-1', ...coats.slice(1))
+      const carry = (act: 'fit' | 'lift', goal: () => number) => {
+        for (let row = rowsOfMask(now.stack, m)[act]; row !== goal(); row = rowsOfMask(now.stack, m)[act]) {
+          const step = moveItem(now, row, row + Math.sign(goal() - row))
+          if (!step.ok) throw new Error(step.because)
+          now = { ...now, stack: step.stack }
+        }
+      }
+      carry('lift', () => last + 2)
+      carry('fit', () => first)
+      expect(masksOver(now, c(first + 1))).toHaveLength(1)
+      expect(brackets(now)[0]?.coatIds).toEqual(coats.slice(first, last + 1).map(c))
+    }))
+  })
+
+  it('is kept in place for a coat that is laid on the last of its own', () => {
+    const laid = applyEdit(body('+1', 1, '-1', 2), { do: 'duplicate-coat', coatId: c(1), newId: c(9) })
+    expect(laid.ok && masksOver(laid.body, c(9)).map(each => each.id)).toEqual([m])
+  })
+
+  it('may be fitted round another one, and inside it', () => {
+    const outside = applyEdit(body('+1', 1, 2, 3, '-1'), { do: 'add-mask', mask: mask(2), over: { firstCoatId: c(2), lastCoatId: c(2) } })
+    expect(outside.ok && rows(outside.body)).toEqual(['+1', 1, '+2', 2, '-2', 3, '-1'])
+    expect(outside.ok && brackets(outside.body).map(span => span.lane)).toEqual([1, 0])
   })
 })
 
