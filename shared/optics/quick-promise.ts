@@ -33,7 +33,7 @@ export function quickPromise({ ground, finish }: Pick<Stack, 'ground' | 'finish'
   }
   let brightness: Brightness = 'paper'
   let hasFlakes = false
-  let reflected = seenAt(45), photons = new Float64Array(BANDS), glow: Xyz = [0, 0, 0]
+  let reflected = seenAt(45), photons: Float64Array = new Float64Array(BANDS), glow: Xyz = [0, 0, 0]
   const wayUp = [colourOf(reflected, seen)]
 
   for (const [i, { layer, through, glows, mirrored: own }] of coats.entries()) {

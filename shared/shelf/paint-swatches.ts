@@ -1,5 +1,5 @@
 import type { PaintSwatches, SwatchSpread } from './paint-view'
-import { cardOf, drawnOver, type DrawnOver } from './drawdown'
+import { cardOf, type Drawn, drawnOver } from './drawdown'
 import { groundFromLab } from '#shared/optics/known-film'
 import type { PaintOptics } from '#shared/optics/paint-optics'
 import { promiseSpread } from '#shared/optics/spread'
@@ -14,7 +14,7 @@ export function paintSwatches(optics: PaintOptics): PaintSwatches {
   const card = cardOf()
   const overBlack = drawnOver(optics, card.black, CARD_PASSES)
   const overWhite = drawnOver(optics, card.white, CARD_PASSES)
-  const own = ownColour(optics, overBlack, overWhite)
+  const own = ownColour(optics)
   return {
     masstone: own.hex,
     overBlack: overBlack.hex,
@@ -33,9 +33,13 @@ function swatchSpread(optics: PaintOptics, ground: Lab): SwatchSpread {
   return { typical, most }
 }
 
-/** A flake is its face, a see-through paint its look over white, anything else its masstone. */
-function ownColour(optics: PaintOptics, overBlack: DrawnOver, overWhite: DrawnOver) {
-  if (overBlack.face) return overBlack.face
-  if (optics.kind === 'clear' || optics.how === 'dye-over-white') return overWhite
-  return drawnOver(optics, cardOf().black, MASSTONE_PASSES)
+/** Its own colour: a flake is its face, a see-through paint its look over white, anything else its masstone. Cheaper than all swatches. */
+export function ownColour(optics: PaintOptics): Drawn {
+  const { black, white } = cardOf()
+  if (optics.flake) {
+    const over = drawnOver(optics, black, CARD_PASSES)
+    return over.face ?? over
+  }
+  if (optics.kind === 'clear' || optics.how === 'dye-over-white') return drawnOver(optics, white, CARD_PASSES)
+  return drawnOver(optics, black, MASSTONE_PASSES)
 }

@@ -1,7 +1,7 @@
 import { coatPaint } from '#shared/picture/coat-paint'
 import type { Look } from '#shared/picture/look'
 import { coatsOf } from '#shared/scheme/stack-order'
-import { paintSwatches } from '#shared/shelf/paint-swatches'
+import { ownColour } from '#shared/shelf/paint-swatches'
 import type { PaintListItem } from '#shared/shelf/paint-view'
 
 type Known = Pick<PaintListItem, 'id' | 'opticsId' | 'swatches'>
@@ -30,7 +30,7 @@ function mixColour(coat: Parameters<typeof coatPaint>[0], look: Look): string | 
   if (before) return before
   const optics = coatPaint(coat, look.materials)
   if (!optics) return undefined
-  const colour = paintSwatches(optics).masstone
+  const colour = ownColour(optics).hex
   if (mixed.size >= MIXED_MOST) mixed.clear()
   mixed.set(key, colour)
   return colour

@@ -48,5 +48,7 @@ export interface FindReport {
 /** What the find thread says. */
 export type FindAnswer
   = | { answer: 'progress', request: number, done: number }
+    /** The nearest so far: now and then while the search goes on, and when it was stopped. */
+    | { answer: 'so far', request: number, report: FindReport }
     | { answer: 'found', request: number, report: FindReport }
     | { answer: 'failed', request: number, reason: string }
