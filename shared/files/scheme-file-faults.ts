@@ -5,6 +5,9 @@ import type { FileRevision, SchemeFile } from './scheme-file'
 import type { FileFault } from './read-scheme-file'
 import { revisionMaterials } from './revision-materials'
 
+/** As much as a draft that is saved by itself may hold, letters of its JSON: one that came in larger could never be saved again. */
+const DRAFT_LETTERS_MAX = 1_000_000
+
 /** What a file of the right form still says wrong: names without a thing, things named twice, revisions that nobody could have published. */
 export function schemeFileFaults(file: SchemeFile): FileFault[] {
   return [
@@ -14,6 +17,7 @@ export function schemeFileFaults(file: SchemeFile): FileFault[] {
     ...twice('masks', file.masks.map(mask => mask.id)),
     ...twice('revisions', file.revisions.map(revision => String(revision.number))),
     ...file.paints.flatMap((paint, i) => missing(file.optics, paint.opticsId, `paints.${i}.opticsId`, 'optical data')),
+    ...JSON.stringify(file.draft).length > DRAFT_LETTERS_MAX ? [{ path: 'draft', message: 'The draft is larger than a draft can be saved.' }] : [],
     ...bodyFaults(file, file.draft, 'draft'),
     ...file.revisions.flatMap((revision, i) => revisionFaults(file, revision, `revisions.${i}`)),
     ...pictureFaults(file),

@@ -11,6 +11,7 @@ import { coatsOf } from '#shared/scheme/stack-order'
 import { isSameKnown } from '#shared/shelf/same-known'
 import type { StoredOptics } from '#shared/shelf/stored-optics'
 import { filePaint } from './file-paint'
+import { othersFirst } from './others-first'
 
 /** What of a file is in the workshop already: by the file's id the workshop's own. What is missing is new. */
 export interface Matches {
@@ -26,7 +27,12 @@ export async function matchSchemeFile(tx: Ctx, file: SchemeFile): Promise<{ matc
   const matches: Matches = { paints: new Map(), blanks: new Map(), masks: new Map(), buildUps: new Set() }
   const shelf = await tx.db.select({ paint: paints, optics: paintOptics.data }).from(paints)
     .innerJoin(paintOptics, eq(paintOptics.id, paints.opticsId)).where(eq(paints.workshopId, tx.workshopId)).orderBy(paints.retired, paints.createdAt)
-  const planned: TakeInPlan['paints'] = file.paints.map((paint, i) => {
+  const planned: TakeInPlan['paints'] = []
+  for (const [i, paint] of file.paints.entries()) {
+    planned.push(matchPaint(paint, i))
+    await othersFirst()
+  }
+  function matchPaint(paint: FilePaint, i: number): TakeInPlan['paints'][number] {
     const sameName = shelf.filter(row => row.paint.name === paint.name)
     const same = sameName.find(row => isSameKnown(row.paint.known, paint.known))
     if (!same) {
@@ -35,7 +41,7 @@ export async function matchSchemeFile(tx: Ctx, file: SchemeFile): Promise<{ matc
     }
     matches.paints.set(paint.id, { id: same.paint.id, opticsId: same.paint.opticsId, optics: same.optics })
     return { name: paint.name, is: 'on the shelf', because: standing(paint, same.paint) }
-  })
+  }
   const ownBlanks = await tx.db.select({ id: blanks.id, name: blanks.name, shape: blanks.shape }).from(blanks).where(eq(blanks.workshopId, tx.workshopId)).orderBy(blanks.retired, blanks.createdAt)
   const ownMasks = await tx.db.select({ id: masks.id, name: masks.name, form: masks.form }).from(masks).where(eq(masks.workshopId, tx.workshopId)).orderBy(masks.retired, masks.createdAt)
   const ownBuildUps = await tx.db.select({ id: buildUps.id }).from(buildUps).where(eq(buildUps.workshopId, tx.workshopId))

@@ -10,6 +10,7 @@ import { paintOfRow, readPaintsCsv, type SaidRow } from '#shared/files/paints-cs
 import type { PaintsPlan } from '#shared/files/paints-plan'
 import { isSameKnown } from '#shared/shelf/same-known'
 import type { PaintDraft } from '#shared/shelf/paint'
+import { othersFirst } from './others-first'
 import { type ShelfLine, shelfLines } from './shelf-lines'
 
 /** A row that was weighed: what the file says of it, and what is to be done. */
@@ -28,10 +29,7 @@ export async function takeInPaints(ctx: Ctx, csv: string, dryRun: boolean): Prom
     const weighed: Weighed[] = []
     for (const row of read.rows) {
       weighed.push(weigh(row, shelf, weighed))
-      // Working a colour out takes a moment: others are served between two rows.
-      await new Promise<void>((done) => {
-        setImmediate(done)
-      })
+      await othersFirst()
     }
     if (!dryRun) for (const each of weighed) await takeIn(tx, each)
     return { dryRun, rows: weighed.map(each => each.told), unread: read.unread }

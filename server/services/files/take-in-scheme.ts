@@ -12,6 +12,7 @@ import type { TakenIn } from '#shared/files/take-in-plan'
 import { sameValue } from '#shared/scheme/canonical'
 import type { StoredOptics } from '#shared/shelf/stored-optics'
 import { draftOfFilePaint } from './file-paint'
+import { othersFirst } from './others-first'
 import { type Matches, matchSchemeFile } from './match-scheme-file'
 
 /** What taking a scheme file in would do here; changes nothing. */
@@ -50,6 +51,7 @@ async function addWhatIsMissing(tx: Ctx, file: SchemeFile, matches: Matches): Pr
   for (const paint of file.paints.filter(each => !matches.paints.has(each.id))) {
     const { id, opticsId, optics } = await addPaint(tx, draftOfFilePaint(paint))
     matches.paints.set(paint.id, { id, opticsId, optics })
+    await othersFirst()
   }
   for (const { id, name, shape } of file.blanks.filter(each => !matches.blanks.has(each.id))) {
     const [row] = await tx.db.insert(blanks).values({ workshopId: tx.workshopId, name, shape }).returning({ id: blanks.id })

@@ -23,6 +23,13 @@ async function apart(one: FilePicture, other: FilePicture): Promise<number> {
   return a!.reduce((sum, level, i) => sum + Math.abs(level - b![i]!), 0) / a!.length
 }
 
+/** Masks of thousands of points each. */
+const heavyMasks = (file: SchemeFile) => Array.from({ length: 12 }, (_, i) => ({
+  ...file.draft.masks[0]!,
+  id: i === 0 ? file.draft.masks[0]!.id : crypto.randomUUID(),
+  form: { kind: 'stencil', does: 'opens', soft: 0.3, wobble: 0, outlines: Array.from({ length: 40 }, () => Array.from({ length: 300 }, (_, k) => [k / 300, 0.123456])) },
+}))
+
 /** As it lies on a disk. */
 const saved = (file: SchemeFile) => checkedSchemeFile(JSON.parse(JSON.stringify(file)))
 
@@ -110,6 +117,7 @@ describe('a file that cannot be taken in', () => {
     ['that names a paint it does not hold', file => ({ ...file, paints: [], optics: [], revisions: [], pictures: [] }), 'draft.stack.1.coat.mix.parts.0.paintId', /does not hold/],
     ['with a paint twice', file => ({ ...file, paints: [...file.paints, file.paints[0]] }), 'paints.2', /twice/],
     ['with a revision nobody could publish', file => ({ ...file, revisions: [{ ...file.revisions[0], body: { ...file.revisions[0]!.body, stack: [], masks: [] } }] }), 'revisions.0.body', /no coats/],
+    ['with a draft nobody could save again', file => ({ ...file, draft: { ...file.draft, answered: Array.from({ length: 200 }, () => 'x'.repeat(200)), masks: heavyMasks(file) } }), 'draft', /larger than/],
     ['with a picture that is no base64', file => ({ ...file, pictures: [{ ...file.pictures[0], base64: '<svg onload=x>' }] }), 'pictures.0.base64', /base64/],
   ])('%s is refused with its place', async (_, change, path, says) => {
     const fields = await refusal(change)
