@@ -37,7 +37,7 @@ export function listPlace(place: ListedPlace): () => void {
 /** The places on the screen now, each once however often it stands there. */
 export function placesOf(all: Iterable<ListedPlace>): ListedPlace[] {
   const once = new Map<string, ListedPlace>()
-  for (const place of all) once.set(`${place.place} ${place.on ?? ''}`, place)
+  for (const place of all) once.set(`${place.place} ${place.on ?? place.drag?.what ?? ''}`, place)
   return [...once.values()].sort((a, b) => Number(a.on !== undefined) - Number(b.on !== undefined))
 }
 

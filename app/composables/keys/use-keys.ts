@@ -3,12 +3,13 @@ import { onBeforeUnmount, onMounted } from 'vue'
 import { type Key, type KeyPlace, listPlace } from './key-list'
 import { isPress, isWriting } from './key-press'
 
-/** The key that this press is for; undefined when the place has none. */
+/** The key of a table that this press is for; undefined when it has none. */
 export function keyFor<Given extends readonly unknown[]>(keys: readonly Key<Given>[], event: KeyboardEvent): Key<Given> | undefined {
   return keys.find(key => key.press.some(press => isPress(event, press)))
 }
 
-function answer<Given extends readonly unknown[]>(keys: readonly Key<Given>[], event: KeyboardEvent, given: Given): void {
+/** Does what a table has for a press. */
+export function answer<Given extends readonly unknown[]>(keys: readonly Key<Given>[], event: KeyboardEvent, given: Given): void {
   const key = keyFor(keys, event)
   if (key && key.run(event, ...given) !== false) event.preventDefault()
 }
@@ -27,6 +28,11 @@ export function useKeys<Given extends readonly unknown[] = []>(place: KeyPlace<G
   return (event, ...given) => {
     if (!isWriting(event.target)) answer(place.keys, event, given)
   }
+}
+
+/** Something that is dragged where nothing has keys of its own: only on the list, with the ways that lead there without dragging. */
+export function useDrag(place: string, drag: NonNullable<KeyPlace['drag']>): void {
+  useListed({ place, keys: [], drag })
 }
 
 /** Keys of a whole screen. They never work while somebody writes, or while a dialog asks something. */

@@ -1,4 +1,6 @@
 import type { Ref } from 'vue'
+import type { Key } from '~/composables/keys/key-list'
+import { answer } from '~/composables/keys/use-keys'
 import { turnedTo, UNTURNED, type TurnAngles } from '#shared/picture/turn/turn-angles'
 
 /** Degrees for a drag over the whole width, and for one press of an arrow key or a button. */
@@ -10,6 +12,8 @@ export interface TurnHand {
   hold: (event: PointerEvent) => void
   drag: (event: PointerEvent) => void
   let: (event: PointerEvent) => void
+  /** What each key does, for the list of keys and for `key`. */
+  keys: readonly Key[]
   key: (event: KeyboardEvent) => void
   step: (turn: number, tip: number) => void
   home: () => void
@@ -23,9 +27,20 @@ export function useTurnHand(angles: Ref<TurnAngles>): TurnHand {
     angles.value = turnedTo({ turn: angles.value.turn + turn, tip: angles.value.tip + tip })
   }
 
-  const KEYS: Readonly<Record<string, readonly [number, number]>> = {
-    ArrowRight: [STEP.key, 0], ArrowLeft: [-STEP.key, 0], ArrowDown: [0, STEP.key], ArrowUp: [0, -STEP.key], PageDown: [STEP.page, 0], PageUp: [-STEP.page, 0],
+  function home(): void {
+    angles.value = { ...UNTURNED }
   }
+
+  const by = (turn: number, tip: number) => () => push(turn, tip)
+  const keys: readonly Key[] = [
+    { press: ['ArrowLeft'], words: 'Turn to the left', run: by(-STEP.key, 0) },
+    { press: ['ArrowRight'], words: 'Turn to the right', run: by(STEP.key, 0) },
+    { press: ['ArrowUp'], words: 'Roll the near side up', run: by(0, -STEP.key) },
+    { press: ['ArrowDown'], words: 'Roll the near side down', run: by(0, STEP.key) },
+    { press: ['PageUp'], words: 'Roll far up', run: by(0, -STEP.page) },
+    { press: ['PageDown'], words: 'Roll far down', run: by(0, STEP.page) },
+    { press: ['Home'], words: 'Back to the left flank', run: home },
+  ]
 
   return {
     hold(event) {
@@ -42,16 +57,9 @@ export function useTurnHand(angles: Ref<TurnAngles>): TurnHand {
     let(event) {
       if (held?.pointer === event.pointerId) held = undefined
     },
-    key(event) {
-      const by = KEYS[event.key]
-      if (!by && event.key !== 'Home') return
-      event.preventDefault()
-      if (by) push(...by)
-      else angles.value = { ...UNTURNED }
-    },
+    keys,
+    key: event => answer(keys, event, []),
     step: (turn, tip) => push(turn * STEP.page, tip * STEP.page),
-    home() {
-      angles.value = { ...UNTURNED }
-    },
+    home,
   }
 }
