@@ -1,5 +1,6 @@
 import { expect, type Page, test } from '@playwright/test'
 import qrcode from 'qrcode'
+import sharp from 'sharp'
 import { type Gate, openGate } from './bench/gate'
 import { actsAtServer, goToLay, openRun, startRunAs } from './bench/run-ground'
 import { alive, demo, signIn } from './sign-in'
@@ -243,5 +244,45 @@ test('what the bench did is taken into the scheme by a press, and says what was 
   await page.context().clearCookies()
   await signIn(page, demo('painter'), `/runs/${runId}`)
   await page.getByRole('button', { name: 'Take what the bench did into the scheme' }).click()
-  await expect(page.getByText(/Taken into the draft: Coat 1: 13 drops of reducer/)).toBeVisible()
+  await expect(page.getByText(/Taken into the draft: .*13 drops of reducer/)).toBeVisible()
+})
+
+test('a piece is measured from a photo with a grey card, becomes the sample, and is withdrawn when it was wrong', async ({ page }) => {
+  const runId = await startRunAs(page, gate.url, 2)
+  await page.context().clearCookies()
+  await signIn(page, demo('painter'), `/runs/${runId}`)
+  // A grey card on the left, paint on the right.
+  const half = (background: { r: number, g: number, b: number }) => sharp({ create: { width: 200, height: 200, channels: 3, background } }).png().toBuffer()
+  const photo = await sharp({ create: { width: 400, height: 200, channels: 3, background: { r: 118, g: 118, b: 118 } } })
+    .composite([{ input: await half({ r: 190, g: 90, b: 60 }), left: 200, top: 0 }]).jpeg({ quality: 95 }).toBuffer()
+  const { scheme } = await ask<{ scheme: { id: string } }>(page, `/api/runs/${runId}`)
+  await page.evaluate(async ({ path, bytes }) => {
+    await fetch(path, { method: 'POST', headers: { 'content-type': 'application/octet-stream' }, body: Uint8Array.from(atob(bytes), letter => letter.charCodeAt(0)) })
+  }, { path: `/api/schemes/${scheme.id}/photos?runId=${runId}`, bytes: photo.toString('base64') })
+  await page.reload()
+  await alive(page)
+  await expect(page.getByText('A photo is only a guide').first()).toBeVisible()
+  await page.getByRole('button', { name: 'Measure a piece from a photo' }).click()
+  await page.getByLabel('Photo with a grey card').selectOption({ index: 1 })
+  const probe = page.getByRole('application', { name: /^Photo: tap the grey card/ })
+  await expect(probe).toBeVisible()
+  // The photo has to be drawn before a colour can be taken from it.
+  await expect(async () => {
+    const card = await page.getByRole('application').boundingBox()
+    await page.getByRole('application').click({ position: { x: card!.width * 0.25, y: card!.height / 2 } })
+    await expect(page.getByText('Now tap the back.')).toBeVisible({ timeout: 500 })
+  }).toPass()
+  const back = page.getByRole('application', { name: /^Photo: tap the back/ })
+  const box = await back.boundingBox()
+  await back.click({ position: { x: box!.width * 0.75, y: box!.height / 2 } })
+  await page.getByLabel('This piece is the sample of this finish').check()
+  await page.getByRole('button', { name: 'Note these colours' }).click()
+
+  const measure = page.getByRole('article').filter({ hasText: 'marked as the sample' })
+  await expect(measure.getByRole('cell', { name: /^\d+\.\d$/ }).first()).toBeVisible()
+  await expect(page.getByText(/The sample is piece 1 of run \d+, marked .* by Painter/)).toBeVisible()
+  await measure.getByRole('button', { name: 'Withdraw this measure' }).click()
+  await page.getByRole('dialog').getByRole('button', { name: 'Withdraw it' }).click()
+  await expect(measure.getByText(/Withdrawn .* by Painter: nothing is held against it/)).toBeVisible()
+  await expect(page.getByText('No piece is marked as the sample of this finish yet.')).toBeVisible()
 })
