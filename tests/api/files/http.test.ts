@@ -7,14 +7,14 @@ import { asOwner } from '../database'
 import { testWorkshop } from '../factories'
 import { type TestServer, testServer } from '../server'
 import { paintDraft } from '../shelf/ground'
-import { carriedScheme } from './ground'
+import { type Carried, carriedScheme } from './ground'
 
 let server: TestServer
 beforeAll(async () => {
   server = await testServer()
 }, 300_000)
 
-const PLAIN = { name: 'Perch in bars', coats: [{ paint: 0, passes: 3, reducer: 5, byHand: false, note: '' }], masked: true, ownMask: true, eyes: true, revisions: 1, ahead: false }
+const PLAIN: Carried = { name: 'Perch in bars', coats: [{ paint: 0, passes: 3, reducer: 5, byHand: false, note: '' }], masked: true, ownMask: true, eyes: true, revisions: 1, ahead: false }
 const schemesOf = (workshopId: string) => asOwner<{ id: string }>('select id from schemes where workshop_id = $1', [workshopId])
 
 describe('a scheme file over the network', () => {
