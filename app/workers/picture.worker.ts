@@ -120,7 +120,9 @@ async function paint({ picture, request, look, options }: Extract<Work, { ask: '
   let asides = 0
   for (const { stage, picture: painted } of bench.stages(look, options, lastWhole < AT_ONCE_MS ? 'full' : 'coarse')) {
     if (stage === 'full') lastWhole = performance.now() - since - asides
-    post({ answer: 'painted', picture, request, stage, painted, engine: engine.name }, [painted.rgba.buffer])
+    const { rgba, ...rest } = painted
+    const bitmap = await createImageBitmap(new ImageData(rgba, painted.width, painted.height))
+    post({ answer: 'painted', picture, request, stage, painted: { ...rest, bitmap }, engine: engine.name }, [bitmap])
     await breath()
     // The whole picture comes before what is said about it, unless the next edit is there already.
     const isEdited = wanted.has(picture)

@@ -42,9 +42,12 @@ export type PictureAsk = About<{ body: SchemeBody, materials: number }> | Forget
 
 export type { PictureStage } from './picture-bench'
 
+/** A picture as a page draws it: unpacked by the thread, so that the page only has to lay it on its canvas. */
+export type ShownPicture = Omit<Picture, 'rgba'> & { bitmap: ImageBitmap }
+
 /** What the painting thread answers. */
 export type PictureAnswer
-  = | { answer: 'painted', picture: string, request: number, stage: PictureStage, painted: Picture, engine: EngineName }
+  = | { answer: 'painted', picture: string, request: number, stage: PictureStage, painted: ShownPicture, engine: EngineName }
     | { answer: 'picked', picture: string, request: number, place: PickedPlace | undefined }
     | { answer: 'zones', picture: string, request: number, zones: ZoneColour[] }
     | { answer: 'spreads', picture: string, request: number, spreads: ZoneSpread[] }

@@ -2,14 +2,14 @@ import { onScopeDispose, ref, shallowRef, toValue, useId, watch, type MaybeRefOr
 import { paintingThread, type PaintingThread } from './painting-thread'
 import type { Look } from '#shared/picture/look'
 import type { PickedPlace } from '#shared/picture/pick-place'
-import type { PictureAnswer, PictureStage } from '#shared/picture/picture-messages'
+import type { PictureAnswer, PictureStage, ShownPicture } from '#shared/picture/picture-messages'
 import { fullOptions } from '#shared/picture/option-defaults'
-import type { Picture, PictureWish } from '#shared/picture/picture-options'
+import type { PictureWish } from '#shared/picture/picture-options'
 
 /** A picture that follows its look. */
 export interface UsePicture {
   /** The newest painting there is; it may still be of the look before the last edit. */
-  picture: ShallowRef<Picture | null>
+  picture: ShallowRef<ShownPicture | null>
   stage: Ref<PictureStage | 'none'>
   /** Why the last request could not be painted. */
   failed: Ref<string | null>
@@ -24,7 +24,7 @@ export interface UsePicture {
  */
 export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOrGetter<PictureWish | null>): UsePicture {
   const name = useId()
-  const picture = shallowRef<Picture | null>(null)
+  const picture = shallowRef<ShownPicture | null>(null)
   const stage = ref<PictureStage | 'none'>('none')
   const failed = ref<string | null>(null)
   const picks = new Map<number, (place: PickedPlace | undefined) => void>()
@@ -47,6 +47,8 @@ export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOr
     }
     // A coarse painting of an older look must not replace a fine one of it, but a fine one of a newer look may come late.
     if (answer.request < latest && stage.value !== 'none' && answer.stage === 'coarse') return
+    // What was drawn is drawn; what was not is too late.
+    picture.value?.bitmap.close()
     picture.value = answer.painted
     stage.value = answer.stage
     failed.value = null
@@ -71,6 +73,7 @@ export function usePicture(look: MaybeRefOrGetter<Look | null>, wish: MaybeRefOr
   onScopeDispose(() => {
     thread?.ask({ ask: 'forget', picture: name })
     hush?.()
+    picture.value?.bitmap.close()
   })
 
   return {
