@@ -153,7 +153,7 @@ create function schemes_worded(word text, as_recipes boolean) returns setof uuid
   language sql stable security definer set search_path = public, pg_temp as $$
   select scheme_id from scheme_words
     where workshop_id = app_workshop() and (names ilike word or (as_recipes and coats ilike word))
-  union
+  union all
   select s.id from blanks b join schemes s on s.blank_id = b.id
     where as_recipes and b.workshop_id = app_workshop() and s.workshop_id = app_workshop() and b.name ilike word
 $$;

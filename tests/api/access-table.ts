@@ -5,6 +5,7 @@ import { FILES_ACCESS } from './access/files'
 import { PEOPLE_ACCESS } from './access/people'
 import { SCHEME_ACCESS } from './access/scheme'
 import { SHELF_ACCESS } from './access/shelf'
+import { WALL_ACCESS } from './access/wall'
 
 /** Every route and who gets what from it. */
 export const ACCESS_TABLE: readonly AccessRow[] = [
@@ -14,4 +15,5 @@ export const ACCESS_TABLE: readonly AccessRow[] = [
   ...SCHEME_ACCESS,
   ...SHELF_ACCESS,
   ...FILES_ACCESS,
+  ...WALL_ACCESS,
 ]

@@ -1,9 +1,10 @@
-import { and, eq, gt, isNull, lte, or, type SQL, sql } from 'drizzle-orm'
+import { and, eq, gt, isNull, lte, type SQL, sql } from 'drizzle-orm'
 import { blanks, revisions, runs, schemePaints, schemes } from '#server/db/tables'
 import type { Ctx } from '#server/services/ctx'
 import { assertMay } from '#server/services/people/assert-may'
 import { may } from '#shared/people/may'
 import type { SchemeStand, WallWish } from '#shared/scheme/wall/wall-wish'
+import { answerWords } from './list-words'
 
 /** Joins the newest revision of a scheme. */
 export const head = and(eq(revisions.schemeId, schemes.id), eq(revisions.number, schemes.headNumber))
@@ -15,13 +16,17 @@ export function assertMayLookFor(ctx: Ctx, wish: WallWish): void {
   if (wish.stands === 'bench') assertMay(ctx, 'run:read')
 }
 
+/** What must be so of a scheme that answers a wish, and whether few schemes can: then they are all looked at instead of walked past. */
+export interface Answers { where: SQL | undefined, isFew: boolean }
+
 /**
- * What must be so of a scheme that answers a wish. Every comparison behind which rows of other workshops could be told is a plain
- * equality, so that indexes serve it from behind the wall; words go through the one door made for them.
+ * What a wish comes to. Every comparison behind which rows of other workshops could be told is a plain equality, so that indexes serve
+ * it from behind the wall; words go through the one door made for them.
  */
-export function answers(tx: Ctx, wish: WallWish): SQL | undefined {
+export async function answers(tx: Ctx, wish: WallWish): Promise<Answers> {
   const isRecipe = may(tx.role, 'scheme:read')
-  return and(
+  const words = await answerWords(tx, wish.words)
+  const where = and(
     eq(schemes.workshopId, tx.workshopId),
     wish.stands === 'away' ? eq(schemes.retired, true) : wish.retired === 'without' ? eq(schemes.retired, false) : undefined,
     wish.blankId ? eq(isRecipe ? schemes.blankId : blanks.id, wish.blankId) : undefined,
@@ -29,17 +34,9 @@ export function answers(tx: Ctx, wish: WallWish): SQL | undefined {
     wish.personId ? eq(schemes.savedBy, wish.personId) : undefined,
     wish.paintId ? usesPaint(tx, wish.paintId) : undefined,
     wish.stands ? standsAs(tx, wish.stands) : undefined,
-    ...wordsOf(wish.words).map(word => isRecipe ? worded(word, true) : or(worded(word, false), sql`${blanks.name} ilike ${word}`)),
+    words.where,
   )
-}
-
-function wordsOf(words: string): string[] {
-  return words.split(/\s+/).filter(word => word !== '').map(word => `%${word.replace(/[\\%_]/g, '\\$&')}%`)
-}
-
-/** Name, fish or, for those who read recipes, coats and blank. */
-function worded(word: string, asRecipes: boolean): SQL {
-  return sql`${schemes.id} in (select schemes_worded(${word}, ${asRecipes}))`
+  return { where, isFew: words.isRare || wish.paintId !== undefined || wish.stands === 'away' || wish.stands === 'bench' }
 }
 
 function usesPaint(tx: Ctx, paintId: string): SQL {

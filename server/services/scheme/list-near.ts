@@ -1,4 +1,4 @@
-import { and, eq, sql } from 'drizzle-orm'
+import { and, eq, type SQL, sql } from 'drizzle-orm'
 import { z } from 'zod'
 import { blanks, colourFills, revisions, schemeColours, schemes, type Side } from '#server/db/tables'
 import type { Ctx } from '#server/services/ctx'
@@ -32,8 +32,8 @@ export const nearKey = ({ row, near }: NearRow): NearAfter => [near.distance, ro
 /** Zones fetched at first; each fetch after it takes twice as many. */
 const FETCH = 256
 const FETCH_MOST = 8192
-/** How little of the whole answer is wanted: the planner walks the index instead of sorting. */
-const SHARE_WANTED = '0.0001'
+/** How little of the whole answer is wanted, so that the planner walks the index instead of sorting; where few schemes can answer, all of it. */
+export const SHARE_WANTED = '0.0001'
 
 /**
  * Schemes that answer a search, nearest to its colour first: by CIEDE2000 to the zone of each that comes nearest; one row more than
@@ -57,29 +57,30 @@ type Nearest = [schemeId: string, near: NearView]
 interface Zone { schemeId: string, zone: string, label: string, lightness: number, a: number, b: number, straight: number }
 
 /** The query whose rows come in rising straight distance. */
-export function zonesByDistance(tx: Ctx, { query, wanted, side }: { query: SchemeQuery, wanted: Lab, side: Side }) {
+export function zonesByDistance(tx: Ctx, { where, wanted, side }: { where: SQL | undefined, wanted: Lab, side: Side }) {
   const straight = sql<number>`cube(array[${schemeColours.lightness}, ${schemeColours.a}, ${schemeColours.b}])
     <-> cube(array[${wanted[0]}, ${wanted[1]}, ${wanted[2]}]::float8[])`
   const zones = tx.db.select({
     schemeId: sql<string>`${schemeColours.schemeId}`.as('schemeId'), zone: schemeColours.zone, label: schemeColours.label,
     lightness: schemeColours.lightness, a: schemeColours.a, b: schemeColours.b, straight: straight.as('straight'),
   }).from(schemeColours).innerJoin(schemes, eq(schemes.id, schemeColours.schemeId))
-  const where = and(eq(schemeColours.workshopId, tx.workshopId), eq(schemeColours.side, side), answers(tx, query))
+  const all = and(eq(schemeColours.workshopId, tx.workshopId), eq(schemeColours.side, side), where)
   return side === 'head'
-    ? zones.innerJoin(revisions, head).innerJoin(blanks, sql`${blanks.id} = (${revisions.body} ->> 'blankId')::uuid`).where(where).orderBy(straight).getSQL()
-    : zones.leftJoin(revisions, head).where(where).orderBy(straight).getSQL()
+    ? zones.innerJoin(revisions, head).innerJoin(blanks, sql`${blanks.id} = (${revisions.body} ->> 'blankId')::uuid`).where(all).orderBy(straight).getSQL()
+    : zones.leftJoin(revisions, head).where(all).orderBy(straight).getSQL()
 }
 
 async function nearestSchemes(tx: Ctx, ask: { query: SchemeQuery, wanted: Lab, side: Side, after: NearAfter | null }): Promise<Nearest[]> {
-  const { query, wanted, after } = ask
+  const { query, wanted, side, after } = ask
+  const { where, isFew } = await answers(tx, query)
   const floorAt = nearnessFloor(wanted)
   const nearest = new Map<string, NearView>()
   /** Rows of this page and later ones that no zone still to come can displace. */
   const certain = (floor: number): Nearest[] => [...nearest]
     .filter(([id, { distance }]) => distance < floor && (!after || distance > after[0] || (distance === after[0] && id > after[1])))
 
-  await tx.db.execute(sql`select set_config('cursor_tuple_fraction', ${SHARE_WANTED}, true)`)
-  await tx.db.execute(sql`declare zones_near no scroll cursor for ${zonesByDistance(tx, ask)}`)
+  await tx.db.execute(sql`select set_config('cursor_tuple_fraction', ${isFew ? '1' : SHARE_WANTED}, true)`)
+  await tx.db.execute(sql`declare zones_near no scroll cursor for ${zonesByDistance(tx, { where, wanted, side })}`)
   let found: Nearest[] = []
   for (let count = FETCH; ; count = Math.min(count * 2, FETCH_MOST)) {
     const { rows } = await tx.db.execute<Zone & Record<string, unknown>>(sql.raw(`fetch ${count} from zones_near`))

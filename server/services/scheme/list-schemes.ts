@@ -27,9 +27,9 @@ const maskCount = sql<number>`jsonb_array_length(${schemes.draft} -> 'masks')`
  */
 export async function listSchemes(ctx: Ctx, query: SchemeQuery, after: SchemesAfter | null): Promise<SchemeRowView[]> {
   assertMayLookFor(ctx, query)
-  return inTransaction<Ctx, SchemeRowView[]>(ctx, (tx) => {
+  return inTransaction<Ctx, SchemeRowView[]>(ctx, async (tx) => {
     const isRecipe = may(tx.role, 'scheme:read')
-    const page = { where: and(answers(tx, query), before(isRecipe ? schemes.savedAt : revisions.publishedAt, after)), limit: query.limit + 1 }
+    const page = { where: and((await answers(tx, query)).where, before(isRecipe ? schemes.savedAt : revisions.publishedAt, after)), limit: query.limit + 1 }
     return isRecipe ? recipes(tx, page) : looks(tx, page)
   })
 }

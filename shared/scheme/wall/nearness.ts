@@ -6,11 +6,13 @@ import type { Lab } from '#shared/shelf/paint'
  *
  * Write D for the distance in a*, b* and y for that in L*. Stretching a* (by the same s, 1 to 1.5, for both colours) makes D no
  * shorter, and ΔC′² + ΔH′² is the square of the stretched distance x. With mean stretched chroma C at most C₁′ + x/2:
- *  - S_H ≤ S_C = 1 + 0.045 C, since 0.015 T ≤ 0.029, so the two terms come to at least (x / S_C)², which grows with x;
- *  - the turn R_T takes at most |R_T|/2 of that away, as 2|uv| ≤ u² + v²; its size has a bound from the most chroma there can be
- *    and from how near the mean hue can come to 275°: half the angle that x is seen under from the wanted colour;
+ *  - S_C = 1 + 0.045 C and S_H = 1 + 0.015 C T are no more than C and the hues that can be the middle one allow;
+ *  - the turn R_T has a bound from the most chroma there can be and from how near the middle hue can come to 275°. However x is shared
+ *    between chroma and hue, they come to at least x² times the lesser eigenvalue of [[p², −rpq/2], [−rpq/2, q²]] with p = 1/S_C,
+ *    q = 1/S_H, r = |R_T|; it grows with p and q, since the inverse has positive entries only that fall with both;
+ *  - the middle hue is off the wanted one by at most half the angle that x is seen under from the wanted colour;
  *  - S_L grows with how far the mean lightness is from 50, at most |L₁ − 50| + y/2, and y / S_L grows with y.
- * Taken over rings of D, each at its kindest ends, the least sum is a floor that no colour goes below.
+ * x / S_C and x / S_H grow with x. Taken over rings of D, each at its kindest ends, the least sum is a floor that no colour goes below.
  */
 
 /** Width of a ring of chroma distance, and how far they go: no two colours of the index are farther apart. */
@@ -26,7 +28,7 @@ export type NearnessFloor = (distance: number) => number
  * The floor under CIEDE2000 around a wanted colour. It never falls as the distance grows.
  *
  * @param wanted CIELAB
- * @accuracy never above the true least; about a tenth below it for greys, a half for strong blues
+ * @accuracy never above the true least; about a tenth below it for greys, less than half of it only for strong blues
  */
 export function nearnessFloor(wanted: Lab): NearnessFloor {
   const rings = Array.from({ length: RINGS }, (_, i) => chromaFloor(wanted, i * RING, (i + 1) * RING))
@@ -35,9 +37,9 @@ export function nearnessFloor(wanted: Lab): NearnessFloor {
     rings.forEach((across, i) => {
       const inner = (i + 1) * RING
       const along = inner < distance ? lightnessFloor(wanted[0], Math.sqrt(distance ** 2 - inner ** 2)) : 0
-      least = Math.min(least, Math.hypot(across, along))
+      least = Math.min(least, across ** 2 + along ** 2)
     })
-    return least
+    return Math.sqrt(least)
   }
 }
 
@@ -52,11 +54,13 @@ function chromaFloor([, a, b]: Lab, from: number, to: number): number {
   const chroma = Math.hypot(a, b)
   const least = stretch(chroma + to / 2), most = stretch(Math.max(0, chroma - to / 2))
   const own = Math.hypot(a * most, b)
-  const x = from
   const farthest = to * most
-  const SC = 1 + 0.045 * (own + x / 2)
-  const turn = turnAtMost({ gap: hueGap(a, b, least, most, Math.hypot(a * least, b), farthest), chroma: own + farthest / 2 })
-  return x / SC * Math.sqrt(1 - turn / 2)
+  const middle = middleHues(a, b, least, most, farthest)
+  const meanChroma = own + from / 2
+  const p = 1 / (1 + 0.045 * meanChroma)
+  const q = 1 / (1 + 0.015 * meanChroma * hueWeightAtMost(middle))
+  const r = turnAtMost(Math.max(0, Math.abs(fromBlue(middle.hue)) - middle.off), own + farthest / 2)
+  return from * Math.sqrt((p * p + q * q - Math.sqrt((p * p - q * q) ** 2 + (r * p * q) ** 2)) / 2)
 }
 
 function stretch(meanChroma: number): number {
@@ -64,13 +68,28 @@ function stretch(meanChroma: number): number {
   return 1.5 - 0.5 * Math.sqrt(c7 / (c7 + BEND))
 }
 
-/** How near to 275° the middle of the two hues can come, degrees. */
-function hueGap(a: number, b: number, least: number, most: number, own: number, x: number): number {
-  if (x >= own) return 0
-  const gaps = [least, most].map(s => fromBlue(Math.atan2(b, a * s) / RADIANS))
-  const isAcross = gaps[0]! * gaps[1]! < 0
-  const gap = isAcross ? 0 : Math.min(...gaps.map(Math.abs))
-  return Math.max(0, gap - Math.asin(x / own) / RADIANS / 2)
+/** Where the middle of two hues can lie: about a hue, off by at most so many degrees. */
+interface MiddleHues { hue: number, off: number }
+
+function middleHues(a: number, b: number, least: number, most: number, x: number): MiddleHues {
+  const own = Math.hypot(a * least, b)
+  if (x >= own) return { hue: 0, off: 180 }
+  const [one, other] = [Math.atan2(b, a * least) / RADIANS, Math.atan2(b, a * most) / RADIANS]
+  return { hue: (one + other) / 2, off: Math.abs(one - other) / 2 + Math.asin(x / own) / RADIANS / 2 }
+}
+
+/** Step at which hues are tried, degrees; T changes by at most 2.41 per radian, so by at most half a step's worth between two of them. */
+const HUE_STEP = 4
+const BETWEEN = 2.41 * HUE_STEP / 2 * RADIANS
+
+function hueWeightAtMost({ hue, off }: MiddleHues): number {
+  let most = 0
+  for (let at = hue - off; at < hue + off + HUE_STEP; at += HUE_STEP) most = Math.max(most, hueWeight(at))
+  return most + BETWEEN
+}
+
+function hueWeight(h: number): number {
+  return 1 - 0.17 * Math.cos((h - 30) * RADIANS) + 0.24 * Math.cos(2 * h * RADIANS) + 0.32 * Math.cos((3 * h + 6) * RADIANS) - 0.20 * Math.cos((4 * h - 63) * RADIANS)
 }
 
 /** Degrees from 275°, −180…180. */
@@ -78,7 +97,7 @@ function fromBlue(hue: number): number {
   return ((hue - 275) % 360 + 540) % 360 - 180
 }
 
-function turnAtMost({ gap, chroma }: { gap: number, chroma: number }): number {
+function turnAtMost(gap: number, chroma: number): number {
   const c7 = chroma ** 7
   return 2 * Math.sqrt(c7 / (c7 + BEND)) * Math.sin(60 * Math.exp(-((gap / 25) ** 2)) * RADIANS)
 }
