@@ -100,7 +100,7 @@ test('what was typed in psi is psi again where psi are shown, and the amounts tu
     const dialog = await openAmounts(page)
     await dialog.getByText('Area by zone').click()
     await expect(dialog.getByRole('row', { name: /^Upper flank .*in²/ })).toBeVisible()
-    await expect(dialog.getByText(/fl oz/).last()).toBeVisible()
+    await expect(dialog.getByRole('region', { name: 'From the bottles' }).getByText('fl oz').first()).toBeVisible()
     await page.setViewportSize({ width: 390, height: 844 })
     expect(await dialog.evaluate(box => box.scrollWidth - box.clientWidth)).toBeLessThanOrEqual(0)
     expect(await faults(page)).toEqual([])
