@@ -31,20 +31,20 @@ async function faultless(page: Page) {
   expect(violations.map(each => `${each.id}: ${each.nodes[0]?.html}`)).toEqual([])
 }
 
-test('a coat laid otherwise low in the stack marks the coats above it, until something else is done', async ({ browser }) => {
+test('a coat carried up the stack marks the coats it was under, until something else is done', async ({ browser }) => {
   const { page, breaches } = await enter(browser, 'painter', '/schemes')
   const { id } = await colourway(page)
   const film = await open(page, id)
-  await film.getByRole('button', { name: /^Coat 2, / }).click()
-  const passes = page.getByRole('region', { name: 'Coat sheet' }).getByRole('spinbutton', { name: 'Passes', exact: true })
-  await passes.fill('1')
-  await passes.press('Tab')
+  const third = film.getByRole('button', { name: /^Coat 3, / })
+  const title = (await third.getAttribute('aria-label'))!.split(', ')[1]!
+  await film.getByRole('button', { name: `Move ${title}`, exact: true }).focus()
+  for (const key of ['Space', 'ArrowUp', 'ArrowUp', 'Space']) await page.keyboard.press(key)
   await expect(film.getByRole('button', { name: /^Coat \d+, .* changed \d+\.\d, most on the / }).first()).toBeVisible()
   await expect(film.getByText(/coats? looks? otherwise now/)).toBeVisible()
   // The coat itself is what was done, not what follows from it.
-  await expect(film.getByRole('button', { name: /^Coat 2, .* changed/ })).toHaveCount(0)
+  await expect(film.getByRole('button', { name: new RegExp(`^Coat \\d+, ${title}, .* changed`) })).toHaveCount(0)
   await faultless(page)
-  await page.getByRole('button', { name: /^Undo: / }).click()
+  for (let steps = 0; steps < 2; steps++) await page.getByRole('button', { name: /^Undo: / }).click()
   await expect(film.getByText(/coats? looks? otherwise now/)).toHaveCount(0)
   expect(breaches).toEqual([])
   await page.context().close()
