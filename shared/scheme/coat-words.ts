@@ -82,6 +82,11 @@ export function whereWords(where: Where): string {
 }
 
 function markWord(mark: Mark): string {
+  const word = markFormWord(mark)
+  return 'only' in mark && mark.only ? `${word} on the ${mark.only} side only` : word
+}
+
+function markFormWord(mark: Mark): string {
   switch (mark.kind) {
     case 'strokes': return `${countWords(mark.strokes.length, 'stroke')} by ${mark.with}`
     case 'fan': return `a fan of ${countWords(mark.count, 'ray')}`
@@ -95,7 +100,9 @@ function markWord(mark: Mark): string {
 
 /** What is drawn by hand: "3 strokes by airbrush and 12 dots"; empty when nothing is. */
 export function marksWords(marks: readonly Mark[]): string {
-  return listWords(marks.map(markWord))
+  const counts = new Map<string, number>()
+  for (const mark of marks) counts.set(markWord(mark), (counts.get(markWord(mark)) ?? 0) + 1)
+  return listWords([...counts].map(([word, count]) => count === 1 ? word : `${count} times ${word}`))
 }
 
 /** How long it waits: "rests 5 min", "rests 1 h 30 min, heat-set 60 s". */

@@ -7,7 +7,7 @@ import type { PreparedBlank } from '#shared/blank/prepared-blank'
 import type { DrawingPoint } from '#shared/blank/side-outline'
 import type { Mark, OnlySide, Place } from '#shared/scheme/mark'
 import type { LaidMark } from '#shared/scheme/mark-lay'
-import { type Fan, partAt, type MarkPart, type PartAt, withFan, withoutPart, withPlaces, withWidth } from '#shared/scheme/mark-parts'
+import { type Fan, partAt, type MarkPart, type PartAt, withFan, withoutPart, withPlaces, withSide, withWidth } from '#shared/scheme/mark-parts'
 import type { TracePoint } from '#shared/scheme/outline/trace'
 
 /** Work by hand on the marks of one coat. */
@@ -43,6 +43,8 @@ export interface Hand {
   fan: ComputedRef<Fan | null>
   /** Gives the chosen fan other rays. */
   spreads: (change: Partial<Pick<Fan, 'count' | 'length' | 'angle'>>) => void
+  /** Lays the chosen part, with the sheet it is on, on both flanks or on one alone. */
+  sides: (only: OnlySide) => void
   takesOut: () => void
   /** Whether something done here can be taken back, and taking it back, step by step. */
   canTakeBack: ComputedRef<boolean>
@@ -145,6 +147,9 @@ export function provideHand(work: { blank: () => PreparedBlank, marks: () => rea
     }),
     spreads(to) {
       if (chosen.value) change(withFan(marks.value, chosen.value, to))
+    },
+    sides(to) {
+      if (chosen.value) change(withSide(marks.value, chosen.value, to))
     },
     takesOut() {
       if (!chosen.value) return

@@ -43,7 +43,10 @@ function markMap(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
 
 function drawMark(keep: DepositKeep, mark: Mark, seed: number): Float32Array {
   const { table } = keep.blank
-  const bothSides = (field: (side: 1 | -1) => PlaneField) => fieldMap(keep, field(1), field(-1))
+  const only = 'only' in mark ? mark.only : undefined
+  /** A flank that does not carry the mark has nothing of its own; what crosses the ridge still reaches it. */
+  const on = (field: PlaneField, side: 'left' | 'right') => only === undefined || only === side ? field : { ...field, at: () => 0 }
+  const bothSides = (field: (side: 1 | -1) => PlaneField) => fieldMap(keep, on(field(1), 'left'), on(field(-1), 'right'))
   switch (mark.kind) {
     case 'strokes': {
       const strokes = mark.strokes.map(stroke => ({ ...stroke, points: draped(table, stroke.points, false) }))

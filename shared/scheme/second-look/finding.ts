@@ -3,7 +3,7 @@ import type { Lab } from '#shared/shelf/paint'
 /** What a second look at a stack warns of. */
 export const SECOND_LOOKS = [
   'candy-over-dark', 'interference-over-pale', 'pearl-unseen', 'fluorescent-over-dark',
-  'clear-over-damp', 'solvent-over-fresh', 'thick-for-a-day', 'lifted-early', 'paint-retired', 'paint-gone',
+  'clear-over-damp', 'solvent-over-fresh', 'thick-for-a-day', 'lifted-early', 'mesh-filled', 'paint-retired', 'paint-gone',
 ] as const
 export type SecondLook = typeof SECOND_LOOKS[number]
 

@@ -1,6 +1,7 @@
 import type { SchemeBody } from '../body'
 import type { Coat } from '../coat'
 import type { Materials } from '../materials'
+import { meshFills } from '../outline/mesh-fill'
 import { coatWord } from '../publishable'
 import { coatsOf } from '../stack-order'
 import type { Finding, GroundUnder, PaintToday } from './finding'
@@ -19,6 +20,7 @@ export function secondLook(body: SchemeBody, materials: Materials, grounds: read
   return [
     ...groundFindings(body, materials, coats, grounds),
     ...restFindings(body, materials),
+    ...meshFills(body, materials).map((fill): Finding => ({ look: 'mesh-filled', coatId: fill.coatId, key: fill.key, says: fill.says, why: fill.why })),
     ...coats.flatMap(coat => paintFindings(body, materials, coat, shelf)),
   ].sort((a, b) => order.get(a.coatId)! - order.get(b.coatId)!)
 }
