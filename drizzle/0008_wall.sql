@@ -151,8 +151,9 @@ create trigger noted after update on blanks for each row when (old.shape is dist
 -- This door does, and names the acting workshop itself.
 create function schemes_worded(word text, as_recipes boolean) returns setof uuid
   language sql stable security definer set search_path = public, pg_temp as $$
-  select scheme_id from scheme_words
-    where workshop_id = app_workshop() and (names ilike word or (as_recipes and coats ilike word))
+  select scheme_id from scheme_words where workshop_id = app_workshop() and names ilike word
+  union all
+  select scheme_id from scheme_words where as_recipes and workshop_id = app_workshop() and coats ilike word
   union all
   select s.id from blanks b join schemes s on s.blank_id = b.id
     where as_recipes and b.workshop_id = app_workshop() and s.workshop_id = app_workshop() and b.name ilike word

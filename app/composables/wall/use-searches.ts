@@ -10,9 +10,9 @@ export async function useWallChoices(): Promise<ComputedRef<WallChoices>> {
 }
 
 /** The searches one keeps, and the ways to keep and forget one; each throws when it could not be done. */
-export async function useSavedSearches() {
+export function useSavedSearches() {
   const request = useApi()
-  const { data, refresh } = await useAsyncData('wall searches', () => request('/api/saved-searches').catch(() => []), { deep: false })
+  const { data, refresh } = useAsyncData('wall searches', () => request('/api/saved-searches').catch(() => []), { deep: false })
   return {
     searches: computed<readonly SavedSearchView[]>(() => data.value ?? []),
     async keep(name: string, wish: WallWish) {

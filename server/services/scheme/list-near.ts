@@ -32,6 +32,8 @@ export const nearKey = ({ row, near }: NearRow): NearAfter => [near.distance, ro
 /** Zones fetched at first; each fetch after it takes twice as many. */
 const FETCH = 256
 const FETCH_MOST = 8192
+/** After so many zones in order the wanted colour is far from all there is, and reading the rest in no order is quicker. */
+const WALKED_MOST = 16_000
 /** How little of the whole answer is wanted, so that the planner walks the index instead of sorting; where few schemes can answer, all of it. */
 export const SHARE_WANTED = '0.0001'
 
@@ -54,47 +56,75 @@ export async function listNear(ctx: Ctx, query: SchemeQuery, after: NearAfter | 
 }
 
 type Nearest = [schemeId: string, near: NearView]
-interface Zone { schemeId: string, zone: string, label: string, lightness: number, a: number, b: number, straight: number }
+interface Zone extends Record<string, unknown> { schemeId: string, zone: string, label: string, lightness: number, a: number, b: number, straight: number }
 
-/** The query whose rows come in rising straight distance. */
-export function zonesByDistance(tx: Ctx, { where, wanted, side }: { where: SQL | undefined, wanted: Lab, side: Side }) {
-  const straight = sql<number>`cube(array[${schemeColours.lightness}, ${schemeColours.a}, ${schemeColours.b}])
-    <-> cube(array[${wanted[0]}, ${wanted[1]}, ${wanted[2]}]::float8[])`
+/** What zones are asked for. */
+export interface ZonesAsked { where: SQL | undefined, wanted: Lab, side: Side }
+
+/** The zones of schemes that answer, in no order. */
+function zonesOf(tx: Ctx, { where, wanted, side }: ZonesAsked) {
   const zones = tx.db.select({
     schemeId: sql<string>`${schemeColours.schemeId}`.as('schemeId'), zone: schemeColours.zone, label: schemeColours.label,
-    lightness: schemeColours.lightness, a: schemeColours.a, b: schemeColours.b, straight: straight.as('straight'),
+    lightness: schemeColours.lightness, a: schemeColours.a, b: schemeColours.b, straight: straightTo(wanted).as('straight'),
   }).from(schemeColours).innerJoin(schemes, eq(schemes.id, schemeColours.schemeId))
   const all = and(eq(schemeColours.workshopId, tx.workshopId), eq(schemeColours.side, side), where)
   return side === 'head'
-    ? zones.innerJoin(revisions, head).innerJoin(blanks, sql`${blanks.id} = (${revisions.body} ->> 'blankId')::uuid`).where(all).orderBy(straight).getSQL()
-    : zones.leftJoin(revisions, head).where(all).orderBy(straight).getSQL()
+    ? zones.innerJoin(revisions, head).innerJoin(blanks, sql`${blanks.id} = (${revisions.body} ->> 'blankId')::uuid`).where(all).$dynamic()
+    : zones.leftJoin(revisions, head).where(all).$dynamic()
+}
+
+/** The same in rising straight distance, as the index of colours gives them. */
+export function zonesByDistance(tx: Ctx, asked: ZonesAsked): SQL {
+  return sql`${zonesOf(tx, asked).getSQL()} order by ${straightTo(asked.wanted)}`
+}
+
+function straightTo([lightness, a, b]: Lab): SQL<number> {
+  return sql<number>`cube(array[${schemeColours.lightness}, ${schemeColours.a}, ${schemeColours.b}]) <-> cube(array[${lightness}, ${a}, ${b}]::float8[])`
 }
 
 async function nearestSchemes(tx: Ctx, ask: { query: SchemeQuery, wanted: Lab, side: Side, after: NearAfter | null }): Promise<Nearest[]> {
-  const { query, wanted, side, after } = ask
-  const { where, isFew } = await answers(tx, query)
+  const { query: { limit }, wanted, side, after } = ask
+  const { where, isFew } = await answers(tx, ask.query)
   const floorAt = nearnessFloor(wanted)
   const nearest = new Map<string, NearView>()
-  /** Rows of this page and later ones that no zone still to come can displace. */
-  const certain = (floor: number): Nearest[] => [...nearest]
-    .filter(([id, { distance }]) => distance < floor && (!after || distance > after[0] || (distance === after[0] && id > after[1])))
-
-  await tx.db.execute(sql`select set_config('cursor_tuple_fraction', ${isFew ? '1' : SHARE_WANTED}, true)`)
-  await tx.db.execute(sql`declare zones_near no scroll cursor for ${zonesByDistance(tx, { where, wanted, side })}`)
-  let found: Nearest[] = []
-  for (let count = FETCH; ; count = Math.min(count * 2, FETCH_MOST)) {
-    const { rows } = await tx.db.execute<Zone & Record<string, unknown>>(sql.raw(`fetch ${count} from zones_near`))
-    for (const { schemeId, zone, label, lightness, a, b } of rows) {
+  const take = (zones: readonly Zone[]) => {
+    for (const { schemeId, zone, label, lightness, a, b } of zones) {
       const distance = deltaE2000(wanted, [lightness, a, b])
       if (distance < (nearest.get(schemeId)?.distance ?? Infinity)) nearest.set(schemeId, { zone, label, distance })
     }
-    const last = rows.at(-1)
-    const isAll = !last || rows.length < count
-    found = certain(isAll ? Infinity : floorAt(last.straight))
-    if (isAll || found.length > query.limit) break
   }
-  await tx.db.execute(sql`close zones_near`)
-  return found.sort(([id, one], [otherId, other]) => one.distance - other.distance || (id < otherId ? -1 : 1)).slice(0, query.limit + 1)
+  /** Those of this page and later ones that no zone at or above the floor can displace. */
+  const below = (floor: number): Nearest[] => [...nearest]
+    .filter(([id, { distance }]) => distance < floor && (!after || distance > after[0] || (distance === after[0] && id > after[1])))
+
+  await tx.db.execute(sql`select set_config('cursor_tuple_fraction', ${isFew ? '1' : SHARE_WANTED}, true)`)
+  let walked = 0
+  for await (const zones of fetched(tx, 'zones_near', zonesByDistance(tx, { where, wanted, side }))) {
+    take(zones)
+    walked += zones.length
+    const found = below(floorAt(zones.at(-1)!.straight))
+    if (found.length > limit) return firstOf(found, limit + 1)
+    if (walked >= WALKED_MOST) break
+  }
+  if (walked >= WALKED_MOST) {
+    await tx.db.execute(sql`select set_config('cursor_tuple_fraction', '1', true)`)
+    for await (const zones of fetched(tx, 'zones_all', zonesOf(tx, { where, wanted, side }).getSQL())) take(zones)
+  }
+  return firstOf(below(Infinity), limit + 1)
+}
+
+function firstOf(found: Nearest[], count: number): Nearest[] {
+  return found.sort(([id, one], [otherId, other]) => one.distance - other.distance || (id < otherId ? -1 : 1)).slice(0, count)
+}
+
+/** Rows of a query, more at each fetch. What is not fetched is never read; the transaction lets go of the rest. */
+async function* fetched(tx: Ctx, cursor: 'zones_near' | 'zones_all', query: SQL): AsyncGenerator<Zone[]> {
+  await tx.db.execute(sql`declare ${sql.identifier(cursor)} no scroll cursor for ${query}`)
+  for (let count = FETCH; ; count = Math.min(count * 2, FETCH_MOST)) {
+    const { rows } = await tx.db.execute<Zone>(sql.raw(`fetch ${count} from ${cursor}`))
+    if (rows.length > 0) yield rows
+    if (rows.length < count) return
+  }
 }
 
 async function waitingFor(tx: Ctx, side: Side): Promise<number> {

@@ -6,6 +6,9 @@ import { may } from '#shared/people/may'
 /** A word that so many schemes have at most is rare: they are looked up, and nothing else is read. */
 const RARE = 2000
 
+/** Shorter words hold no three letters in a row for the index to go by. */
+const INDEXED = 3
+
 /** What words come to: a condition, and whether few schemes meet it. */
 export interface WordsAsked { where: SQL | undefined, isRare: boolean }
 
@@ -18,7 +21,7 @@ export async function answerWords(tx: Ctx, words: string): Promise<WordsAsked> {
   const asked = await Promise.all(words.split(/\s+/).filter(word => word !== '').map(async (word) => {
     const like = `%${word.replace(/[\\%_]/g, '\\$&')}%`
     // The blank that was painted may not be the draft's, so for looks every row is judged by what it shows.
-    const ids = isRecipe ? await schemesWith(tx, like) : null
+    const ids = isRecipe && word.length >= INDEXED ? await schemesWith(tx, like) : null
     return ids ? { where: inArray(schemes.id, ids), isRare: true } : { where: rowHas(tx, like, isRecipe), isRare: false }
   }))
   return { where: and(...asked.map(({ where }) => where)), isRare: asked.some(({ isRare }) => isRare) }

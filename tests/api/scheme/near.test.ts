@@ -51,7 +51,7 @@ async function pages(near: string, count: number, more: Partial<SchemeQuery> = {
 }
 
 describe('near this colour', () => {
-  it.each(['50 0 0', '62 2 -3', '30 20 -55', '45 58 40', '85 -15 62', '3 0 0', '98 0 0', 'rebeccapurple'])('names the nearest to %s, page after page, as if every zone had been compared', async (near) => {
+  it.each(['50 0 0', '62 2 -3', '30 20 -55', '45 58 40', '85 -15 62', '3 0 0', '98 0 0', 'rebeccapurple', '32 79 -108'])('names the nearest to %s, page after page, as if every zone had been compared', async (near) => {
     expect((await pages(near, 3)).map(nearKey)).toEqual(byHand(near).slice(0, 72))
   })
 
