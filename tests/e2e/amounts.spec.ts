@@ -114,7 +114,7 @@ test('what was typed in psi is psi again where psi are shown, and the amounts tu
 
 test('the bench asks how much, and sees no cost', async ({ browser }) => {
   const { page } = await enter(browser, 'bench', scheme)
-  await page.getByRole('button', { name: /^More for / }).first().click()
+  await page.getByRole('region', { name: 'Coat sheet' }).getByRole('button', { name: /^More for / }).click()
   await page.getByRole('menuitem', { name: 'Amounts' }).click()
   const dialog = page.getByRole('dialog', { name: 'Amounts' })
   await expect(dialog.getByText('From the bottles')).toBeVisible()
