@@ -2,7 +2,7 @@ import { ref } from 'vue'
 import { api } from '~/composables/api/api'
 import { useAttempt } from '~/composables/people/use-attempt'
 import { useToast } from '~/composables/ui/use-toast'
-import type { PutAwayView, StayReason } from '#shared/scheme/wall/wall-wish'
+import { PUT_AWAY_MAX, type PutAwayView, type StayReason } from '#shared/scheme/wall/wall-wish'
 
 const WHY: Readonly<Record<StayReason, string>> = {
   gone: 'it is no longer in this workshop',
@@ -18,13 +18,20 @@ export function usePutAway(after: () => Promise<void>) {
   const stayed = ref<readonly string[]>([])
 
   async function putAway(ids: readonly string[], away: boolean): Promise<boolean> {
-    let answer: PutAwayView | undefined
+    const done: PutAwayView['done'] = []
+    const left: PutAwayView['stayed'] = []
     const isDone = await attempt(async () => {
-      answer = await api('/api/schemes/put-away', { method: 'POST', body: { ids, away } })
-      await after()
+      try {
+        for (let at = 0; at < ids.length; at += PUT_AWAY_MAX) {
+          const answer = await api('/api/schemes/put-away', { method: 'POST', body: { ids: ids.slice(at, at + PUT_AWAY_MAX), away } })
+          done.push(...answer.done)
+          left.push(...answer.stayed)
+        }
+      }
+      finally {
+        await after()
+      }
     })
-    if (!answer) return isDone
-    const { done, stayed: left } = answer
     stayed.value = left.map(({ name, why }) => `${name ?? 'One of them'} stays: ${WHY[why]}.`)
     if (done.length > 0) {
       const what = done.length === 1 ? done[0]!.name : `${done.length} schemes`

@@ -46,8 +46,11 @@ export type SearchParams = z.output<typeof SearchParams>
 export const WallChoices = z.object({ fish: z.array(z.string()), people: z.array(z.object({ id: z.uuid(), name: z.string() })) })
 export type WallChoices = z.output<typeof WallChoices>
 
+/** Schemes put away at once. */
+export const PUT_AWAY_MAX = 200
+
 /** Schemes chosen on the wall, and whether to put them away or bring them back. */
-export const PutAway = z.object({ ids: z.array(z.uuid()).min(1, 'Choose a scheme first.').max(200, 'At most 200 schemes at once.'), away: z.boolean() })
+export const PutAway = z.object({ ids: z.array(z.uuid()).min(1, 'Choose a scheme first.').max(PUT_AWAY_MAX, `At most ${PUT_AWAY_MAX} schemes at once.`), away: z.boolean() })
 export type PutAway = z.output<typeof PutAway>
 
 /** Why one of the chosen stayed as it was. */
