@@ -40,7 +40,7 @@ describe('a photo taken at the bench', () => {
     const [{ run, schemeId }, other] = [await testRun(ctx), await testRun(ctx)]
     const { ctx: stranger } = await testWorkshop()
     const send = async (as: typeof ctx, query: string) => code(await server.ask('POST', `/api/schemes/${schemeId}/photos?${query}`, { as, body: await file('white'), headers: { 'content-type': 'application/octet-stream' } }))
-    expect(await send(ctx, `runId=${run.id}&photoId=17`)).toEqual([400, 'input/invalid'])
+    expect(await send(ctx, `runId=${run.id}&photoId=17`)).toEqual([422, 'input/invalid'])
     expect(await send(ctx, `runId=${other.run.id}&photoId=${crypto.randomUUID()}`)).toEqual([404, 'run/not-found'])
     expect(await send(stranger, `photoId=${crypto.randomUUID()}`)).toEqual([404, 'scheme/not-found'])
   })
