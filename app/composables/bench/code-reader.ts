@@ -18,7 +18,7 @@ export async function codeReader(): Promise<CodeReader> {
 async function ownReader(): Promise<CodeReader | undefined> {
   const detectors = (window as { BarcodeDetector?: CodeDetectors }).BarcodeDetector
   if (!detectors) return undefined
-  const known = await detectors.getSupportedFormats().catch(() => [])
+  const known = await detectors.getSupportedFormats().catch((): string[] => [])
   const formats = FORMATS.filter(format => known.includes(format))
   if (!formats.includes('qr_code')) return undefined
   const detector = new detectors({ formats })

@@ -22,7 +22,8 @@ export function useSchemeActions(): SchemeActions {
     async create(start) {
       // The key lets a request that is sent again on a bad line start one scheme, not two.
       const scheme = await api('/api/schemes', { method: 'POST', body: start, headers: { 'idempotency-key': crypto.randomUUID() } })
-      await again()
+      // Whoever started it goes on to it; the list is read again meanwhile.
+      void again()
       return scheme
     },
     async change({ id, version }, change) {
@@ -32,7 +33,7 @@ export function useSchemeActions(): SchemeActions {
     },
     async fork(schemeId, fork) {
       const scheme = await api('/api/schemes/:schemeId/fork', { params: { schemeId }, method: 'POST', body: fork, headers: { 'idempotency-key': crypto.randomUUID() } })
-      await again()
+      void again()
       return scheme
     },
     readRevision: (schemeId, number) => api('/api/schemes/:schemeId/revisions/:number', { params: { schemeId, number } }),
