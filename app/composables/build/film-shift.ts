@@ -108,10 +108,10 @@ export function firstSeen(seen: SeenBody): ShiftState {
 
 /**
  * Takes in what is seen of the newest body. What goes on is measured from where it began, something new from what was seen last.
- * The same body seen otherwise has other paints or another blank: no doing of the hand, and a first look again.
+ * The same body seen otherwise has other paints or stands in another light: no doing of the hand. What is shown stands, and is measured anew.
  */
 export function nextSeen(state: ShiftState, seen: SeenBody, inHand: string | null): ShiftState {
-  if (seen.body === state.last.body) return firstSeen(seen)
+  if (seen.body === state.last.body) return { ...firstSeen(seen), shifts: state.shifts }
   const onward = doingBetween(state.from.body, seen.body, inHand)
   const goesOn = state.doing === null || onward === null || onward.key === state.doing.key
   const from = goesOn ? state.from : state.last

@@ -3,12 +3,9 @@ import { useDebounceFn } from '@vueuse/core'
 import { type CoatShift, firstSeen, goesOnWith, nextSeen, type ShiftState, shiftsSentence } from './film-shift'
 import { coatTitle } from './film-rows'
 import type { Build } from './use-build'
-import { useZoneColours } from '~/composables/picture/use-zone-colours'
 import { useSpoken } from '~/composables/ui/use-spoken'
 import { coatsOf } from '#shared/scheme/stack-order'
 
-/** The promise: all coats, after clear, daylight, away from the gloss. */
-const WISH = { upTo: 'all', clear: true, light: { tilt: 45 } } as const
 /** A hand that stops for so long has done what it wanted, ms. */
 const STILL_MS = 900
 
@@ -21,9 +18,8 @@ export interface FilmShift {
 }
 
 /** Follows a build: what is shown stands until something else is done, and changes only when the colours are worked out. */
-export function useFilmShift(build: Pick<Build, 'look' | 'draft' | 'coatId'>): FilmShift {
+export function useFilmShift(build: Pick<Build, 'zones' | 'draft' | 'coatId'>): FilmShift {
   const { speak } = useSpoken()
-  const zones = useZoneColours(() => import.meta.client ? build.look.value : null, WISH)
   const state = shallowRef<ShiftState | null>(null)
   const body = build.draft.body
 
@@ -37,11 +33,11 @@ export function useFilmShift(build: Pick<Build, 'look' | 'draft' | 'coatId'>): F
     if (sentence.value) speak(sentence.value)
   }, STILL_MS)
 
-  watch(zones, (seen) => {
+  watch(build.zones, (seen) => {
     if (!seen) return
     const now = { body: body.value, zones: seen }
     state.value = state.value ? nextSeen(state.value, now, build.coatId.value) : firstSeen(now)
-    if (shifts.value.length > 0) void tell()
+    if (state.value.doing && shifts.value.length > 0) void tell()
   })
   watch(body, (next) => {
     const { value } = state

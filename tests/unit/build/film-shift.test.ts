@@ -90,10 +90,13 @@ describe('what is shown', () => {
     expect(then.shifts).toEqual([])
   })
 
-  it('goes when the change is taken back, and when paints are measured anew', () => {
+  it('goes when the change is taken back, and stands in another light until something is done', () => {
     expect(nextSeen(step(4, 50), { body: body(1, 2), zones: flank([1, 80], [2, 60]) }, c(1)).shifts).toEqual([])
     const first = step(4, 50)
-    expect(nextSeen(first, { body: first.last.body, zones: flank([1, 10], [2, 10]) }, c(1)).shifts).toEqual([])
+    const dim = nextSeen(first, { body: first.last.body, zones: flank([1, 10], [2, 10]) }, c(1))
+    expect(dim.shifts).toEqual(first.shifts)
+    expect(goesOnWith(dim, passes(body(1, 2), 1, 6), c(1))).toBe(false)
+    expect(nextSeen(dim, { body: passes(body(1, 2), 1, 6), zones: flank([1, 9], [2, 10]) }, c(1)).shifts).toEqual([])
   })
 
   it('stands while the hand goes on with the same thing, and no longer', () => {
