@@ -16,7 +16,7 @@ import { openTestApplication } from './test-env.mjs'
 /** @typedef {{ needs: import('./debian-packages.mjs').DebianPackage[], hasServices: boolean, run: (ground: Ground) => Promise<Outcome> }} Step */
 
 /** No step may take longer than this, so that one that hangs is a failure and not an endless wait. */
-const LIMIT_MS = 10 * 60_000
+const LIMIT_MS = 14 * 60_000
 
 const bin = (/** @type {string} */ path) => join(ROOT, 'node_modules', path)
 
