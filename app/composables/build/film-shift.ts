@@ -99,11 +99,18 @@ export function shiftsSentence(shifts: readonly CoatShift[], titleOf: (coatId: s
 export interface SeenBody<Z extends Zone = Zone> { body: SchemeBody, zones: readonly Z[] }
 
 /** Where a painter stands between two doings: what the film looked like before the present one, and what was seen last. */
-export interface ShiftState { from: SeenBody, last: SeenBody, doing: Doing | null, shifts: readonly CoatShift[] }
+export interface ShiftState {
+  from: SeenBody
+  last: SeenBody
+  doing: Doing | null
+  shifts: readonly CoatShift[]
+  /** The body before what is shown: back at it, nothing is changed. */
+  origin: SchemeBody
+}
 
 /** The first look at a film: nothing was done yet. */
 export function firstSeen(seen: SeenBody): ShiftState {
-  return { from: seen, last: seen, doing: null, shifts: [] }
+  return { from: seen, last: seen, doing: null, shifts: [], origin: seen.body }
 }
 
 /**
@@ -111,13 +118,14 @@ export function firstSeen(seen: SeenBody): ShiftState {
  * The same body seen otherwise has other paints or stands in another light: no doing of the hand. What is shown stands, and is measured anew.
  */
 export function nextSeen(state: ShiftState, seen: SeenBody, inHand: string | null): ShiftState {
-  if (seen.body === state.last.body) return { ...firstSeen(seen), shifts: state.shifts }
+  if (seen.body === state.last.body) return { ...firstSeen(seen), shifts: state.shifts, origin: state.origin }
+  if (doingBetween(state.origin, seen.body, inHand) === null) return firstSeen(seen)
   const onward = doingBetween(state.from.body, seen.body, inHand)
   const goesOn = state.doing === null || onward === null || onward.key === state.doing.key
   const from = goesOn ? state.from : state.last
   const doing = goesOn ? onward : doingBetween(from.body, seen.body, inHand)
   const order = coatsOf(seen.body.stack).map(coat => coat.id)
-  return { from, last: seen, doing, shifts: doing ? coatShifts(from.zones, seen.zones, doing, order) : [] }
+  return { from, last: seen, doing, shifts: doing ? coatShifts(from.zones, seen.zones, doing, order) : [], origin: goesOn ? state.origin : from.body }
 }
 
 /** Whether what is shown still belongs to what is being done: the same doing, further on. */
