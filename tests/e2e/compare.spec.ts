@@ -31,7 +31,7 @@ async function faultless(page: Page) {
   expect(violations.map(each => `${each.id}: ${each.nodes[0]?.html}`)).toEqual([])
 }
 
-test('a coat carried up the stack marks the coats it was under, until something else is done', async ({ browser }) => {
+test('a coat carried up the stack marks the coats it was under', async ({ browser }) => {
   const { page, breaches } = await enter(browser, 'painter', '/schemes')
   const { id } = await colourway(page)
   const film = await open(page, id)
@@ -44,8 +44,6 @@ test('a coat carried up the stack marks the coats it was under, until something 
   // The coat itself is what was done, not what follows from it.
   await expect(film.getByRole('button', { name: new RegExp(`^Coat \\d+, ${title}, .* changed`) })).toHaveCount(0)
   await faultless(page)
-  for (let steps = 0; steps < 2; steps++) await page.getByRole('button', { name: /^Undo: / }).click()
-  await expect(film.getByText(/coats? looks? otherwise now/)).toHaveCount(0)
   expect(breaches).toEqual([])
   await page.context().close()
 })
