@@ -1,5 +1,6 @@
 // `npm test`: sets up what is missing, runs every check on services of its own, and sums up in the last line.
-// `node scripts/test.mjs unit api` runs some steps only: lint, types, unit, reference, build, api, e2e.
+// `node scripts/test.mjs unit api` runs some steps only: lint, types, unit, reference, build, api, e2e, desk.
+// `desk` is run when it is asked for: long walks at the desk, for whoever changes it.
 import { mkdtempSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
@@ -13,15 +14,15 @@ import { untilStopped } from './lib/until-stopped.mjs'
 
 // Two lanes for two cores; the browser comes last and has the machine to itself, since it waits for what it sees.
 const LANES = [['build', 'api'], ['lint', 'types', 'unit', 'reference']]
-const ALONE = ['e2e']
+const ALONE = ['e2e', 'desk']
 /** Steps that are of no use without another one. */
-const FIRST = /** @type {Record<string, string>} */ ({ api: 'build', e2e: 'build' })
+const FIRST = /** @type {Record<string, string>} */ ({ api: 'build', e2e: 'build', desk: 'build' })
 
 function chosenSteps() {
   const asked = process.argv.slice(2)
   const unknown = asked.filter(name => !STEPS[name])
   if (unknown.length > 0) throw new Halt(`There is no step ${unknown.join(', ')}.`, `Steps are: ${Object.keys(STEPS).join(', ')}.`)
-  if (asked.length === 0) return new Set(Object.keys(STEPS))
+  if (asked.length === 0) return new Set(Object.keys(STEPS).filter(name => name !== 'desk'))
   return new Set(asked.flatMap(name => [FIRST[name] ?? name, name]))
 }
 

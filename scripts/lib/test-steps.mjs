@@ -52,13 +52,13 @@ async function buildStep() {
   }
 }
 
-/** @param {Ground} ground @returns {Promise<Outcome>} */
-async function browserStep(ground) {
+/** @param {'e2e' | 'desk'} project @returns {Step['run']} */
+const browser = project => async (ground) => {
   const { services, closing, reports } = ground
   if (!services) throw new Error('Browser tests need the services')
   const application = await openTestApplication(services, closing)
-  const report = join(reports, 'e2e.json')
-  const { code, output } = await run(process.execPath, [bin('@playwright/test/cli.js'), 'test', '--config=playwright.config.ts', '--reporter=list,json'], options(ground, {
+  const report = join(reports, `${project}.json`)
+  const { code, output } = await run(process.execPath, [bin('@playwright/test/cli.js'), 'test', '--config=playwright.config.ts', `--project=${project}`, '--reporter=list,json'], options(ground, {
     ...application.env,
     PLAYWRIGHT_JSON_OUTPUT_FILE: report,
   }))
@@ -75,7 +75,8 @@ export const STEPS = {
   reference: { needs: JUDGES, hasServices: false, run: vitest('reference') },
   build: { needs: [], hasServices: false, run: buildStep },
   api: { needs: [POSTGRESQL, AWSCLI, ...JUDGES], hasServices: true, run: vitest('api') },
-  e2e: { needs: [POSTGRESQL, CHROMIUM, FIREFOX, ...JUDGES], hasServices: true, run: browserStep },
+  e2e: { needs: [POSTGRESQL, CHROMIUM, FIREFOX, ...JUDGES], hasServices: true, run: browser('e2e') },
+  desk: { needs: [POSTGRESQL, CHROMIUM, ...JUDGES], hasServices: true, run: browser('desk') },
 }
 
 /**
