@@ -31,7 +31,7 @@ async function faultless(page: Page) {
   expect(violations.map(each => `${each.id}: ${each.nodes[0]?.html}`)).toEqual([])
 }
 
-test('a coat carried up the stack marks the coats it was under', async ({ browser }) => {
+test('a coat carried up the stack marks the coats it was under, until something else is done', async ({ browser }) => {
   const { page, breaches } = await enter(browser, 'painter', '/schemes')
   const { id } = await colourway(page)
   const film = await open(page, id)
@@ -44,11 +44,13 @@ test('a coat carried up the stack marks the coats it was under', async ({ browse
   // The coat itself is what was done, not what follows from it.
   await expect(film.getByRole('button', { name: new RegExp(`^Coat \\d+, ${title}, .* changed`) })).toHaveCount(0)
   await faultless(page)
+  for (let steps = 0; steps < 2; steps++) await page.getByRole('button', { name: /^Undo: / }).click()
+  await expect(film.getByText(/coats? looks? otherwise now/)).toHaveCount(0)
   expect(breaches).toEqual([])
   await page.context().close()
 })
 
-test('an end of a mask’s bracket is carried by keys; what cannot be is explained', async ({ browser }) => {
+test('an end of a mask’s bracket is carried by keys and by the pointer; what cannot be is explained', async ({ browser }) => {
   const { page } = await enter(browser, 'painter', '/schemes')
   const { id } = await colourway(page)
   const film = await open(page, id)
@@ -56,6 +58,11 @@ test('an end of a mask’s bracket is carried by keys; what cannot be is explain
   const name = (await lift.getAttribute('aria-label'))!.replace(/^Move where (.*) is lifted$/, '$1')
   const fit = film.getByRole('button', { name: `Move where ${name} is fitted`, exact: true })
   const before = await stackOf(page, id)
+  const covered = async () => {
+    const stack = await stackOf(page, id)
+    const lifts = stack.findIndex(item => item.act === 'lift' && item.maskId === before.find(each => each.act === 'lift')?.maskId)
+    return lifts
+  }
   const saved = () => expect(page.getByText(/^Saved/)).toBeVisible()
 
   await fit.focus()
@@ -68,6 +75,15 @@ test('an end of a mask’s bracket is carried by keys; what cannot be is explain
   await saved()
   expect(await stackOf(page, id)).toEqual(before)
 
+  const [from, target] = [(await lift.boundingBox())!, (await fit.boundingBox())!]
+  await page.mouse.move(from.x + from.width / 2, from.y + from.height / 2)
+  await page.mouse.down()
+  await page.mouse.move(from.x + from.width / 2, (from.y + target.y) / 2, { steps: 8 })
+  await page.mouse.move(from.x + from.width / 2, target.y + target.height + 60, { steps: 8 })
+  await page.mouse.up()
+  // Below its own fit: refused as well, whichever way it came there.
+  await expect(page.getByText(/cannot be lifted before it is fitted\. Carry its fit down first\./).first()).toBeVisible()
+  expect(await covered()).toBe(before.findIndex(item => item.act === 'lift'))
   await page.context().close()
 })
 
